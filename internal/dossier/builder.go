@@ -1,0 +1,200 @@
+package dossier
+
+import (
+	"fmt"
+	"maps"
+	"slices"
+
+	"hearduty/internal/calendar"
+	"hearduty/internal/record"
+)
+
+// Builder makes the dossiers of one site under one bundle. It may be used by several goroutines once made.
+type Builder struct {
+	*Ground
+	Place   Place
+	Choices map[string]any
+}
+
+// Ground is what the dossiers of all sites under one bundle have in common: the registers, and the exposure
+// of every group over time.
+type Ground struct {
+	Registers *Registers
+	Measures  Measures
+	Law       Law
+	AsOf      Date
+
+	channels  channels
+	levels    []string // names of the exposure levels, in order
+	histories map[string]*history
+}
+
+// NewGround works out the exposure of every group.
+func NewGround(r *Registers, m Measures, law Law, asOf Date) *Ground {
+	g := &Ground{
+		Registers: r, Measures: m, Law: law, AsOf: asOf, channels: newChannels(m.Exposure.Channels),
+		levels: slices.Sorted(maps.Keys(m.Exposure.Levels)), histories: map[string]*history{},
+	}
+	ids := map[string]bool{}
+	for id := range r.Groups {
+		ids[id] = true
+	}
+	for id := range r.byGroup {
+		ids[id] = true
+	}
+	for id := range r.tasksOf {
+		ids[id] = true
+	}
+	for id := range ids {
+		group, area := r.Groups[id], ""
+		if group != nil {
+			area = group.Area
+		}
+		g.histories[id] = g.channels.historyOf(g.channels.resultsOf(r, group, id, asOf), r.eventsOf(id, area, asOf))
+	}
+	return g
+}
+
+// Builder makes the builder of a site.
+func (g *Ground) Builder(place Place, choices map[string]any) *Builder {
+	return &Builder{Ground: g, Place: place, Choices: choices}
+}
+
+func (b *Builder) common(id string) Common {
+	return Common{ID: id, Site: b.Place, AsOf: b.AsOf, Choices: b.Choices}
+}
+
+// spell marks a spell as current if the as-of day lies in it.
+func (b *Builder) spell(s calendar.Spell) Spell {
+	return Spell{From: s.From, To: s.To, Current: s.Contains(b.AsOf)}
+}
+
+func (b *Builder) spells(list []calendar.Spell) []Spell {
+	out := make([]Spell, len(list))
+	for i, s := range list {
+		out[i] = b.spell(s)
+	}
+	return out
+}
+
+// verdict is yes, no, or not known.
+type verdict = record.Answer
+
+// reaches says whether a dose reaches an exposure level on a day. Where the level's parameter has no value
+// on that day, it is not known.
+func (b *Builder) reaches(level string, d dose, day Date) (verdict, string) {
+	t := b.Measures.Exposure.Levels[level]
+	name := t.AtLeast + t.Above
+	limit, ok := b.Law.Number(name, day)
+	if !ok {
+		return record.Unanswered, fmt.Sprintf("the bundle has no value of %s on %s", name, day)
+	}
+	over := func(v float64) bool {
+		if t.Above != "" {
+			return v > limit+tolerance
+		}
+		return v >= limit-tolerance
+	}
+	switch {
+	case over(d.low):
+		return record.Yes, ""
+	case !over(d.high):
+		return record.No, ""
+	}
+	return record.Unanswered, ""
+}
+
+// tolerance absorbs the rounding of binary arithmetic in doses worked out from tasks, percent.
+const tolerance = 1e-9
+
+// levelSpells divides stretches by exposure level: where the level is reached, and where that is not known.
+func (b *Builder) levelSpells(pieces []stretch) (map[string][]Spell, map[string][]Open, map[string][]calendar.Spell) {
+	exposed, unknown, plain := map[string][]Spell{}, map[string][]Open{}, map[string][]calendar.Spell{}
+	for _, level := range b.levels {
+		channel := b.channels.index(b.Measures.Exposure.Levels[level].Channel)
+		name := b.Measures.Exposure.Levels[level].AtLeast + b.Measures.Exposure.Levels[level].Above
+		var yes []calendar.Spell
+		open := []Open{}
+		for _, p := range splitAt(pieces, b.Law.Days(name)) {
+			if p.From > b.AsOf {
+				continue
+			}
+			answer, why := b.reaches(level, p.doses[channel], max(p.From, 1))
+			switch answer {
+			case record.Yes:
+				yes = append(yes, p.Spell)
+			case record.Unanswered:
+				reason := p.reason
+				if why != "" {
+					reason = why
+				}
+				if reason == "" {
+					reason = "the dose on this channel is known only within bounds"
+				}
+				open = appendOpen(open, Open{From: p.From, To: p.To, Reason: reason})
+			}
+		}
+		plain[level] = calendar.Union(yes)
+		exposed[level] = b.spells(plain[level])
+		unknown[level] = open
+	}
+	return exposed, unknown, plain
+}
+
+// appendOpen adds an open stretch, joined to the one before where they touch and have the same reason.
+func appendOpen(list []Open, o Open) []Open {
+	if n := len(list); n > 0 && list[n-1].To == o.From && list[n-1].Reason == o.Reason {
+		list[n-1].To = o.To
+		return list
+	}
+	return append(list, o)
+}
+
+// splitAt cuts stretches at days on which the law changes.
+func splitAt(pieces []stretch, days []Date) []stretch {
+	var out []stretch
+	for _, p := range pieces {
+		for _, day := range days {
+			if p.Contains(day) && day > p.From {
+				first := p
+				first.To = day
+				out = append(out, first)
+				p.From = day
+			}
+		}
+		out = append(out, p)
+	}
+	return out
+}
+
+// exposures writes stretches as the dossier shows them.
+func (b *Builder) exposures(pieces []stretch, refs Refs) []Exposure {
+	out := []Exposure{}
+	enrolling := b.channels.index(b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols].Channel)
+	for _, p := range pieces {
+		if p.From > b.AsOf {
+			continue
+		}
+		e := Exposure{From: p.From, To: p.To, Group: p.group, Own: p.own, Channels: map[string]Level{}, Note: p.note}
+		if p.reason != "" {
+			e.Note = p.reason
+		}
+		for i, name := range b.channels.names {
+			sum := ""
+			if p.src[i] != nil {
+				sum = p.src[i].sums[i]
+			}
+			e.Channels[name] = b.channels.level(i, p.doses[i], sum)
+		}
+		if src := p.src[enrolling]; src != nil {
+			e.Ref, e.MeasuredOn = refs.Of(src.rec), src.day
+		}
+		out = append(out, e)
+	}
+	return out
+}
+
+// link points to a record on a day; a nil record gives no link.
+func link(refs Refs, rec record.Record, day Date) *Link {
+	return &Link{Date: day, Ref: refs.Of(rec)}
+}

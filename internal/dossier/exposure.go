@@ -1,0 +1,249 @@
+package dossier
+
+import (
+	"fmt"
+	"slices"
+	"strconv"
+	"strings"
+
+	"hearduty/internal/calendar"
+	"hearduty/internal/record"
+)
+
+// step is a group's exposure from a day on, until the next step.
+type step struct {
+	from   Date
+	doses  []dose
+	src    []*result // the result that decides, one a channel
+	note   string
+	reason string // why the exposure is not known, if it is not
+}
+
+// event is a change of a group's noise: of its process, or by a control that was put in place.
+type event struct {
+	day    Date
+	raises bool // whether exposure may have risen
+	what   string
+}
+
+// history is the exposure of a group over time.
+type history struct {
+	results []*result // oldest first
+	events  []event   // oldest first
+	steps   []step    // oldest first; the first begins before all days
+}
+
+// eventsOf gathers the changes of a group and its area, and the controls put in place there.
+func (r *Registers) eventsOf(id, area string, asOf Date) []event {
+	var out []event
+	for _, c := range r.changesOf(id, area, asOf) {
+		out = append(out, event{c.Date, c.RaisesExposure != "no", "change " + c.ChangeID + " of " + c.Date.String()})
+	}
+	for _, c := range r.controlsOf(id, area, asOf) {
+		if c.InstalledOn.Known() && c.InstalledOn <= asOf {
+			out = append(out, event{c.InstalledOn, false, "control put in place on " + c.InstalledOn.String()})
+		}
+	}
+	slices.SortStableFunc(out, func(a, b event) int { return int(a.day) - int(b.day) })
+	return out
+}
+
+func (r *Registers) changesOf(id, area string, asOf Date) []*record.Change {
+	var out []*record.Change
+	for _, c := range r.Changes {
+		if c.Date <= asOf && (c.Group == id || c.Group == "" && area != "" && c.Area == area) {
+			out = append(out, c)
+		}
+	}
+	return out
+}
+
+func (r *Registers) controlsOf(id, area string, asOf Date) []*record.Control {
+	var out []*record.Control
+	for _, c := range r.Controls {
+		if c.Date <= asOf && (c.Group == id || c.Group == "" && area != "" && c.Area == area) {
+			out = append(out, c)
+		}
+	}
+	return out
+}
+
+// resultsOf gathers the determinations of a group's exposure: its full-shift measurements and, where tasks
+// describe its day, the day worked out from them.
+func (c channels) resultsOf(r *Registers, group *record.Group, id string, asOf Date) []*result {
+	var out []*result
+	rows := r.measurementsOf(group, id)
+	for len(rows) > 0 {
+		n := 1
+		for n < len(rows) && rows[n].MeasurementID == rows[0].MeasurementID {
+			n++
+		}
+		if rows[0].Type != "task" && rows[0].Date <= asOf {
+			out = append(out, c.ofMeasurement(rows[:n]))
+		}
+		rows = rows[n:]
+	}
+	tasks := r.tasksOf[id]
+	for len(tasks) > 0 {
+		n := 1
+		for n < len(tasks) && tasks[n].Date == tasks[0].Date {
+			n++
+		}
+		if tasks[0].Date <= asOf {
+			out = append(out, c.ofTasks(tasks[:n], r.levelOf))
+		}
+		tasks = tasks[n:]
+	}
+	slices.SortStableFunc(out, func(a, b *result) int { return int(a.day) - int(b.day) })
+	return out
+}
+
+// levelOf gives the level that a task's sample names: a number in dBA, or the id of a measurement.
+func (r *Registers) levelOf(sample string) (float64, bool) {
+	for _, m := range r.Measurements {
+		if m.MeasurementID == sample && m.LAeqDBA.Known {
+			return m.LAeqDBA.Value, true
+		}
+	}
+	level, err := strconv.ParseFloat(strings.TrimSpace(sample), 64)
+	return level, err == nil && level >= 0 && level <= 150
+}
+
+// historyOf works out a group's exposure over time:
+//   - on a day, the highest of the results since the latest change counts;
+//   - after a change that may have raised exposure and before the next result, the exposure is at least
+//     what it was;
+//   - after another change it stays what it was until measured again;
+//   - before the first result that result is taken backwards, unless a change that may have raised
+//     exposure lies between.
+func (c channels) historyOf(results []*result, events []event) *history {
+	h := &history{results: results, events: events}
+	days := []Date{0}
+	for _, r := range results {
+		days = append(days, r.day)
+	}
+	for _, e := range events {
+		days = append(days, e.day)
+	}
+	slices.Sort(days)
+	for _, day := range slices.Compact(days) {
+		h.steps = append(h.steps, h.step(c, day))
+	}
+	return h
+}
+
+func (h *history) step(c channels, day Date) step {
+	s := step{from: day, doses: make([]dose, len(c.names)), src: make([]*result, len(c.names))}
+	for i := range s.doses {
+		s.doses[i], s.src[i], s.note, s.reason = h.doseOn(i, day)
+	}
+	return s
+}
+
+// doseOn gives what is known of the dose on a channel on a day, the result that decides, a note on how it
+// was taken, and where it is not known, the reason.
+func (h *history) doseOn(channel int, day Date) (d dose, src *result, note, reason string) {
+	var last event
+	for _, e := range h.events {
+		if e.day <= day {
+			last = e
+		}
+	}
+	if d, src = h.highest(channel, last.day, day); src != nil {
+		return d, src, "", ""
+	}
+	if last.day.Known() {
+		if before, beforeSrc, _, _ := h.doseOn(channel, last.day-1); beforeSrc != nil && beforeSrc.day < last.day {
+			if last.raises {
+				return dose{before.low, unknownDose.high}, beforeSrc, "at least the value before the " + last.what, "not measured since the " + last.what + ", which may have raised exposure"
+			}
+			return before, beforeSrc, "value before the " + last.what + "; not measured since", ""
+		}
+	}
+	for _, r := range h.results {
+		if r.day <= day || !r.usable(channel) {
+			continue
+		}
+		for _, e := range h.events {
+			if e.day > day && e.day <= r.day && e.raises {
+				return unknownDose, nil, "", fmt.Sprintf("the first measurement is of %s, and the %s, which may have raised exposure, lies between", r.day, e.what)
+			}
+		}
+		d, src = h.highest(channel, r.day, r.day)
+		return d, src, "taken backwards from the first measurement, of " + r.day.String(), ""
+	}
+	return unknownDose, nil, "", h.why()
+}
+
+// highest gives the highest dose among the usable results from one day to another.
+func (h *history) highest(channel int, from, to Date) (d dose, src *result) {
+	for _, r := range h.results {
+		if r.day < from || r.day > to || !r.usable(channel) {
+			continue
+		}
+		if src == nil {
+			d, src = r.doses[channel], r
+			continue
+		}
+		if r.doses[channel].low > d.low {
+			src = r
+		}
+		d = higher(d, r.doses[channel])
+	}
+	return d, src
+}
+
+// why says why no result tells the exposure.
+func (h *history) why() string {
+	if len(h.results) == 0 {
+		return "there is no full-shift measurement"
+	}
+	var notes []string
+	for _, r := range h.results {
+		for _, n := range r.notes {
+			if !slices.Contains(notes, n) {
+				notes = append(notes, n)
+			}
+		}
+	}
+	if len(notes) == 0 {
+		return "no measurement gives the dose"
+	}
+	return strings.Join(notes, "; ")
+}
+
+// on gives the step in force on a day.
+func (h *history) on(day Date) *step {
+	for i := len(h.steps) - 1; i > 0; i-- {
+		if h.steps[i].from <= day {
+			return &h.steps[i]
+		}
+	}
+	return &h.steps[0]
+}
+
+// stretch is a piece of a subject's time with one exposure.
+type stretch struct {
+	calendar.Spell
+	group  string
+	doses  []dose
+	src    []*result
+	own    bool
+	note   string
+	reason string
+}
+
+// during gives the steps of a group's history within a spell.
+func (h *history) during(spell calendar.Spell, group string) []stretch {
+	var out []stretch
+	for i, s := range h.steps {
+		piece := calendar.Spell{From: s.from}
+		if i+1 < len(h.steps) {
+			piece.To = h.steps[i+1].from
+		}
+		if piece = piece.Intersect(spell); !piece.Empty() {
+			out = append(out, stretch{Spell: piece, group: group, doses: s.doses, src: s.src, note: s.note, reason: s.reason})
+		}
+	}
+	return out
+}

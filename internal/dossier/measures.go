@@ -1,0 +1,91 @@
+package dossier
+
+import (
+	"hearduty/internal/audiometry"
+	"hearduty/internal/calendar"
+)
+
+// Measures say how a bundle's facts are derived from records: which dose channel counts, which
+// frequencies make a shift, whose opinion the law accepts. They are the bundle's measures/data.yaml.
+type Measures struct {
+	Exposure   ExposureMeasures   `json:"exposure" doc:"how noise exposure is taken"`
+	Hearing    HearingMeasures    `json:"hearing" doc:"how hearing tests are compared"`
+	Protection ProtectionMeasures `json:"protection" doc:"how the attenuation of protectors is estimated"`
+	Training   TrainingMeasures   `json:"training" doc:"how training sessions are taken together"`
+}
+
+// ExposureMeasures say how noise exposure is taken.
+type ExposureMeasures struct {
+	Channels map[string]Channel   `json:"channels" doc:"dose settings, by name"`
+	Levels   map[string]Threshold `json:"levels" doc:"exposure levels of the law, by name"`
+	Enrols   string               `json:"enrols" doc:"name of the level that puts a worker into the program"`
+	Several  string               `json:"several" enum:"highest" doc:"which result counts where a group has several since its latest change: the highest"`
+	Note     string               `json:"note,omitempty" doc:"reading of the law behind these choices"`
+}
+
+// Channel is one setting of a noise dosimeter.
+type Channel struct {
+	CriterionDB float64 `json:"criterion_db" doc:"criterion level for 8 h, dBA"`
+	ExchangeDB  float64 `json:"exchange_db" doc:"exchange rate, dB"`
+	ThresholdDB float64 `json:"threshold_db,omitempty" doc:"integration threshold, dBA; levels at it count"`
+	UpperDB     float64 `json:"upper_db,omitempty" doc:"upper end of the range to be integrated, dBA"`
+	Cite        string  `json:"cite" doc:"paragraph"`
+}
+
+// Threshold is an exposure level of the law: a channel whose dose reaches, or exceeds, a parameter.
+type Threshold struct {
+	Channel string `json:"channel" doc:"name of the channel"`
+	AtLeast string `json:"at_least,omitempty" doc:"parameter that the dose reaches, percent"`
+	Above   string `json:"above,omitempty" doc:"parameter that the dose exceeds, percent"`
+}
+
+// HearingMeasures say how hearing tests are compared.
+type HearingMeasures struct {
+	Required      []int          `json:"required" doc:"frequencies that each test of each ear must hold, Hz"`
+	Shift         ShiftMeasure   `json:"shift" doc:"the threshold shift of the law"`
+	Recordable    *RecordMeasure `json:"recordable,omitempty" doc:"the hearing level of the recording rule"`
+	AgeCorrection *AgeMeasure    `json:"age_correction,omitempty" doc:"the age correction that the law allows"`
+	Professionals []string       `json:"professionals" doc:"professions that may review tests and revise baselines"`
+	Physicians    []string       `json:"physicians" doc:"professions whose finding lifts the follow-up of a shift"`
+	Licensed      []string       `json:"licensed" doc:"professions whose finding lifts the entry in the log"`
+}
+
+// ShiftMeasure is a threshold shift: an average change, over frequencies, against the baseline.
+type ShiftMeasure struct {
+	Frequencies []int  `json:"frequencies" doc:"frequencies averaged, Hz"`
+	AtLeast     string `json:"at_least" doc:"parameter that the average change reaches, dB"`
+	Retest      string `json:"retest" doc:"parameter: time within which a retest may stand in for the test"`
+}
+
+// RecordMeasure is the hearing level of the recording rule, over the frequencies of the shift.
+type RecordMeasure struct {
+	AtLeast string `json:"at_least" doc:"parameter that the average hearing level reaches, dB HL"`
+}
+
+// AgeMeasure is an age correction by table and the choice that turns it on.
+type AgeMeasure struct {
+	Choice string `json:"choice" doc:"name of the choice that turns it on"`
+	Cite   string `json:"cite,omitempty" doc:"paragraph"`
+	audiometry.AgeTable
+}
+
+// ProtectionMeasures say how the attenuation of protectors is estimated.
+type ProtectionMeasures struct {
+	Rating  string `json:"rating" enum:"nrr" doc:"rating that is used"`
+	Channel string `json:"channel" doc:"channel whose average is reduced"`
+}
+
+// TrainingMeasures say how training sessions are taken together.
+type TrainingMeasures struct {
+	TopicsOver calendar.Interval `json:"topics_over" doc:"time before the latest session over which topics add up"`
+}
+
+// Law answers what a parameter of the bundle is on a day.
+type Law interface {
+	// Number gives the value in force on the day; false if there is none.
+	Number(name string, day calendar.Date) (float64, bool)
+	// Interval gives the interval in force on the day; false if there is none.
+	Interval(name string, day calendar.Date) (calendar.Interval, bool)
+	// Days gives the days on which the value changes.
+	Days(name string) []calendar.Date
+}

@@ -1,0 +1,37 @@
+package dossier
+
+// Kinds lists the subject kinds.
+var Kinds = []string{KindWorker, KindGroup, KindSite, KindInstrument, KindRoom, KindTester}
+
+// SeriesOf lists, by subject kind, the series of records by which an obligation may be fulfilled.
+//
+//	audiogram.valid      tests with a result, not invalidated; a retest in time is merged into its test
+//	audiogram.baseline   the baseline audiogram
+//	training.any         training sessions
+//	training.protectors  sessions that covered protectors
+//	protector.issue      protectors handed over
+//	protector.worn       checks that found protectors worn
+//	measurement.any      noise measurements
+//	calibration.*        checks of the kind; an exhaustive calibration is also an acoustic one
+//	test.use             hearing tests made with the instrument, in the room, by the tester
+//	survey.any           surveys of a test room
+var SeriesOf = map[string][]string{
+	KindWorker:     {"audiogram.valid", "audiogram.baseline", "training.any", "training.protectors", "protector.issue", "protector.worn"},
+	KindGroup:      {"measurement.any"},
+	KindSite:       {},
+	KindInstrument: {"calibration.acoustic", "calibration.exhaustive", "calibration.functional", "test.use"},
+	KindRoom:       {"survey.any", "test.use"},
+	KindTester:     {"test.use"},
+}
+
+// File is a dossier as the judge takes it: the Rego input, the series by name, and where each record
+// that it refers to was read.
+type File struct {
+	Kind   string
+	ID     string
+	Site   string
+	Input  any               // *Worker, *Group, *Site, *Instrument, *Room or *Tester
+	Series map[string][]Link // oldest first, none after the as-of day
+	Uses   []Tally           // days of use, oldest first: the series test.use with its counts
+	Refs   Refs
+}

@@ -1,0 +1,211 @@
+package dossier
+
+import (
+	"cmp"
+	"maps"
+	"slices"
+	"sync"
+
+	"hearduty/internal/record"
+)
+
+// Usage gathers, worker by worker, what the dossiers of instruments, rooms, testers, groups and the site
+// need to know of workers' records. Add may be called by several goroutines; the outcome does not depend
+// on their order.
+type Usage struct {
+	mu          sync.Mutex
+	Workers     int // employed on the as-of day
+	EnrolledNow int
+	Enrolled    int // ever
+	audiometers map[string]*used
+	rooms       map[string]*used
+	testers     map[string]*used
+	members     map[string]int // by group
+	holders     map[string]int // by group
+	loose       map[string][]*record.Measurement
+	logs        map[int]*logYear
+	missing     map[string]Dangling
+	missingRec  map[string]record.Record
+}
+
+// used is the use of one instrument, room or tester.
+type used struct {
+	tests, workers int
+	days           map[Date]*useDay
+}
+
+// useDay is one day of use.
+type useDay struct {
+	tests, workers int
+	first          *record.Audiogram // the first by id
+}
+
+type logYear struct {
+	entries int
+	latest  *record.FollowUp
+}
+
+// NewUsage makes an empty gathering.
+func NewUsage() *Usage {
+	return &Usage{
+		audiometers: map[string]*used{}, rooms: map[string]*used{}, testers: map[string]*used{},
+		members: map[string]int{}, holders: map[string]int{}, loose: map[string][]*record.Measurement{},
+		logs: map[int]*logYear{}, missing: map[string]Dangling{}, missingRec: map[string]record.Record{},
+	}
+}
+
+// Add takes the records of one worker whose dossier was made at the builder's site.
+func (u *Usage) Add(b *Builder, w *WorkerRecords, d *Worker) {
+	u.mu.Lock()
+	defer u.mu.Unlock()
+	employed := false
+	for _, s := range d.Employed {
+		employed = employed || s.Current
+	}
+	if employed {
+		u.Workers++
+	}
+	if len(d.Enrolled) > 0 {
+		u.Enrolled++
+	}
+	for _, s := range d.Enrolled {
+		if s.Current {
+			u.EnrolledNow++
+		}
+	}
+	u.addTests(b, w)
+	u.addGroups(b, w, d, employed)
+	u.addLog(b, w)
+	u.addMissing(b, w)
+}
+
+// here says whether a day of a worker counts at the builder's site: the worker was employed there, or at
+// no other site.
+func (b *Builder) here(w *WorkerRecords, day Date) bool {
+	elsewhere := false
+	for _, e := range w.Employments {
+		if employment(e).Contains(day) {
+			if e.Site == b.Place.ID {
+				return true
+			}
+			elsewhere = true
+		}
+	}
+	return !elsewhere
+}
+
+func (u *Usage) addTests(b *Builder, w *WorkerRecords) {
+	seen := map[*used]map[Date]bool{}
+	for _, a := range until(w.Audiograms, b.AsOf, func(a *record.Audiogram) Date { return a.Date }) {
+		if !b.here(w, a.Date) {
+			continue
+		}
+		for _, place := range []struct {
+			table map[string]*used
+			id    string
+		}{{u.audiometers, a.AudiometerID}, {u.rooms, a.RoomID}, {u.testers, a.TesterID}} {
+			use := place.table[place.id]
+			if use == nil {
+				use = &used{days: map[Date]*useDay{}}
+				place.table[place.id] = use
+			}
+			day := use.days[a.Date]
+			if day == nil {
+				day = &useDay{first: a}
+				use.days[a.Date] = day
+			}
+			use.tests++
+			day.tests++
+			if a.AudiogramID < day.first.AudiogramID {
+				day.first = a
+			}
+			if seen[use] == nil {
+				seen[use] = map[Date]bool{}
+				use.workers++
+			}
+			if !seen[use][a.Date] {
+				seen[use][a.Date] = true
+				day.workers++
+			}
+		}
+	}
+}
+
+func (u *Usage) addGroups(b *Builder, w *WorkerRecords, d *Worker, employed bool) {
+	for _, a := range w.Assignments {
+		if employed && inclusive(a.From, a.To).Contains(b.AsOf) {
+			u.members[a.Group]++
+			if d.Protection != nil {
+				u.holders[a.Group]++
+			}
+		}
+	}
+	for _, m := range until(w.Measurements, b.AsOf, func(m *record.Measurement) Date { return m.Date }) {
+		if !b.here(w, m.Date) {
+			continue
+		}
+		group := ""
+		for _, a := range w.Assignments {
+			if inclusive(a.From, a.To).Contains(m.Date) {
+				group = a.Group
+			}
+		}
+		u.loose[group] = append(u.loose[group], m)
+	}
+}
+
+func (u *Usage) addLog(b *Builder, w *WorkerRecords) {
+	for _, f := range until(w.FollowUps, b.AsOf, func(f *record.FollowUp) Date { return f.Date }) {
+		if f.Type != "log_entry" || !b.here(w, f.Date) {
+			continue
+		}
+		year := u.logs[f.Date.Year()]
+		if year == nil {
+			year = &logYear{latest: f}
+			u.logs[f.Date.Year()] = year
+		}
+		year.entries++
+		if cmp.Or(cmp.Compare(f.Date, year.latest.Date), -compareOrigin(f, year.latest)) > 0 {
+			year.latest = f
+		}
+	}
+}
+
+func (u *Usage) addMissing(b *Builder, w *WorkerRecords) {
+	for _, n := range until(w.Notices, b.AsOf, func(n *record.Notice) Date { return n.Date }) {
+		id := n.MeasurementID
+		if id == "" || b.Registers.measurementID[id] || !b.here(w, n.Date) ||
+			slices.ContainsFunc(w.Measurements, func(m *record.Measurement) bool { return m.MeasurementID == id }) {
+			continue
+		}
+		before, ok := u.missing[id]
+		if !ok || cmp.Or(cmp.Compare(n.Date, before.Date), -compareOrigin(n, u.missingRec[id])) > 0 {
+			u.missing[id] = Dangling{Link: Link{Date: n.Date}, ID: id}
+			u.missingRec[id] = n
+		}
+	}
+}
+
+// sortedDays lists the days of use in order.
+func (u *used) sortedDays() []Date {
+	return slices.Sorted(maps.Keys(u.days))
+}
+
+// link points to the first test of a day.
+func (u *used) link(refs Refs, day Date) Link {
+	return Link{Date: day, Ref: refs.Of(u.days[day].first)}
+}
+
+// Tally counts what happened on a day: hearing tests, and workers tested.
+type Tally struct {
+	Date           Date
+	Tests, Workers int
+}
+
+func (u *used) tallies() []Tally {
+	var out []Tally
+	for _, day := range u.sortedDays() {
+		out = append(out, Tally{day, u.days[day].tests, u.days[day].workers})
+	}
+	return out
+}

@@ -1,0 +1,220 @@
+package dossier
+
+import (
+	"slices"
+
+	"hearduty/internal/calendar"
+	"hearduty/internal/record"
+)
+
+// Worker makes the dossier of a worker at the builder's site. Tests, notices and so on count at this site
+// unless the worker was employed at another site on the day. It returns nil for a worker who was not
+// employed at the site by the as-of day.
+func (b *Builder) Worker(w *WorkerRecords) *File {
+	employed := employedAt(b.Place.ID, w.Employments)
+	employed = slices.DeleteFunc(employed, func(s calendar.Spell) bool { return s.From > b.AsOf })
+	if len(employed) == 0 {
+		return nil
+	}
+	refs := NewRefs()
+	d := &Worker{Common: b.common(w.ID), Employed: b.spells(employed)}
+	for _, e := range w.Employments {
+		if e.Site == b.Place.ID && e.HiredOn <= b.AsOf {
+			d.JobTitle, d.OnRoll = e.JobTitle, e.InProgram
+			refs.Of(e)
+		}
+	}
+	pieces := b.timeline(w, employed)
+	d.Exposures = b.exposures(pieces, refs)
+	var plain map[string][]calendar.Spell
+	d.Exposed, d.ExposureUnknown, plain = b.levelSpells(pieces)
+	enrolled := b.perEmployment(plain[b.Measures.Exposure.Enrols], employed)
+	_, enrolledNow := calendar.Find(enrolled, b.AsOf)
+
+	h := b.hearing(w, refs, enrolled)
+	limit := func(day Date) record.Answer { return b.limitOn(pieces, day) }
+	course := h.course(limit)
+	d.Baseline = h.baselineFacts(len(enrolled) > 0)
+	d.Audiograms = h.audiograms(course.compared, func(t *test) []string { return b.recordLacks(t, h, d.JobTitle, pieces) })
+	d.Shifts = h.shifts(course, enrolledNow, func(day Date) bool { return len(atHand(w.Issues, day)) > 0 })
+	d.AfterShift = b.spells(calendar.Intersect(course.afterShift(), enrolled))
+	d.Lapsed, d.Persistent = emptyNotNil(course.lapsed), emptyNotNil(course.persisted)
+	d.Recordables, d.Revisions, d.MarkedLater, d.Dangling = h.recordables(course), h.revisions(), h.markedLater(), h.dangling()
+
+	d.Enrolled = b.enrolled(w, h, enrolled, refs)
+	d.Results = b.results(w, pieces, refs)
+	now := stretchOn(pieces, b.AsOf)
+	d.Protection = b.protection(w, now, h, refs)
+	d.Wear = b.wear(w, now, refs)
+	d.Training, d.ProtectorTraining = b.training(w, refs)
+	return &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, refs), Refs: refs}
+}
+
+func emptyNotNil[T any](list []T) []T {
+	if list == nil {
+		return []T{}
+	}
+	return list
+}
+
+// perEmployment cuts spells at the ends of employments, so that a worker who was hired again begins anew.
+func (b *Builder) perEmployment(spells, employed []calendar.Spell) []calendar.Spell {
+	var out []calendar.Spell
+	for _, e := range employed {
+		for _, s := range spells {
+			if x := s.Intersect(e); !x.Empty() {
+				out = append(out, x)
+			}
+		}
+	}
+	return out
+}
+
+func stretchOn(pieces []stretch, day Date) *stretch {
+	for i := range pieces {
+		if pieces[i].Contains(day) {
+			return &pieces[i]
+		}
+	}
+	return nil
+}
+
+// limitOn says whether the exposure exceeds the law's limit level on a day: the level named limit, or where
+// the measures have none, the level that enrols.
+func (b *Builder) limitOn(pieces []stretch, day Date) record.Answer {
+	level := "limit"
+	if _, ok := b.Measures.Exposure.Levels[level]; !ok {
+		level = b.Measures.Exposure.Enrols
+	}
+	p := stretchOn(pieces, day)
+	if p == nil {
+		return record.Unanswered
+	}
+	answer, _ := b.reaches(level, p.doses[b.channels.index(b.Measures.Exposure.Levels[level].Channel)], day)
+	return answer
+}
+
+// enrolled writes the stretches in the program.
+func (b *Builder) enrolled(w *WorkerRecords, h *hearing, spells []calendar.Spell, refs Refs) []Enrolled {
+	out := []Enrolled{}
+	for _, s := range spells {
+		e := Enrolled{Spell: b.spell(s)}
+		if t := h.baseline; t != nil && (!s.To.Known() || t.rec.Date < s.To) {
+			e.Baseline, e.Mobile = &Link{t.rec.Date, t.ref}, t.rec.Mobile
+			tested := b.spell(calendar.Spell{From: max(s.From, t.rec.Date), To: s.To})
+			e.Tested = &tested
+		}
+		for _, i := range w.Issues {
+			if i.Date <= b.AsOf && (!i.ReturnedOn.Known() || i.ReturnedOn > s.From) && (!s.To.Known() || i.Date < s.To) {
+				e.Issue = link(refs, i, i.Date)
+				break
+			}
+		}
+		out = append(out, e)
+	}
+	return out
+}
+
+// results lists the monitoring results that put the worker into the program, with the notice of each.
+func (b *Builder) results(w *WorkerRecords, pieces []stretch, refs Refs) []Result {
+	level := b.Measures.Exposure.Enrols
+	channel := b.channels.index(b.Measures.Exposure.Levels[level].Channel)
+	out := []Result{}
+	seen := map[*result]bool{}
+	for _, p := range pieces {
+		src := p.src[channel]
+		if src == nil || seen[src] || p.From > b.AsOf {
+			continue
+		}
+		if answer, _ := b.reaches(level, p.doses[channel], max(p.From, 1)); answer != record.Yes {
+			continue
+		}
+		seen[src] = true
+		r := Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: max(src.day, p.From)}
+		if p.doses[channel].exact() {
+			r.Dose = record.Num(p.doses[channel].low)
+		}
+		for _, n := range w.Notices {
+			if n.About == "exposure" && n.Date <= b.AsOf && n.Date >= src.day && (n.MeasurementID != "" && n.MeasurementID == src.id || n.MeasurementID == "" && n.Date >= r.Since) {
+				r.Notice = link(refs, n, n.Date)
+				break
+			}
+		}
+		out = append(out, r)
+	}
+	return out
+}
+
+// recordLacks lists what the audiometric record of a test lacks of the contents that a law may ask for.
+func (b *Builder) recordLacks(t *test, h *hearing, jobTitle string, pieces []stretch) []string {
+	out := []string{}
+	if !t.enrolled && t != h.baseline {
+		return out
+	}
+	if jobTitle == "" {
+		out = append(out, "job classification")
+	}
+	if t.rec.TesterID == "" {
+		out = append(out, "examiner")
+	}
+	calibrated := slices.ContainsFunc(b.Registers.calibrations[t.rec.AudiometerID], func(c *record.Calibration) bool {
+		return c.Date <= t.rec.Date && (c.Type == "acoustic" || c.Type == "exhaustive")
+	})
+	if t.rec.AudiometerID == "" || !calibrated {
+		out = append(out, "date of the last acoustic or exhaustive calibration of the audiometer")
+	}
+	channel := b.channels.index(b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols].Channel)
+	if p := stretchOn(pieces, t.rec.Date); t.enrolled && (p == nil || p.src[channel] == nil) {
+		out = append(out, "most recent noise exposure assessment")
+	}
+	return out
+}
+
+// training gives the latest session, with the topics of the time before it, and the latest on protectors.
+func (b *Builder) training(w *WorkerRecords, refs Refs) (*Training, *Link) {
+	sessions := until(w.Trainings, b.AsOf, func(t *record.Training) Date { return t.Date })
+	if len(sessions) == 0 {
+		return nil, nil
+	}
+	last := sessions[len(sessions)-1]
+	out := &Training{Link: *link(refs, last, last.Date), Topics: []string{}, Silent: true}
+	var protectors *Link
+	for _, s := range sessions {
+		if s.Topics.Has("protectors") {
+			protectors = link(refs, s, s.Date)
+		}
+		if end, err := b.Measures.Training.TopicsOver.After(s.Date, nil); err != nil || end < last.Date {
+			continue
+		}
+		for _, topic := range s.Topics {
+			out.Silent = false
+			if !slices.Contains(out.Topics, topic) {
+				out.Topics = append(out.Topics, topic)
+			}
+		}
+	}
+	return out, protectors
+}
+
+func (b *Builder) workerSeries(w *WorkerRecords, h *hearing, refs Refs) map[string][]Link {
+	series := map[string][]Link{"audiogram.valid": h.validSeries()}
+	if t := h.baseline; t != nil {
+		series["audiogram.baseline"] = []Link{{t.rec.Date, t.ref}}
+	}
+	for _, t := range until(w.Trainings, b.AsOf, func(t *record.Training) Date { return t.Date }) {
+		l := *link(refs, t, t.Date)
+		series["training.any"] = append(series["training.any"], l)
+		if t.Topics.Has("protectors") {
+			series["training.protectors"] = append(series["training.protectors"], l)
+		}
+	}
+	for _, i := range until(w.Issues, b.AsOf, func(i *record.ProtectorIssue) Date { return i.Date }) {
+		series["protector.issue"] = append(series["protector.issue"], *link(refs, i, i.Date))
+	}
+	for _, c := range until(w.WearChecks, b.AsOf, func(c *record.WearCheck) Date { return c.Date }) {
+		if c.Worn == record.Yes {
+			series["protector.worn"] = append(series["protector.worn"], *link(refs, c, c.Date))
+		}
+	}
+	return series
+}
