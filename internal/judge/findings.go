@@ -1,0 +1,223 @@
+package judge
+
+import (
+	"context"
+	"fmt"
+	"maps"
+	"slices"
+
+
+	"hearduty/internal/bundle"
+	"hearduty/internal/dossier"
+	"hearduty/internal/finding"
+	"hearduty/internal/record"
+)
+
+// judgeFile judges one dossier and keeps its findings.
+func (c *check) judgeFile(ctx context.Context, b *bench, f *dossier.File) error {
+	answers, err := b.engine.Evaluate(ctx, f.Kind, Input(f.Input))
+	if err != nil {
+		return err
+	}
+	kept := &keeper{check: c, bench: b, file: f, keys: map[string]bool{}}
+	s := &settler{bundle: b.bundle, file: f, asOf: c.AsOf}
+	for _, a := range answers {
+		clear(kept.keys)
+		for _, x := range settleAnswer(s, a) {
+			kept.keep(a.Duty, x.outcome, x.obligation)
+		}
+	}
+	kept.done()
+	return nil
+}
+
+// settled is an outcome with the obligation that it comes from, if any.
+type settled struct {
+	outcome
+	obligation *obligation
+}
+
+// settleAnswer settles what one duty returned. Silence is never taken for compliance: a rule that failed,
+// returned nothing, or returned what cannot be read gives an unproven outcome.
+func settleAnswer(s *settler, a Answer) []settled {
+	if a.Err != nil {
+		return []settled{{outcome: outcome{status: finding.Unproven, message: sentence(fmt.Sprintf("The rule of this duty failed: %v", a.Err))}}}
+	}
+	if len(a.Obligations) == 0 && len(a.NotOwed) == 0 {
+		return []settled{{outcome: outcome{status: finding.Unproven,
+			message: "The rule of this duty returned neither an obligation nor a reason why nothing is owed."}}}
+	}
+	var out []settled
+	for _, t := range a.Obligations {
+		o, err := readObligation(t)
+		if err != nil {
+			out = append(out, settled{outcome: outcome{status: finding.Unproven, key: o.keyIfRead(),
+				message: sentence(fmt.Sprintf("The rule of this duty returned an obligation that cannot be read: %v", err))}})
+			continue
+		}
+		for _, x := range s.settle(o) {
+			out = append(out, settled{x, o})
+		}
+	}
+	return out
+}
+
+func (o *obligation) keyIfRead() string {
+	if o == nil {
+		return ""
+	}
+	return o.key
+}
+
+// keeper gathers the findings of one dossier.
+type keeper struct {
+	check    *check
+	bench    *bench
+	file     *dossier.File
+	keys     map[string]bool // keys seen of the duty at hand
+	findings []finding.Finding
+	counts   []countKey
+}
+
+// keep counts an outcome and, if it is to be listed, writes it as a finding.
+func (k *keeper) keep(d *bundle.Duty, x outcome, o *obligation) {
+	k.counts = append(k.counts, countKey{d.Topic, x.status})
+	key := x.key
+	for n := 2; k.keys[key]; n++ {
+		key = fmt.Sprintf("%s-%d", x.key, n)
+	}
+	k.keys[key] = true
+	if k.check.wanted != "" {
+		k.explain(d, x, o, key)
+		return
+	}
+	if k.check.listed(x) {
+		k.findings = append(k.findings, k.finding(d, x, o, key))
+	}
+}
+
+// listed says whether an outcome is to be listed, or only counted.
+func (c *check) listed(x outcome) bool {
+	switch {
+	case c.All:
+		return true
+	case x.status == finding.Due:
+		return int(x.due-c.AsOf) <= c.AheadDays
+	}
+	return x.status != finding.Met && x.status != finding.Lifted
+}
+
+func (k *keeper) finding(d *bundle.Duty, x outcome, o *obligation, key string) finding.Finding {
+	subject := finding.Subject{Kind: k.file.Kind, ID: k.file.ID}
+	f := finding.Finding{
+		ID:   finding.Fingerprint(k.bench.site.ID, k.bench.bundle.ID, d.ID, subject, key),
+		Site: k.bench.site.ID, Bundle: k.bench.bundle.ID, Duty: d.ID, Topic: d.Topic, Subject: subject, Key: key,
+		Status: x.status, Severity: d.Severity, Due: x.due, Done: x.done, Message: x.message, Cite: d.Cite, Remedy: d.Remedy,
+		Facts: map[string]any{}, Evidence: []finding.Evidence{},
+	}
+	if x.cite != "" {
+		f.Cite = x.cite
+	}
+	switch {
+	case x.status == finding.Late:
+		f.DaysOver = int(x.done - x.due)
+	case x.status == finding.Gap && x.due.Known():
+		f.DaysOver = int(k.check.AsOf - x.due)
+	}
+	if o != nil {
+		maps.Copy(f.Facts, plain(o.facts))
+		if k.check.HealthDetail {
+			f.Health = plain(o.health)
+		}
+	}
+	x.parameterFacts(f.Facts)
+	f.Evidence = k.evidence(x.refs)
+	return f
+}
+
+// evidence finds where the records of references were read. A reference to no record is kept as it is.
+func (k *keeper) evidence(refs []string) []finding.Evidence {
+	out := []finding.Evidence{}
+	for i, ref := range refs {
+		if ref == "" || slices.Contains(refs[:i], ref) {
+			continue
+		}
+		e := finding.Evidence{Record: ref}
+		if rec, ok := k.file.Refs.Record(ref); ok {
+			e = k.check.origin(ref, rec)
+		}
+		out = append(out, e)
+	}
+	return out
+}
+
+func (c *check) origin(ref string, rec record.Record) finding.Evidence {
+	at := rec.At()
+	in := c.ledger.Inputs[at.Source]
+	return finding.Evidence{Record: ref, File: in.File, Sheet: in.Sheet, Row: int(at.Row)}
+}
+
+// done hands the findings of the dossier over.
+func (k *keeper) done() {
+	k.bench.mu.Lock()
+	defer k.bench.mu.Unlock()
+	k.bench.findings = append(k.bench.findings, k.findings...)
+	for _, key := range k.counts {
+		k.bench.counts[key]++
+	}
+}
+
+// report puts the result together: findings sorted, counts added up.
+func (c *check) report() *finding.Report {
+	r := &finding.Report{
+		Tool: finding.Tool{Name: "hearduty", Version: c.Version}, Program: c.Program.Title, AsOf: c.AsOf, Cautions: cautions,
+		Sites: []finding.Site{}, Bundles: []finding.Bundle{}, Inputs: c.ledger.Inputs, Rejects: c.ledger.Rejects, Remarks: []string{},
+		Totals: map[finding.Status]int{}, Counts: []finding.Count{}, Listed: c.listedWords(), Findings: []finding.Finding{},
+	}
+	if r.Rejects == nil {
+		r.Rejects = []finding.Reject{}
+	}
+	for _, d := range c.ledger.Remarks {
+		r.Remarks = append(r.Remarks, d.String())
+	}
+	for _, b := range c.used {
+		r.Bundles = append(r.Bundles, finding.Bundle{
+			ID: b.ID, Title: b.About.Title, Revision: b.Revision, SHA256: b.SHA256, Kind: b.About.Kind,
+			CheckedOn: b.About.CheckedOn, Cautions: b.About.Cautions,
+		})
+	}
+	for _, s := range c.sites {
+		site := finding.Site{ID: s.ID, Name: s.Name, Bundles: c.bundlesOf(s), Choices: map[string]any{}}
+		for _, b := range c.benches[s.ID] {
+			site.Workers = b.usage.Workers
+			maps.Copy(site.Choices, b.builder.Choices)
+			r.Findings = append(r.Findings, b.findings...)
+			r.Counts = append(r.Counts, b.sortedCounts(r.Totals)...)
+		}
+		r.Sites = append(r.Sites, site)
+	}
+	slices.SortFunc(r.Findings, func(x, y finding.Finding) int { return finding.Compare(&x, &y) })
+	return r
+}
+
+// sortedCounts gives the bench's counts by topic and status and adds them to the totals.
+func (b *bench) sortedCounts(totals map[finding.Status]int) []finding.Count {
+	var out []finding.Count
+	for _, topic := range finding.Topics {
+		for _, status := range finding.Statuses {
+			if n := b.counts[countKey{topic, status}]; n > 0 {
+				out = append(out, finding.Count{Site: b.site.ID, Bundle: b.bundle.ID, Topic: topic, Status: status, Number: n})
+				totals[status] += n
+			}
+		}
+	}
+	return out
+}
+
+func (c *check) listedWords() string {
+	if c.All {
+		return "all findings"
+	}
+	return fmt.Sprintf("all findings but those that are met or lifted, and those due in more than %s", days(c.AheadDays))
+}
+

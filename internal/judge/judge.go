@@ -1,0 +1,277 @@
+// Package judge holds dossiers against bundles: it evaluates the rules of every duty for every subject,
+// settles the obligations they return by date and clock, and gathers the findings.
+package judge
+
+import (
+	"context"
+	"errors"
+	"fmt"
+	"runtime"
+	"slices"
+	"sync"
+
+	"hearduty/internal/bundle"
+	"hearduty/internal/calendar"
+	"hearduty/internal/diag"
+	"hearduty/internal/dossier"
+	"hearduty/internal/finding"
+	"hearduty/internal/intake"
+	"hearduty/internal/program"
+	"hearduty/internal/record"
+)
+
+// Options say what to check and how.
+type Options struct {
+	Program      *program.Program
+	Library      bundle.Library
+	AsOf         calendar.Date // the day on which the program is judged
+	Sites        []string      // only these sites; empty for all
+	Bundle       string        // judge every chosen site by this bundle instead of its own
+	AheadDays    int           // how many days ahead a due finding is listed
+	All          bool          // list met and lifted findings and those due later, too
+	HealthDetail bool          // show audiometric figures
+	Parallel     int           // number of subjects judged at a time; 0 for one a processor
+	Version      string        // of the tool, for the report
+
+	// read, where set, takes the place of reading the program's files.
+	read func(ctx context.Context, emit func(record.Record) error) (*intake.Ledger, error)
+}
+
+// ErrNoFinding says that no finding has the id asked for.
+var ErrNoFinding = errors.New("no finding has this id")
+
+// cautions stand in every report.
+var cautions = []string{
+	"A bundle is a reading of the law. Local codes govern, and licensed professionals decide.",
+	"hearduty reports what the records prove. It does not call a site compliant, and it does not decide work-relatedness, persistence, feasibility or fitness.",
+	"Findings about hearing are medical information. Show them only to those who may see them.",
+}
+
+// Check reads a program and judges it. The error is a diag.List where inputs cannot be used.
+func Check(ctx context.Context, o Options) (*finding.Report, error) {
+	c, err := newCheck(ctx, o)
+	if err != nil {
+		return nil, err
+	}
+	defer c.store.Close()
+	if err := c.judgeAll(ctx); err != nil {
+		return nil, err
+	}
+	return c.report(), nil
+}
+
+// check is one check under way.
+type check struct {
+	Options
+	store   *dossier.Store
+	ledger  *intake.Ledger
+	sites   []*program.Site
+	benches map[string][]*bench // by site
+	used    []*bundle.Bundle    // in order of id
+	wanted  string              // beginning of the id of the one finding to be explained
+	foundMu sync.Mutex
+	found   []explained
+}
+
+// bench is one site under one bundle.
+type bench struct {
+	site    *program.Site
+	bundle  *bundle.Bundle
+	builder *dossier.Builder
+	engine  Engine
+	usage   *dossier.Usage
+
+	mu       sync.Mutex
+	findings []finding.Finding
+	counts   map[countKey]int
+}
+
+type countKey struct {
+	topic  string
+	status finding.Status
+}
+
+func newCheck(ctx context.Context, o Options) (*check, error) {
+	c := &check{Options: o, benches: map[string][]*bench{}}
+	if err := c.choose(); err != nil {
+		return nil, err
+	}
+	c.store = dossier.NewStore()
+	read := o.read
+	if read == nil {
+		read = func(ctx context.Context, emit func(record.Record) error) (*intake.Ledger, error) {
+			return intake.Read(ctx, o.Program, emit)
+		}
+	}
+	ledger, err := read(ctx, c.store.Add)
+	if err != nil {
+		c.store.Close()
+		return nil, err
+	}
+	c.ledger = ledger
+	if err := c.prepare(ctx); err != nil {
+		c.store.Close()
+		return nil, err
+	}
+	return c, nil
+}
+
+// choose finds the sites and bundles to be used.
+func (c *check) choose() error {
+	var problems diag.List
+	for _, id := range c.Sites {
+		if _, ok := c.Program.Site(id); !ok {
+			problems.Errorf(diag.Position{}, "Name a site of the program file", "the program has no site %q", id)
+		}
+	}
+	if c.Bundle != "" {
+		if _, ok := c.Library[c.Bundle]; !ok {
+			remedy := "List the bundles with: hearduty bundles"
+			if near := diag.Near(c.Bundle, c.Library.IDs()); near != "" {
+				remedy = fmt.Sprintf("Did you mean %q?", near)
+			}
+			problems.Errorf(diag.Position{}, remedy, "there is no bundle %q", c.Bundle)
+		}
+	} else {
+		problems = append(problems, c.Program.CheckBundles(c.Library.IDs())...)
+	}
+	for i := range c.Program.Sites {
+		s := &c.Program.Sites[i]
+		if len(c.Sites) == 0 || slices.Contains(c.Sites, s.ID) {
+			c.sites = append(c.sites, s)
+		}
+	}
+	return problems.Err()
+}
+
+// bundlesOf gives the bundles by which a site is judged.
+func (c *check) bundlesOf(s *program.Site) []string {
+	if c.Bundle != "" {
+		return []string{c.Bundle}
+	}
+	return s.Bundles
+}
+
+// prepare makes the engine of every bundle and the builder of every site under each.
+func (c *check) prepare(ctx context.Context) error {
+	registers := c.store.Registers()
+	engines := map[string]Engine{}
+	grounds := map[string]*dossier.Ground{}
+	for _, s := range c.sites {
+		for _, id := range c.bundlesOf(s) {
+			b := c.Library[id]
+			if engines[id] == nil {
+				engine, err := NewEngine(ctx, b)
+				if err != nil {
+					return fmt.Errorf("the bundle %s cannot be prepared: %w", id, err)
+				}
+				engines[id], grounds[id] = engine, dossier.NewGround(registers, b.Measures, b, c.AsOf)
+				c.used = append(c.used, b)
+			}
+			place := dossier.Place{ID: s.ID, Country: s.Country, Region: s.Region}
+			c.benches[s.ID] = append(c.benches[s.ID], &bench{
+				site: s, bundle: b, builder: grounds[id].Builder(place, b.ChoicesOf(s.Choices)), engine: engines[id],
+				usage: dossier.NewUsage(), counts: map[countKey]int{},
+			})
+		}
+	}
+	slices.SortFunc(c.used, func(a, b *bundle.Bundle) int { return compareText(a.ID, b.ID) })
+	return nil
+}
+
+func compareText(a, b string) int {
+	switch {
+	case a < b:
+		return -1
+	case a > b:
+		return 1
+	}
+	return 0
+}
+
+// judgeAll judges the workers, shard by shard, and then what depends on all of them.
+func (c *check) judgeAll(ctx context.Context) error {
+	err := c.parallel(ctx, c.store.Shards(), func(ctx context.Context, i int) error {
+		workers, err := c.store.Shard(i)
+		if err != nil {
+			return err
+		}
+		for _, w := range workers {
+			if err := c.judgeWorker(ctx, w); err != nil {
+				return err
+			}
+		}
+		return nil
+	})
+	if err != nil {
+		return err
+	}
+	var all []*bench
+	for _, s := range c.sites {
+		all = append(all, c.benches[s.ID]...)
+	}
+	return c.parallel(ctx, len(all), func(ctx context.Context, i int) error {
+		b := all[i]
+		files := slices.Concat(b.builder.Groups(b.usage), b.builder.Instruments(b.usage), b.builder.Rooms(b.usage), b.builder.Testers(b.usage))
+		files = append(files, b.builder.SiteDossier(b.usage))
+		for _, f := range files {
+			if err := c.judgeFile(ctx, b, f); err != nil {
+				return err
+			}
+		}
+		return nil
+	})
+}
+
+// judgeWorker judges one worker at every site of employment, under every bundle of the site.
+func (c *check) judgeWorker(ctx context.Context, w *dossier.WorkerRecords) error {
+	var sites []string
+	for _, e := range w.Employments {
+		if !slices.Contains(sites, e.Site) {
+			sites = append(sites, e.Site)
+		}
+	}
+	for _, site := range sites {
+		for _, b := range c.benches[site] {
+			file := b.builder.Worker(w)
+			if file == nil {
+				continue
+			}
+			b.usage.Add(b.builder, w, file.Input.(*dossier.Worker))
+			if err := c.judgeFile(ctx, b, file); err != nil {
+				return err
+			}
+		}
+	}
+	return nil
+}
+
+// parallel calls do for 0 to n-1, several at a time, and stops at the first error.
+func (c *check) parallel(ctx context.Context, n int, do func(context.Context, int) error) error {
+	ctx, stop := context.WithCancelCause(ctx)
+	defer stop(nil)
+	workers := c.Parallel
+	if workers <= 0 {
+		workers = runtime.GOMAXPROCS(0)
+	}
+	var wait sync.WaitGroup
+	next := make(chan int)
+	for range min(workers, n) {
+		wait.Go(func() {
+			for i := range next {
+				if err := do(ctx, i); err != nil {
+					stop(err)
+				}
+			}
+		})
+	}
+	for i := 0; i < n && ctx.Err() == nil; i++ {
+		select {
+		case next <- i:
+		case <-ctx.Done():
+		}
+	}
+	close(next)
+	wait.Wait()
+	return context.Cause(ctx)
+}

@@ -1,0 +1,102 @@
+package judge
+
+import (
+	"fmt"
+	"strconv"
+	"strings"
+
+	"hearduty/internal/bundle"
+	"hearduty/internal/finding"
+)
+
+// clockMessage says how an obligation with a clock stands.
+func (s *settler) clockMessage(o *obligation, out *outcome) string {
+	var text string
+	switch {
+	case out.status == finding.Met && out.due.Known():
+		text = fmt.Sprintf("Done on %s, in time; the last day was %s", out.done, out.due)
+	case out.status == finding.Met:
+		text = fmt.Sprintf("Done on %s", out.done)
+	case out.status == finding.Late:
+		text = fmt.Sprintf("Done on %s, %s after the last day, %s", out.done, days(int(out.done-out.due)), out.due)
+	case out.status == finding.Due:
+		text = fmt.Sprintf("Not yet done; the last day is %s, in %s", out.due, days(int(out.due-s.asOf)))
+	case out.due.Known():
+		text = fmt.Sprintf("No record that it was done; the last day was %s, %s ago", out.due, days(int(s.asOf-out.due)))
+	default:
+		text = "No record that it was done"
+	}
+	return joinSentences(o.note, text)
+}
+
+func days(n int) string {
+	if n == 1 {
+		return "1 day"
+	}
+	return strconv.Itoa(n) + " days"
+}
+
+// limitWords says a value beside its limit.
+func limitWords(o *obligation, u used, bound float64) string {
+	unit := ""
+	if u.unit != "" {
+		unit = " " + u.unit
+	}
+	relation := map[string]string{"at_most": "at most", "below": "below", "at_least": "at least", "above": "above"}[o.compare]
+	text := fmt.Sprintf("%s%s; the law asks for %s %s%s", short(o.value), unit, relation, short(bound), unit)
+	return text
+}
+
+func short(v float64) string {
+	return strconv.FormatFloat(v, 'f', -1, 64)
+}
+
+// cannotDecide says what the records lack.
+func cannotDecide(missing []string) string {
+	if len(missing) == 0 {
+		return "The records do not decide it"
+	}
+	return "The records lack: " + strings.Join(missing, "; ")
+}
+
+// words writes the name of a parameter as words.
+func words(name string) string { return strings.ReplaceAll(name, "_", " ") }
+
+// sentence gives a text a capital letter and a full stop.
+func sentence(text string) string {
+	text = strings.TrimSpace(text)
+	if text == "" {
+		return ""
+	}
+	first := []rune(text)[0]
+	text = strings.ToUpper(string(first)) + text[len(string(first)):]
+	if strings.HasSuffix(text, ".") || strings.HasSuffix(text, "?") {
+		return text
+	}
+	return text + "."
+}
+
+// joinSentences puts sentences together, leaving out empty ones.
+func joinSentences(texts ...string) string {
+	var out []string
+	for _, t := range texts {
+		if s := sentence(t); s != "" {
+			out = append(out, s)
+		}
+	}
+	return strings.Join(out, " ")
+}
+
+// usedParameter writes a parameter for an explanation.
+func usedParameter(b *bundle.Bundle, u used) UsedParameter {
+	value := fmt.Sprint(u.value.Plain())
+	if interval, ok := u.value.Interval(); ok {
+		value = interval.String()
+	} else if n, ok := u.value.Number(); ok {
+		value = short(n)
+	}
+	return UsedParameter{
+		Name: u.name, About: b.Parameters[u.name].About, Unit: u.unit, Value: value,
+		Cite: u.value.Cite, Seen: u.value.Seen, From: u.value.From,
+	}
+}

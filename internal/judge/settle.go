@@ -1,0 +1,334 @@
+package judge
+
+import (
+	"fmt"
+	"maps"
+	"math"
+	"slices"
+
+	"hearduty/internal/bundle"
+	"hearduty/internal/calendar"
+	"hearduty/internal/dossier"
+	"hearduty/internal/finding"
+)
+
+// outcome is one settled obligation, or one period of a recurring one.
+type outcome struct {
+	status  finding.Status
+	key     string
+	due     calendar.Date
+	done    calendar.Date
+	refs    []string // records it rests on
+	params  []used   // parameters that decided
+	facts   map[string]any
+	message string
+	cite    string // where it is not the duty's own
+}
+
+// used is a parameter's value in force on a day.
+type used struct {
+	name  string
+	value *bundle.Value
+	unit  string
+}
+
+// settler settles the obligations of one dossier.
+type settler struct {
+	bundle *bundle.Bundle
+	file   *dossier.File
+	asOf   calendar.Date
+}
+
+// settle decides an obligation by date and clock. It gives no outcome for an obligation that has ended
+// with its spell or with the time for which it lasts, and several for a recurring one.
+func (s *settler) settle(o *obligation) []outcome {
+	switch o.shape {
+	case once:
+		return s.once(o)
+	case recurring:
+		return s.recurring(o)
+	case limit:
+		return []outcome{s.limit(o)}
+	case condition:
+		return s.condition(o)
+	case opinion:
+		return []outcome{s.opinion(o)}
+	}
+	return []outcome{{status: finding.Lifted, key: o.keyOr(o.on), refs: o.because, message: sentence(o.reason), cite: o.cite}}
+}
+
+func (o *obligation) keyOr(day calendar.Date) string {
+	if o.key != "" {
+		return o.key
+	}
+	return day.String()
+}
+
+// unproven is the outcome of an obligation that the records cannot decide.
+func unproven(o *obligation, key string, missing ...string) outcome {
+	return outcome{status: finding.Unproven, key: key, refs: o.because, message: joinSentences(o.note, cannotDecide(append(slices.Clone(o.missing), missing...)))}
+}
+
+// parameter gives the value of a parameter in force on a day.
+func (s *settler) parameter(name string, day calendar.Date) (used, bool) {
+	p, ok := s.bundle.Parameters[name]
+	if !ok {
+		return used{name: name}, false
+	}
+	v, ok := p.At(day)
+	return used{name, v, p.Unit}, ok
+}
+
+// deadline gives the last day of an interval that starts on a day.
+func (s *settler) deadline(name string, start calendar.Date) (calendar.Date, used, string) {
+	u, ok := s.parameter(name, start)
+	if !ok {
+		return 0, u, fmt.Sprintf("a value of %s in force on %s", words(name), start)
+	}
+	interval, ok := u.value.Interval()
+	if !ok {
+		return 0, u, fmt.Sprintf("an interval as the value of %s", words(name))
+	}
+	day, err := interval.After(start, nil)
+	if err != nil {
+		return 0, u, err.Error()
+	}
+	return day, u, ""
+}
+
+func (s *settler) once(o *obligation) []outcome {
+	key := o.keyOr(o.after)
+	done := o.by
+	if o.series != nil {
+		done = s.first(o.series)
+	}
+	if !o.after.Known() {
+		return []outcome{unproven(o, key, orElse(o.missing, "the day on which the time begins")...)}
+	}
+	out := outcome{key: key, refs: o.because}
+	if done != nil {
+		out.done, out.refs = done.Date, append(slices.Clone(o.because), done.Ref)
+	}
+	if o.within == "" {
+		out.status = finding.Gap
+		if done != nil {
+			out.status = finding.Met
+		}
+		out.message = s.clockMessage(o, &out)
+		return []outcome{out}
+	}
+	due, u, problem := s.deadline(o.within, o.after)
+	if problem != "" {
+		return []outcome{unproven(o, key, problem)}
+	}
+	out.due, out.params = max(due, o.noSooner), []used{u}
+	switch {
+	case done != nil && done.Date <= out.due:
+		out.status = finding.Met
+	case done != nil:
+		out.status = finding.Late
+	case o.during != nil && o.during.To.Known() && out.due >= o.during.To:
+		return nil // the obligation has ended with its spell
+	case s.asOf <= out.due:
+		out.status = finding.Due
+	default:
+		out.status = finding.Gap
+	}
+	out.message = s.clockMessage(o, &out)
+	return []outcome{out}
+}
+
+// orElse gives extra words only where the rule itself gives none.
+func orElse(given []string, word string) []string {
+	if len(given) > 0 {
+		return nil
+	}
+	return []string{word}
+}
+
+// first gives the earliest record of several series.
+func (s *settler) first(series []string) *dossier.Link {
+	var found *dossier.Link
+	for _, name := range series {
+		for i := range s.file.Series[name] {
+			if l := &s.file.Series[name][i]; found == nil || l.Date < found.Date {
+				found = l
+			}
+		}
+	}
+	return found
+}
+
+// next gives the earliest record of several series after a day and before the end of a spell.
+func (s *settler) next(series []string, after calendar.Date, during *calendar.Spell) *dossier.Link {
+	var found *dossier.Link
+	for _, name := range series {
+		for i := range s.file.Series[name] {
+			l := &s.file.Series[name][i]
+			if l.Date > after && during.Contains(l.Date) && (found == nil || l.Date < found.Date) {
+				found = l
+			}
+		}
+	}
+	return found
+}
+
+// recurring settles an obligation period by period. The clock starts with the spell and starts again with
+// each fulfilment.
+func (s *settler) recurring(o *obligation) []outcome {
+	var out []outcome
+	start, interval := o.during.From, o.every
+	if o.first != "" {
+		interval = o.first
+	}
+	var last string
+	for {
+		key := start.String()
+		if o.key != "" {
+			key = o.key + "/" + key
+		}
+		due, u, problem := s.deadline(interval, start)
+		if problem != "" {
+			return append(out, unproven(o, key, problem))
+		}
+		now := outcome{key: key, due: due, refs: slices.Clone(o.because), params: []used{u}}
+		if last != "" {
+			now.refs = append(now.refs, last)
+		}
+		done := s.next(o.series, start, o.during)
+		if done != nil {
+			now.done, now.refs = done.Date, append(now.refs, done.Ref)
+		}
+		switch {
+		case done != nil && done.Date <= due:
+			now.status = finding.Met
+		case done != nil:
+			now.status = finding.Late
+		case o.during.To.Known() && due >= o.during.To:
+			return out // the obligation has ended with its spell
+		case s.asOf <= due:
+			now.status = finding.Due
+		default:
+			now.status = finding.Gap
+		}
+		s.touch(o, &now)
+		now.message = s.clockMessage(o, &now)
+		out = append(out, now)
+		if done == nil {
+			return out
+		}
+		start, interval, last = done.Date, o.every, done.Ref
+	}
+}
+
+// touch counts the uses after a missed deadline and before the fulfilment.
+func (s *settler) touch(o *obligation, out *outcome) {
+	if o.touches == "" || out.status != finding.Late && out.status != finding.Gap {
+		return
+	}
+	tests, days := 0, 0
+	for _, u := range s.file.Uses {
+		if u.Date > out.due && (!out.done.Known() || u.Date < out.done) {
+			tests += u.Tests
+			days++
+		}
+	}
+	out.facts = map[string]any{"tests_touched": tests, "days_touched": days}
+}
+
+// tolerance absorbs the rounding of binary arithmetic in values that were worked out, in their own unit.
+const tolerance = 1e-9
+
+func (s *settler) limit(o *obligation) outcome {
+	day := o.on
+	if !day.Known() {
+		day = s.asOf
+	}
+	key := o.keyOr(o.on)
+	u, ok := s.parameter(o.parameter, day)
+	if !ok {
+		return unproven(o, key, fmt.Sprintf("a value of %s in force on %s", words(o.parameter), day))
+	}
+	bound, ok := u.value.Number()
+	if !ok {
+		return unproven(o, key, fmt.Sprintf("a number as the value of %s", words(o.parameter)))
+	}
+	if !o.valued || math.IsNaN(o.value) {
+		out := unproven(o, key, orElse(o.missing, "the value to be compared with "+words(o.parameter))...)
+		out.params = []used{u}
+		return out
+	}
+	out := outcome{status: finding.Gap, key: key, refs: o.because, params: []used{u}, facts: map[string]any{"value": o.value}}
+	if within(o.value, o.compare, bound) {
+		out.status = finding.Met
+	}
+	out.message = joinSentences(o.note, limitWords(o, u, bound))
+	return out
+}
+
+// within says whether a value keeps a limit.
+func within(value float64, compare string, bound float64) bool {
+	switch compare {
+	case "at_most":
+		return value <= bound+tolerance
+	case "below":
+		return value < bound-tolerance
+	case "at_least":
+		return value >= bound-tolerance
+	}
+	return value > bound+tolerance
+}
+
+func (s *settler) condition(o *obligation) []outcome {
+	key := o.keyOr(o.on)
+	out := outcome{key: key, refs: o.because}
+	if o.lasts != "" && o.on.Known() {
+		end, u, problem := s.deadline(o.lasts, o.on)
+		if problem != "" {
+			return []outcome{unproven(o, key, problem)}
+		}
+		if s.asOf > end {
+			return nil // the time for which it lasts is over
+		}
+		out.params = []used{u}
+	}
+	if o.holds == nil {
+		u := unproven(o, key)
+		u.params = out.params
+		return []outcome{u}
+	}
+	out.status, out.message = finding.Gap, joinSentences(o.note)
+	if *o.holds {
+		out.status = finding.Met
+	}
+	if out.message == "" {
+		out.message = map[bool]string{true: "Fulfilled.", false: "Not fulfilled."}[*o.holds]
+	}
+	return []outcome{out}
+}
+
+func (s *settler) opinion(o *obligation) outcome {
+	out := outcome{status: finding.Opinion, key: o.keyOr(o.on), refs: o.because}
+	if o.by != nil {
+		out.status, out.done, out.refs = finding.Met, o.by.Date, append(slices.Clone(o.because), o.by.Ref)
+		out.message = joinSentences(o.note, fmt.Sprintf("Answered on %s", o.by.Date))
+		return out
+	}
+	out.message = joinSentences(o.note, fmt.Sprintf("Needs a professional's judgement (%s): %s", o.of, o.ask))
+	return out
+}
+
+// parameterFacts writes the parameters that decided an outcome, each with its citation and mark.
+func (out *outcome) parameterFacts(facts map[string]any) {
+	for _, u := range out.params {
+		if u.value == nil {
+			continue
+		}
+		entry := map[string]any{"value": u.value.Plain(), "cite": u.value.Cite, "seen": u.value.Seen, "from": u.value.From}
+		if u.unit != "" {
+			entry["unit"] = u.unit
+		}
+		facts[u.name] = entry
+	}
+	maps.Copy(facts, out.facts)
+}
