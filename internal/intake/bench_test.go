@@ -1,0 +1,71 @@
+package intake
+
+import (
+	"context"
+	"fmt"
+	"strings"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+
+	"hearduty/internal/record"
+)
+
+const benchRows = 50_000
+
+// benchAudiograms is a canonical table of audiograms with all columns.
+func benchAudiograms() string {
+	table, _ := record.TableOf("audiogram")
+	var b strings.Builder
+	b.WriteString(strings.Join(table.Names(), ",") + "\n")
+	for i := range benchRows {
+		fmt.Fprintf(&b, "A-%06d,%06d,20%02d-03-%02d,periodic", i, i%1000, 10+i%15, 1+i%28)
+		for f := range 20 {
+			fmt.Fprintf(&b, ",%d", (i+f)%13*5)
+		}
+		b.WriteString(",AM-1,R-1,T-2,14,no,no,2025-03-12,AUD-1,2025-03-12\n")
+	}
+	return b.String()
+}
+
+func benchWorkers() string {
+	var b strings.Builder
+	b.WriteString("worker_id,site,hired_on\n")
+	for i := range 1000 {
+		fmt.Fprintf(&b, "%06d,kiln-hill,2009-01-01\n", i)
+	}
+	return b.String()
+}
+
+func BenchmarkReadAudiogramsCSV(b *testing.B) {
+	benchmarkRead(b, "audiograms.csv", benchAudiograms())
+}
+
+func BenchmarkReadAudiogramsNDJSON(b *testing.B) {
+	p := programOf(b, "workers.csv", benchWorkers(), "audiograms.csv", benchAudiograms())
+	var text strings.Builder
+	w := NewNDJSONWriter(&text, Inputs(p))
+	_, err := Read(context.Background(), p, func(r record.Record) error {
+		if r.Kind() == "worker" {
+			return nil
+		}
+		return w.Write(r)
+	})
+	require.NoError(b, err)
+	benchmarkRead(b, "audiograms.ndjson", text.String())
+}
+
+func benchmarkRead(b *testing.B, name, text string) {
+	p := programOf(b, "workers.csv", benchWorkers(), name, text)
+	b.SetBytes(int64(len(text)))
+	b.ReportAllocs()
+	rows := 0
+	for b.Loop() {
+		l, err := Read(context.Background(), p, func(record.Record) error { return nil })
+		require.NoError(b, err)
+		n, _, rejected := l.Totals()
+		require.Zero(b, rejected)
+		rows += n
+	}
+	b.ReportMetric(float64(rows)/b.Elapsed().Seconds(), "rows/s")
+}

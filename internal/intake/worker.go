@@ -1,0 +1,54 @@
+package intake
+
+import (
+	"hearduty/internal/calendar"
+	"hearduty/internal/record"
+)
+
+// person is what is known of one worker from the accepted rows.
+type person struct {
+	at         record.Origin // first row
+	sex        string
+	birth      record.Date
+	employment []employment
+}
+
+// employment is one stretch of a worker's employment.
+type employment struct {
+	days calendar.Spell
+	at   record.Origin
+}
+
+// admitWorker lets a worker have several rows, one a stretch of employment.
+func (g *register) admitWorker(w *record.Worker) *record.Problem {
+	this := employment{days: calendar.Spell{From: w.HiredOn}, at: w.At()}
+	if w.LeftOn.Known() {
+		this.days.To = w.LeftOn.AddDays(1)
+	}
+	known := g.workers[w.WorkerID]
+	if known == nil {
+		known = &person{at: w.At()}
+	}
+	for _, other := range known.employment {
+		if !this.days.Intersect(other.days).Empty() {
+			return refuse("hired_on", w.HiredOn.String(), "Give the earlier stretch its left_on, one row a stretch and site; if they are two people, give each an id of its own",
+				"the employment of worker %q overlaps with the one in %s", record.Shorten(w.WorkerID), g.place(other.at))
+		}
+	}
+	const remedy = "Correct the wrong one; if they are two people, give each an id of its own"
+	if known.birth.Known() && w.BirthDate.Known() && known.birth != w.BirthDate {
+		return refuse("birth_date", w.BirthDate.String(), remedy, "the birth date of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
+	}
+	if known.sex != "" && w.Sex != "" && known.sex != w.Sex {
+		return refuse("sex", w.Sex, remedy, "the sex of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
+	}
+	if known.sex == "" {
+		known.sex = w.Sex
+	}
+	if !known.birth.Known() {
+		known.birth = w.BirthDate
+	}
+	known.employment = append(known.employment, this)
+	g.workers[w.WorkerID] = known
+	return nil
+}
