@@ -17,7 +17,6 @@ type comparison struct {
 	verdict   [2]audiometry.Verdict
 	applied   bool     // whether age correction decided
 	missing   []string // thresholds that the comparison lacks
-	working   []string
 }
 
 func (c *comparison) shifted() bool {
@@ -39,7 +38,7 @@ func (h *hearing) compare(t *test, base [2]*test) *comparison {
 		baseEar := sides(base[i].rec)[i].ear
 		c.change[i] = audiometry.Shift(baseEar, side.ear, m.Shift.Frequencies, nil)
 		c.corrected[i] = c.change[i]
-		aging, why := h.aging(base[i].rec.Date, s.rec.Date)
+		aging, _ := h.aging(base[i].rec.Date, s.rec.Date)
 		if aging != nil {
 			c.corrected[i] = audiometry.Shift(baseEar, side.ear, m.Shift.Frequencies, aging)
 		}
@@ -55,7 +54,6 @@ func (h *hearing) compare(t *test, base [2]*test) *comparison {
 		if c.verdict[i] == audiometry.Undecided {
 			c.missing = append(c.missing, undecidedWords(side.name, c.change[i], inForce)...)
 		}
-		c.working = append(c.working, workingOf(side, baseEar, c, i, m.Shift.Frequencies, aging, why, base[i]))
 	}
 	return c
 }
@@ -103,9 +101,12 @@ func undecidedWords(ear string, c audiometry.Change, inForce bool) []string {
 }
 
 // workingOf writes the sum of one ear's average change.
-func workingOf(s side, base *audiometry.Ear, c *comparison, i int, freqs, aging []int, why string, baseline *test) string {
-	text := fmt.Sprintf("%s ear against the baseline of %s:", s.name, baseline.rec.Date)
-	for n, hz := range freqs {
+func (h *hearing) workingOf(c *comparison, i int, s side) string {
+	baseline := c.base[i].rec
+	base := sides(baseline)[i].ear
+	aging, why := h.aging(baseline.Date, c.test.standing().rec.Date)
+	text := fmt.Sprintf("%s ear against the baseline of %s:", s.name, baseline.Date)
+	for n, hz := range h.b.Measures.Hearing.Shift.Frequencies {
 		sep := ","
 		if n == 0 {
 			sep = ""
@@ -134,10 +135,14 @@ func (h *hearing) figures(c *comparison) Hearing {
 	s := c.test.standing().rec
 	freqs := h.b.Measures.Hearing.Shift.Frequencies
 	left, right := s.Left.Sum(freqs), s.Right.Sum(freqs)
+	var working []string
+	for i, side := range sides(s) {
+		working = append(working, h.workingOf(c, i, side))
+	}
 	return Hearing{
 		Left: average(c.change[0].Average()), Right: average(c.change[1].Average()),
 		LeftCorrected: average(c.corrected[0].Average()), RightCorrected: average(c.corrected[1].Average()),
-		LeftLevel: average(left.Average()), RightLevel: average(right.Average()), Working: c.working,
+		LeftLevel: average(left.Average()), RightLevel: average(right.Average()), Working: working,
 	}
 }
 

@@ -6,7 +6,6 @@ import (
 	"maps"
 	"slices"
 
-
 	"hearduty/internal/bundle"
 	"hearduty/internal/dossier"
 	"hearduty/internal/finding"
@@ -20,7 +19,7 @@ func (c *check) judgeFile(ctx context.Context, b *bench, f *dossier.File) error 
 		return err
 	}
 	kept := &keeper{check: c, bench: b, file: f, keys: map[string]bool{}}
-	s := &settler{bundle: b.bundle, file: f, asOf: c.AsOf}
+	s := &settler{bundle: b.bundle, file: f, asOf: c.AsOf, brief: c.brief}
 	for _, a := range answers {
 		clear(kept.keys)
 		for _, x := range settleAnswer(s, a) {
@@ -91,13 +90,13 @@ func (k *keeper) keep(d *bundle.Duty, x outcome, o *obligation) {
 		k.explain(d, x, o, key)
 		return
 	}
-	if k.check.listed(x) {
+	if k.check.listed(&x) {
 		k.findings = append(k.findings, k.finding(d, x, o, key))
 	}
 }
 
 // listed says whether an outcome is to be listed, or only counted.
-func (c *check) listed(x outcome) bool {
+func (c *check) listed(x *outcome) bool {
 	switch {
 	case c.All:
 		return true
@@ -106,6 +105,9 @@ func (c *check) listed(x outcome) bool {
 	}
 	return x.status != finding.Met && x.status != finding.Lifted
 }
+
+// brief says whether an outcome is only to be counted.
+func (c *check) brief(x *outcome) bool { return !c.listed(x) }
 
 func (k *keeper) finding(d *bundle.Duty, x outcome, o *obligation, key string) finding.Finding {
 	subject := finding.Subject{Kind: k.file.Kind, ID: k.file.ID}
@@ -220,4 +222,3 @@ func (c *check) listedWords() string {
 	}
 	return fmt.Sprintf("all findings but those that are met or lifted, and those due in more than %s", days(c.AheadDays))
 }
-

@@ -11,6 +11,9 @@ import (
 
 // clockMessage says how an obligation with a clock stands.
 func (s *settler) clockMessage(o *obligation, out *outcome) string {
+	if s.isBrief(out) {
+		return ""
+	}
 	var text string
 	switch {
 	case out.status == finding.Met && out.due.Known():

@@ -3,6 +3,7 @@ package judge
 import (
 	"encoding/json"
 	"fmt"
+	"slices"
 	"strings"
 
 	"github.com/open-policy-agent/opa/v1/ast"
@@ -62,7 +63,7 @@ func readObligation(t *ast.Term) (*obligation, error) {
 		return nil, fmt.Errorf("an obligation is an object, not %s", t)
 	}
 	o := &obligation{returned: t}
-	r := reader{object: object, used: map[string]bool{}}
+	r := reader{object: object}
 	o.key, o.note = r.text("key"), r.text("note")
 	o.because, o.missing = r.texts("because"), r.texts("missing")
 	o.facts, o.health = r.term("facts"), r.term("health")
@@ -115,14 +116,26 @@ func readObligation(t *ast.Term) (*obligation, error) {
 	default:
 		r.fail("an obligation has by, every, value, holds, ask or lifted")
 	}
-	r.unknownFields()
+	r.unknownFields(o.shape)
 	return o, r.err
 }
+
+// fieldsOfAny are the fields that an obligation of any shape may have, fieldsOfShape those of its own.
+var (
+	fieldsOfAny   = []string{"key", "note", "because", "missing", "facts", "health", "during"}
+	fieldsOfShape = map[shape][]string{
+		once:      {"by", "after", "within", "no_sooner_than"},
+		recurring: {"every", "by", "first", "touches"},
+		limit:     {"value", "on", "at_most", "below", "at_least", "above"},
+		condition: {"holds", "on", "for"},
+		opinion:   {"ask", "of", "by", "on"},
+		lifted:    {"lifted", "cite", "on"},
+	}
+)
 
 // reader takes fields out of an obligation. The first mistake is kept.
 type reader struct {
 	object ast.Object
-	used   map[string]bool
 	err    error
 }
 
@@ -133,7 +146,6 @@ func (r *reader) fail(format string, args ...any) {
 }
 
 func (r *reader) term(field string) *ast.Term {
-	r.used[field] = true
 	return r.object.Get(ast.InternedTerm(field))
 }
 
@@ -241,7 +253,7 @@ func (r *reader) inside(field string) *reader {
 		r.fail("%s is an object, not %s", field, t)
 		return nil
 	}
-	return &reader{object: object, used: map[string]bool{}}
+	return &reader{object: object}
 }
 
 func (r *reader) spell(field string) *calendar.Spell {
@@ -269,9 +281,10 @@ func (r *reader) link(field string) *dossier.Link {
 }
 
 // unknownFields refuses a field that no shape has, so that a slip of the pen is not passed over.
-func (r *reader) unknownFields() {
+func (r *reader) unknownFields(s shape) {
 	r.object.Foreach(func(k, _ *ast.Term) {
-		if name, ok := k.Value.(ast.String); !ok || !r.used[string(name)] {
+		name, ok := k.Value.(ast.String)
+		if !ok || !slices.Contains(fieldsOfAny, string(name)) && !slices.Contains(fieldsOfShape[s], string(name)) {
 			r.fail("an obligation of this shape has no field %s", k)
 		}
 	})

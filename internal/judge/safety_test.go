@@ -127,4 +127,3 @@ func TestEveryDutyAnswersForEmptyDossiers(t *testing.T) {
 		}
 	}
 }
-

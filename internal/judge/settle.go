@@ -37,6 +37,7 @@ type settler struct {
 	bundle *bundle.Bundle
 	file   *dossier.File
 	asOf   calendar.Date
+	brief  func(*outcome) bool // whether an outcome is only counted, so that it needs no words; nil for never
 }
 
 // settle decides an obligation by date and clock. It gives no outcome for an obligation that has ended
@@ -258,10 +259,14 @@ func (s *settler) limit(o *obligation) outcome {
 		out.params = []used{u}
 		return out
 	}
-	out := outcome{status: finding.Gap, key: key, refs: o.because, params: []used{u}, facts: map[string]any{"value": o.value}}
+	out := outcome{status: finding.Gap, key: key, refs: o.because, params: []used{u}}
 	if within(o.value, o.compare, bound) {
 		out.status = finding.Met
 	}
+	if s.isBrief(&out) {
+		return out
+	}
+	out.facts = map[string]any{"value": o.value}
 	out.message = joinSentences(o.note, limitWords(o, u, bound))
 	return out
 }
@@ -297,11 +302,14 @@ func (s *settler) condition(o *obligation) []outcome {
 		u.params = out.params
 		return []outcome{u}
 	}
-	out.status, out.message = finding.Gap, joinSentences(o.note)
+	out.status = finding.Gap
 	if *o.holds {
 		out.status = finding.Met
 	}
-	if out.message == "" {
+	if s.isBrief(&out) {
+		return []outcome{out}
+	}
+	if out.message = joinSentences(o.note); out.message == "" {
 		out.message = map[bool]string{true: "Fulfilled.", false: "Not fulfilled."}[*o.holds]
 	}
 	return []outcome{out}
@@ -332,3 +340,5 @@ func (out *outcome) parameterFacts(facts map[string]any) {
 	}
 	maps.Copy(facts, out.facts)
 }
+
+func (s *settler) isBrief(out *outcome) bool { return s.brief != nil && s.brief(out) }

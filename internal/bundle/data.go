@@ -1,0 +1,153 @@
+package bundle
+
+import (
+	"fmt"
+	"maps"
+	"path"
+	"slices"
+
+	"hearduty/internal/calendar"
+	"hearduty/internal/diag"
+)
+
+// checkData checks what a schema cannot: that periods of parameters follow each other, and that names
+// used in the measures exist.
+func (b *Bundle) checkData(dir string, problems *diag.List) {
+	file := path.Join(dir, "parameters", "data.yaml")
+	for _, name := range slices.Sorted(maps.Keys(b.Parameters)) {
+		p := b.Parameters[name]
+		for i := range p.Values {
+			if err := p.Values[i].prepare(); err != nil {
+				problems.Errorf(diag.Position{File: file, Field: name}, "Correct the value", "the parameter %s: %v", name, err)
+			}
+		}
+		for i := 1; i < len(p.Values); i++ {
+			before, v := &p.Values[i-1], &p.Values[i]
+			if v.from <= before.from || before.to > v.from {
+				problems.Errorf(diag.Position{File: file, Field: name}, "List the values by date, each ending before the next begins",
+					"the parameter %s has two values on %s", name, v.from)
+			}
+			if !before.to.Known() {
+				before.to = v.from
+			}
+		}
+	}
+	b.checkMeasures(path.Join(dir, "measures", "data.yaml"), problems)
+	for name, c := range b.Choices {
+		if !slices.Contains(c.Values, c.Default) {
+			problems.Errorf(diag.Position{File: path.Join(dir, "choices", "data.yaml"), Field: name}, "Take the default from the values",
+				"the default of the choice %s is not among its values", name)
+		}
+	}
+}
+
+func (b *Bundle) checkMeasures(file string, problems *diag.List) {
+	at := diag.Position{File: file}
+	needParameter := func(name, where string) {
+		if _, ok := b.Parameters[name]; name != "" && !ok {
+			problems.Errorf(at, nearRemedy(name, slices.Collect(maps.Keys(b.Parameters))), "%s names the parameter %q, which the bundle does not have", where, name)
+		}
+	}
+	m := b.Measures
+	for _, name := range slices.Sorted(maps.Keys(m.Exposure.Levels)) {
+		level := m.Exposure.Levels[name]
+		if _, ok := m.Exposure.Channels[level.Channel]; !ok {
+			problems.Errorf(at, "Name one of the channels", "the level %s names the channel %q, which the measures do not have", name, level.Channel)
+		}
+		if (level.AtLeast == "") == (level.Above == "") {
+			problems.Errorf(at, "Give exactly one of the two", "the level %s needs either at_least or above", name)
+		}
+		needParameter(level.AtLeast, "the level "+name)
+		needParameter(level.Above, "the level "+name)
+	}
+	if _, ok := m.Exposure.Levels[m.Exposure.Enrols]; !ok {
+		problems.Errorf(at, "Name one of the levels", "enrols names the level %q, which the measures do not have", m.Exposure.Enrols)
+	}
+	if _, ok := m.Exposure.Channels[m.Protection.Channel]; !ok {
+		problems.Errorf(at, "Name one of the channels", "protection names the channel %q, which the measures do not have", m.Protection.Channel)
+	}
+	needParameter(m.Hearing.Shift.AtLeast, "hearing.shift")
+	needParameter(m.Hearing.Shift.Retest, "hearing.shift")
+	if r := m.Hearing.Recordable; r != nil {
+		needParameter(r.AtLeast, "hearing.recordable")
+	}
+	if a := m.Hearing.AgeCorrection; a != nil {
+		if _, ok := b.Choices[a.Choice]; !ok {
+			problems.Errorf(at, "Name one of the choices", "age_correction names the choice %q, which the bundle does not have", a.Choice)
+		}
+	}
+}
+
+// checkParagraphs checks that every duty answers a paragraph and every paragraph is accounted for once.
+func (b *Bundle) checkParagraphs(dir string, problems *diag.List) {
+	at := diag.Position{File: path.Join(dir, "paragraphs", "data.yaml")}
+	checked := map[string]bool{}
+	for _, name := range slices.Sorted(maps.Keys(b.Paragraphs)) {
+		p := b.Paragraphs[name]
+		ways := 0
+		for _, given := range []bool{len(p.Checked) > 0, p.Attested != "", p.Outside != ""} {
+			if given {
+				ways++
+			}
+		}
+		if ways == 0 {
+			problems.Errorf(at, "Say by which duty it is checked, by which document attested, or why it is outside", "the paragraph %s is not accounted for", name)
+		}
+		for _, id := range p.Checked {
+			checked[id] = true
+			if _, ok := b.Duty(id); !ok {
+				problems.Errorf(at, nearRemedy(id, b.dutyIDs()), "the paragraph %s is checked by %q, which is no duty of the bundle", name, id)
+			}
+		}
+	}
+	for _, d := range b.Duties {
+		if !checked[d.ID] {
+			problems.Errorf(at, "Name the duty under its paragraph", "no paragraph says that it is checked by the duty %s", d.ID)
+		}
+	}
+}
+
+func (b *Bundle) dutyIDs() []string {
+	ids := make([]string, len(b.Duties))
+	for i, d := range b.Duties {
+		ids[i] = d.ID
+	}
+	return ids
+}
+
+func nearRemedy(name string, known []string) string {
+	slices.Sort(known)
+	if near := diag.Near(name, known); near != "" {
+		return fmt.Sprintf("Did you mean %q?", near)
+	}
+	return "Correct the name, or add it to the bundle"
+}
+
+// prepare reads the dates and the value once.
+func (v *Value) prepare() (err error) {
+	if v.from, err = calendar.Parse(v.From); err != nil {
+		return err
+	}
+	if v.To != "" {
+		if v.to, err = calendar.Parse(v.To); err != nil {
+			return err
+		}
+		if v.to <= v.from {
+			return fmt.Errorf("a value ends on %s, before it begins", v.To)
+		}
+	}
+	switch value := v.Value.(type) {
+	case float64:
+		v.number, v.kind = value, numberValue
+	case map[string]any:
+		if err := remarshal(value, &v.interval); err != nil {
+			return err
+		}
+		v.kind = intervalValue
+	case []any:
+		v.kind = wordsValue
+	default:
+		return fmt.Errorf("%v is neither a number, an interval nor a list", value)
+	}
+	return nil
+}

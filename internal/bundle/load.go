@@ -1,0 +1,176 @@
+package bundle
+
+import (
+	"crypto/sha256"
+	"encoding/hex"
+	"encoding/json"
+	"fmt"
+	"io/fs"
+	"path"
+	"slices"
+	"strings"
+	"sync"
+
+	"hearduty/internal/diag"
+	"hearduty/internal/schema"
+	"hearduty/policies"
+)
+
+// commonDir is the folder of the rules that all bundles share.
+const commonDir = "common"
+
+// Embedded loads the bundles that are built into the program. It reads them once.
+func Embedded() (Library, error) { return embedded() }
+
+var embedded = sync.OnceValues(func() (Library, error) {
+	ids, err := Folders(policies.FS)
+	if err != nil {
+		return nil, err
+	}
+	library := Library{}
+	for _, id := range ids {
+		b, problems := Load(policies.FS, id)
+		if err := problems.Err(); err != nil {
+			return nil, err
+		}
+		library[id] = b
+	}
+	return library, nil
+})
+
+// Folders lists the bundle folders of a file system: those with a .manifest, without the shared rules.
+func Folders(fsys fs.FS) ([]string, error) {
+	manifests, err := fs.Glob(fsys, "*/.manifest")
+	if err != nil {
+		return nil, err
+	}
+	var ids []string
+	for _, m := range manifests {
+		if dir := path.Dir(m); dir != commonDir {
+			ids = append(ids, dir)
+		}
+	}
+	return ids, nil
+}
+
+// files holds the contents of a bundle by path within the file system.
+type files map[string][]byte
+
+func readFiles(fsys fs.FS, dirs ...string) (files, error) {
+	out := files{}
+	for _, dir := range dirs {
+		err := fs.WalkDir(fsys, dir, func(p string, entry fs.DirEntry, err error) error {
+			if err != nil || entry.IsDir() {
+				return err
+			}
+			out[p], err = fs.ReadFile(fsys, p)
+			return err
+		})
+		if err != nil {
+			return nil, fmt.Errorf("the bundle folder %s cannot be read: %w", dir, err)
+		}
+	}
+	return out, nil
+}
+
+func (f files) paths() []string {
+	out := make([]string, 0, len(f))
+	for p := range f {
+		out = append(out, p)
+	}
+	slices.Sort(out)
+	return out
+}
+
+// digest gives the SHA-256 over all paths and contents, in order of path.
+func (f files) digest() string {
+	h := sha256.New()
+	for _, p := range f.paths() {
+		fmt.Fprintf(h, "%s\x00%d\x00", p, len(f[p]))
+		h.Write(f[p])
+	}
+	return hex.EncodeToString(h.Sum(nil))
+}
+
+// Load reads the bundle in the folder dir, together with the shared rules beside it, and checks it. The
+// diagnostics name file, line and column of whatever is wrong; with an error among them there is no bundle.
+func Load(fsys fs.FS, dir string) (*Bundle, diag.List) {
+	var problems diag.List
+	all, err := readFiles(fsys, dir, commonDir)
+	if err != nil {
+		problems.Errorf(diag.Position{File: dir}, "Name a folder that holds a bundle", "%v", err)
+		return nil, problems
+	}
+	b := &Bundle{SHA256: all.digest()}
+	b.readManifest(all, dir, &problems)
+	b.readData(all, dir, &problems)
+	if problems.Failed() {
+		return nil, problems
+	}
+	b.checkData(dir, &problems)
+	b.readRules(all, dir, &problems)
+	if problems.Failed() {
+		return nil, problems
+	}
+	b.checkParagraphs(dir, &problems)
+	if problems.Failed() {
+		return nil, problems
+	}
+	return b, problems
+}
+
+func (b *Bundle) readManifest(all files, dir string, problems *diag.List) {
+	file := path.Join(dir, ".manifest")
+	var manifest struct {
+		Revision string   `json:"revision"`
+		Roots    []string `json:"roots"`
+	}
+	if err := json.Unmarshal(all[file], &manifest); err != nil {
+		problems.Errorf(diag.Position{File: file}, "Write a JSON object with revision and roots", "the manifest cannot be read: %v", err)
+	}
+	b.Revision = manifest.Revision
+	if b.Revision == "" {
+		problems.Errorf(diag.Position{File: file}, "Add a revision, such as its date", "the manifest has no revision")
+	}
+}
+
+// readData reads the five data files, each against its schema, into the bundle and into b.Data.
+func (b *Bundle) readData(all files, dir string, problems *diag.List) {
+	b.Data = map[string]any{}
+	for name, into := range map[string]any{
+		"about": &b.About, "parameters": &b.Parameters, "choices": &b.Choices, "paragraphs": &b.Paragraphs, "measures": &b.Measures,
+	} {
+		file := path.Join(dir, name, "data.yaml")
+		content, ok := all[file]
+		if !ok {
+			problems.Errorf(diag.Position{File: file}, "Add the file", "the bundle has no %s", name)
+			continue
+		}
+		value, found := schema.YAML(name, file, content)
+		*problems = append(*problems, found...)
+		if found.Failed() {
+			continue
+		}
+		b.Data[name] = value
+		if err := remarshal(value, into); err != nil {
+			problems.Errorf(diag.Position{File: file}, "", "%v", err)
+		}
+	}
+	problems.Sort()
+	b.ID = b.About.ID
+	if base := path.Base(dir); b.ID != base && b.ID != "" {
+		problems.Errorf(diag.Position{File: path.Join(dir, "about", "data.yaml")}, "Give the folder and the bundle the same name",
+			"the bundle calls itself %q but lies in the folder %q", b.ID, base)
+	}
+}
+
+func remarshal(value, into any) error {
+	text, err := json.Marshal(value)
+	if err != nil {
+		return err
+	}
+	return json.Unmarshal(text, into)
+}
+
+// isTest says whether a module holds tests of rules.
+func isTest(file string) bool { return strings.HasSuffix(file, "_test.rego") }

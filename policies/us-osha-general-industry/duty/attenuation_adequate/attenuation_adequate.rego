@@ -1,0 +1,81 @@
+# METADATA
+# title: Adequate attenuation
+# description: >-
+#   The attenuation of protectors is evaluated for the noise in which they are worn, by a method of Appendix B. Under the
+#   protector the 8-hour average is 90 dBA or less where paragraph (b) requires protectors, and 85 dBA or less for an
+#   employee who has had a standard threshold shift. Half the attenuation is shown for information and decides nothing.
+# custom:
+#   cite: 29 CFR 1910.95(j)(1)-(3), Appendix B
+#   subject: worker
+#   topic: protectors
+#   severity: major
+#   evidence: [protector_issue, protector, measurement, fit_test]
+#   remedy: Give the worker a protector with more attenuation, or lower the exposure, and evaluate again.
+package duty.attenuation_adequate
+
+import data.common
+import rego.v2
+
+obligations contains object.union(estimate, {"at_most": "attenuation_target_after_shift"}) if {
+	has_protector
+	after_shift
+}
+
+obligations contains object.union(estimate, {"at_most": "attenuation_target"}) if {
+	has_protector
+	not after_shift
+	above_limit_or_not_known
+}
+
+not_owed contains "the records do not show exposure at or above the action level now" if not in_program_now
+
+not_owed contains "no protector at hand, which is a finding of its own" if {
+	in_program_now
+	not has_protector
+}
+
+not_owed contains "neither above the permissible exposure nor after a threshold shift" if {
+	has_protector
+	not after_shift
+	not above_limit_or_not_known
+}
+
+estimate := {
+	"value": input.protection.under_db,
+	"note": "estimated level under the protector",
+	"missing": [word | some word in input.protection.missing; input.protection.under_db == null],
+	"because": common.refs([input.protection]),
+	"facts": {
+		"protector": input.protection.protector,
+		"exposure_dba": input.protection.exposure_dba,
+		"method": input.protection.method,
+		"working": input.protection.working,
+		"with_half_the_attenuation_dba": input.protection.halved_db,
+		"personal_attenuation_rating_db": input.protection.par_db,
+	},
+}
+
+in_program_now if {
+	some spell in input.enrolled
+	spell.current == true
+}
+
+has_protector if {
+	in_program_now
+	input.protection != null
+}
+
+after_shift if {
+	some spell in input.after_shift
+	spell.current == true
+}
+
+above_limit_or_not_known if {
+	some spell in input.exposed.limit
+	spell.current == true
+}
+
+above_limit_or_not_known if {
+	some stretch in input.exposure_unknown.limit
+	common.covers(stretch, input.as_of)
+}

@@ -1,0 +1,54 @@
+# METADATA
+# title: Quiet before the baseline
+# description: >-
+#   Testing to establish a baseline audiogram is preceded by at least 14 hours without exposure to workplace
+#   noise. Hearing protectors may be used in place of that requirement.
+# custom:
+#   cite: 29 CFR 1910.95(g)(5)(iii)
+#   subject: worker
+#   topic: audiometry
+#   severity: major
+#   evidence: [audiogram]
+#   remedy: >-
+#     Find out how long the worker was away from workplace noise before the test, and whether protectors were worn; if
+#     neither is enough, obtain a new baseline after the quiet period.
+package duty.baseline_quiet_period
+
+import rego.v2
+
+obligations contains {
+	"holds": true,
+	"on": input.baseline.date,
+	"note": "protectors were worn in place of the quiet period",
+	"because": [input.baseline.ref],
+} if {
+	asked_of_the_baseline
+	protectors_instead
+}
+
+obligations contains {
+	"value": input.baseline.quiet_hours,
+	"at_least": "quiet_period",
+	"on": input.baseline.date,
+	"missing": missing,
+	"note": "quiet before the baseline, with no protectors on record in its place",
+	"because": [input.baseline.ref],
+} if {
+	asked_of_the_baseline
+	not protectors_instead
+}
+
+asked_of_the_baseline if {
+	input.baseline != null
+	input.baseline.in_program
+}
+
+protectors_instead if input.baseline.quiet_by_protectors == true
+
+missing := ["hours without workplace noise before the baseline"] if {
+	input.baseline.quiet_hours == null
+} else := []
+
+not_owed contains "there is no baseline yet" if input.baseline == null
+
+not_owed contains "the worker has never been in the program" if input.baseline.in_program == false

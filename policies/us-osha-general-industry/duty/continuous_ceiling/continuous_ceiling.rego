@@ -1,0 +1,37 @@
+# METADATA
+# title: Ceiling of continuous noise
+# description: >-
+#   Table G-16 ends at 115 dBA, slow, for a quarter of an hour or less a day. It gives no time for a higher level, which
+#   OSHA reads as: never.
+# custom:
+#   cite: 29 CFR 1910.95(b), Table G-16
+#   subject: group
+#   topic: controls
+#   severity: major
+#   evidence: [measurement]
+#   remedy: Stop work in continuous noise above 115 dBA until the source is controlled, and measure again.
+package duty.continuous_ceiling
+
+import data.common
+import rego.v2
+
+obligations contains {
+	"key": measurement.id,
+	"value": measurement.max_dba,
+	"at_most": "continuous_ceiling",
+	"on": measurement.date,
+	"note": "highest continuous level",
+	"missing": common.missing(measurement.max_dba, "this level"),
+	"because": [measurement.ref],
+	"facts": {"workers": input.workers},
+} if {
+	some measurement in noisy
+}
+
+not_owed contains "no highest level on record, and no measurement at the action level" if count(noisy) == 0
+
+noisy := [measurement | some measurement in input.measurements; may_matter(measurement)]
+
+may_matter(measurement) if measurement.max_dba != null
+
+may_matter(measurement) if measurement.reaches_enrolling == true

@@ -1,0 +1,36 @@
+package duty.continuous_ceiling_test
+
+import data.duty.continuous_ceiling
+import rego.v2
+
+group(highest, reaches) := {"workers": 12, "measurements": [{
+	"id": "m1", "ref": "measurement/m1", "date": "2024-03-05",
+	"max_dba": highest, "reaches_enrolling": reaches,
+}]}
+
+test_highest_level_is_held_against_the_ceiling if {
+	some o in continuous_ceiling.obligations with input as group(115.1, true)
+	o.value == 115.1
+	o.at_most == "continuous_ceiling"
+	o.on == "2024-03-05"
+}
+
+test_highest_level_counts_even_below_the_action_level if {
+	count(continuous_ceiling.obligations) == 1 with input as group(96, false)
+}
+
+test_noisy_without_highest_level if {
+	some o in continuous_ceiling.obligations with input as group(null, true)
+	o.value == null
+	o.missing == ["this level"]
+	count(continuous_ceiling.not_owed) == 0 with input as group(null, true)
+}
+
+test_quiet_without_highest_level if {
+	every reaches in [false, null] {
+		count(continuous_ceiling.obligations) == 0 with input as group(null, reaches)
+		count(continuous_ceiling.not_owed) == 1 with input as group(null, reaches)
+	}
+}
+
+test_never_measured if count(continuous_ceiling.not_owed) == 1 with input as {"workers": 0, "measurements": []}

@@ -1,0 +1,87 @@
+# METADATA
+# title: Feasible controls
+# description: >-
+#   When employees are exposed above Table G-16, feasible administrative or engineering controls are used. If these do not
+#   bring the levels within the table, protectors that do are provided and used. What is feasible is a judgement.
+# custom:
+#   cite: 29 CFR 1910.95(b)(1)
+#   subject: group
+#   topic: controls
+#   severity: major
+#   evidence: [measurement, control]
+#   remedy: Have a competent person study engineering and administrative controls, put the feasible ones in place, and record the study.
+package duty.feasible_controls
+
+import data.common
+import rego.v2
+
+obligations contains {
+	"holds": true,
+	"on": latest_control.date,
+	"because": [latest_control.ref],
+	"facts": facts,
+} if {
+	above_limit
+	controlled
+}
+
+obligations contains {
+	"holds": false,
+	"on": latest_control.date,
+	"note": "a control was found feasible and is not in place",
+	"because": [latest_control.ref],
+	"facts": facts,
+} if {
+	above_limit
+	feasible
+	not controlled
+}
+
+obligations contains {
+	"ask": "Which administrative or engineering controls are feasible for this group?",
+	"of": "competent person (engineering)",
+	"because": common.refs(input.controls),
+	"facts": facts,
+} if {
+	above_limit
+	not feasible
+	not controlled
+}
+
+obligations contains {
+	"holds": null,
+	"note": "it is not known whether the group is above the permissible exposure",
+	"missing": reasons_not_known,
+	"facts": facts,
+} if {
+	not above_limit
+	count(reasons_not_known) > 0
+}
+
+not_owed contains "the group is not above the permissible exposure" if {
+	not above_limit
+	count(reasons_not_known) == 0
+}
+
+above_limit if {
+	some spell in input.exposed.limit
+	spell.current == true
+}
+
+reasons_not_known := [stretch.reason |
+	some stretch in input.exposure_unknown.limit
+	common.covers(stretch, input.as_of)
+]
+
+latest_control := input.controls[count(input.controls) - 1]
+
+feasible if latest_control.feasible == "yes"
+
+controlled if latest_control.feasible == "no"
+
+controlled if {
+	feasible
+	latest_control.installed_on != null
+}
+
+facts := {"workers": input.workers, "controls": [control.what | some control in input.controls]}

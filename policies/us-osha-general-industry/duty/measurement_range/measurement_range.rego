@@ -1,0 +1,46 @@
+# METADATA
+# title: Range of the measurement
+# description: >-
+#   All continuous, intermittent and impulsive sound from 80 to 130 dB is integrated into the measurement: the
+#   instrument's threshold is no higher than 80 dB and its range reaches 130 dB.
+# custom:
+#   cite: 29 CFR 1910.95(d)(2)(i)
+#   subject: group
+#   topic: monitoring
+#   severity: major
+#   evidence: [measurement]
+#   remedy: Measure again with the dosimeter set to a threshold of 80 dBA and a range up to 130 dBA, and record both settings.
+package duty.measurement_range
+
+import data.common
+import rego.v2
+
+obligations contains {
+	"key": sprintf("%s/threshold", [measurement.id]),
+	"value": measurement.threshold_db,
+	"at_most": "integration_floor",
+	"on": measurement.date,
+	"note": "integration threshold of the dose",
+	"missing": common.missing(measurement.threshold_db, "this setting"),
+	"because": [measurement.ref],
+	"facts": {"instrument": measurement.instrument},
+} if {
+	some measurement in doses
+}
+
+obligations contains {
+	"key": sprintf("%s/upper end", [measurement.id]),
+	"value": measurement.upper_db,
+	"at_least": "integration_top",
+	"on": measurement.date,
+	"note": "upper end of the range of the dose",
+	"missing": common.missing(measurement.upper_db, "this setting"),
+	"because": [measurement.ref],
+	"facts": {"instrument": measurement.instrument},
+} if {
+	some measurement in doses
+}
+
+not_owed contains "no noise dose on record" if count(doses) == 0
+
+doses := [measurement | some measurement in input.measurements; measurement.dosed == true]

@@ -1,0 +1,39 @@
+package duty.monitoring_started_test
+
+import data.duty.monitoring_started
+import rego.v2
+
+group := {"suspected_noisy": true, "first_survey": null, "measurements": [], "workers": 12}
+
+survey := {"date": "2024-03-05", "ref": "measurement/m1"}
+
+holds(dossier) := found if found := {o.holds | some o in monitoring_started.obligations} with input as dossier
+
+test_suspected_and_never_measured if {
+	holds(group) == {false}
+	count(monitoring_started.not_owed) == 0 with input as group
+}
+
+test_surveyed if holds(object.union(group, {"first_survey": survey})) == {true}
+
+test_survey_counts_whatever_was_suspected if {
+	every suspicion in [true, false, null] {
+		dossier := object.union(group, {"first_survey": survey, "suspected_noisy": suspicion})
+		holds(dossier) == {true}
+		count(monitoring_started.not_owed) == 0 with input as dossier
+	}
+}
+
+test_measured_without_result if holds(object.union(group, {"measurements": [{"id": "m1"}]})) == {null}
+
+test_nobody_has_said if {
+	some o in monitoring_started.obligations with input as object.union(group, {"suspected_noisy": null})
+	o.holds == null
+	o.missing == ["whether noise is suspected"]
+}
+
+test_not_suspected if {
+	quiet := object.union(group, {"suspected_noisy": false})
+	holds(quiet) == set()
+	count(monitoring_started.not_owed) == 1 with input as quiet
+}

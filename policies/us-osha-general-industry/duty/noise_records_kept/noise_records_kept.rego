@@ -1,0 +1,55 @@
+# METADATA
+# title: Noise records kept
+# description: >-
+#   An accurate record of all exposure measurements is kept, and each is kept for two years.
+# custom:
+#   cite: 29 CFR 1910.95(m)(1), (m)(3)(i)
+#   subject: site
+#   topic: records
+#   severity: major
+#   evidence: [measurement, notice, task]
+#   remedy: Find the record of the measurement and keep it with the others; measure again if it cannot be found.
+package duty.noise_records_kept
+
+import data.common
+import rego.v2
+
+obligations contains {
+	"key": lost.id,
+	"holds": false,
+	"on": lost.date,
+	"for": "noise_record_retention",
+	"note": "another record refers to a measurement that is not in the records",
+	"because": [lost.ref],
+	"facts": {"measurement": lost.id},
+} if {
+	some lost in input.missing_measurements
+}
+
+obligations contains {
+	"key": "on file",
+	"holds": true,
+	"because": common.refs([input.latest_measurement]),
+	"facts": {"measurements": input.measurements},
+} if {
+	in_program
+	input.measurements > 0
+}
+
+obligations contains {
+	"key": "on file",
+	"holds": null,
+	"note": "workers are in the program and no measurement is on record",
+	"missing": ["the exposure measurements of the site"],
+	"facts": {"workers_in_program": input.enrolled_now},
+} if {
+	in_program
+	input.measurements == 0
+}
+
+not_owed contains "nobody has been at or above the action level" if {
+	not in_program
+	count(input.missing_measurements) == 0
+}
+
+in_program if input.enrolled_ever > 0

@@ -1,0 +1,46 @@
+# METADATA
+# title: Protectors offered
+# description: >-
+#   Hearing protectors are available, at no cost, to every employee exposed at or above the action level, and are replaced
+#   as necessary. The paragraph sets no time: they are owed from the first day.
+# custom:
+#   cite: 29 CFR 1910.95(i)(1)
+#   subject: worker
+#   topic: protectors
+#   severity: major
+#   evidence: [protector_issue, measurement]
+#   remedy: Give the worker suitable protectors, free of charge, and record the issue.
+package duty.protectors_offered
+
+import data.common
+import rego.v2
+
+obligations contains {
+	"key": spell.from,
+	"after": spell.from,
+	"by": spell.protector,
+	"during": spell,
+	"because": common.refs([spell.protector]),
+} if {
+	some spell in in_program_now
+	not used_up(spell)
+}
+
+obligations contains {
+	"key": spell.from,
+	"holds": false,
+	"note": "protectors were issued, but none is at hand now",
+	"because": common.refs([spell.protector]),
+} if {
+	some spell in in_program_now
+	used_up(spell)
+}
+
+not_owed contains "the records do not show exposure at or above the action level now" if count(in_program_now) == 0
+
+in_program_now := [spell | some spell in input.enrolled; spell.current == true]
+
+used_up(spell) if {
+	spell.protector != null
+	input.protection == null
+}

@@ -1,0 +1,57 @@
+# METADATA
+# title: Background noise of the test room
+# description: >-
+#   The background level in a room for audiometric tests does not exceed Table D-1 of Appendix D in any octave band: 40 dB
+#   at 500 and 1000 Hz, 47 dB at 2000 Hz, 57 dB at 4000 Hz, 62 dB at 8000 Hz. The paragraph sets no interval; the latest
+#   survey is judged.
+# custom:
+#   cite: 29 CFR 1910.95(h)(4), Appendix D
+#   subject: room
+#   topic: test-quality
+#   severity: major
+#   evidence: [room_survey, audiogram]
+#   remedy: Quieten the room or test elsewhere, survey all five octave bands again, and have a professional look at the tests made in the room.
+package duty.test_room_background
+
+import data.common
+import rego.v2
+
+table_d1 := [
+	{"band": "500", "at_most": "room_500"},
+	{"band": "1000", "at_most": "room_1000"},
+	{"band": "2000", "at_most": "room_2000"},
+	{"band": "4000", "at_most": "room_4000"},
+	{"band": "8000", "at_most": "room_8000"},
+]
+
+obligations contains {
+	"key": sprintf("%s/%s Hz", [survey.date, line.band]),
+	"value": level,
+	"at_most": line.at_most,
+	"on": survey.date,
+	"note": sprintf("octave band at %s Hz", [line.band]),
+	"missing": common.missing(level, "the level in this octave band"),
+	"because": [survey.ref],
+	"facts": {"band_hz": line.band, "tests_in_room": input.tests, "workers_tested": input.workers},
+} if {
+	in_use
+	survey := input.latest_survey
+	survey != null
+	some line in table_d1
+	level := object.get(survey.band, line.band, null)
+}
+
+obligations contains {
+	"holds": null,
+	"note": "tests were made in a room whose background levels are not on record",
+	"missing": ["a survey of the background levels"],
+	"because": common.refs([input.first_use]),
+	"facts": {"tests_in_room": input.tests, "workers_tested": input.workers},
+} if {
+	in_use
+	input.latest_survey == null
+}
+
+not_owed contains "no hearing test was made in it" if not in_use
+
+in_use if input.tests > 0

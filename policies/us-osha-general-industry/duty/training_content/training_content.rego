@@ -1,0 +1,62 @@
+# METADATA
+# title: Contents of the training
+# description: >-
+#   The employer ensures that each employee is informed of the effects of noise on hearing; of the purpose of hearing
+#   protectors, the advantages, disadvantages and attenuation of the various types, and instructions on selection,
+#   fitting, use and care; and of the purpose of audiometric testing, with an explanation of the test procedures. The
+#   sessions of a yearly round add up.
+# custom:
+#   cite: 29 CFR 1910.95(k)(3)
+#   subject: worker
+#   topic: training
+#   severity: major
+#   evidence: [training]
+#   remedy: Train the worker on the topics that are missing, or enter the topics of the sessions that were held.
+package duty.training_content
+
+import data.common
+import rego.v2
+
+obligations contains object.union(verdict, {
+	"on": input.training.date,
+	"facts": {"topics": input.training.topics},
+	"because": [input.training.ref],
+}) if {
+	in_program
+	input.training != null
+}
+
+verdict := {
+	"holds": null,
+	"missing": ["topics of the training"],
+	"note": "a training session is on record",
+} if {
+	input.training.topics_unrecorded
+} else := {
+	"holds": null,
+	"missing": ["the topics that the law asks for on that day"],
+	"note": "no list of topics is in force on the day of the training",
+} if {
+	required == null
+} else := {
+	"holds": false,
+	"note": sprintf("the training left out: %s", [concat(", ", left_out)]),
+} if {
+	count(left_out) > 0
+} else := {
+	"holds": true,
+	"note": "the training covered every topic",
+}
+
+required := common.at(data.parameters.training_topics, input.training.date)
+
+left_out := [topic | some topic in required; not topic in input.training.topics]
+
+in_program if {
+	some stretch in input.enrolled
+	stretch.current
+}
+
+not_owed contains "the worker is not in the program now" if not in_program
+
+not_owed contains "there is no training yet" if input.training == null
