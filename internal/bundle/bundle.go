@@ -24,8 +24,9 @@ type Bundle struct {
 	Measures   dossier.Measures
 	Duties     []*Duty // by topic, then in order of citation
 
-	Compiler *ast.Compiler  // the checked rules
-	Data     map[string]any // all data of the bundle, JSON-shaped
+	Week     *calendar.WorkingWeek // working days, if the law counts in them
+	Compiler *ast.Compiler         // the checked rules
+	Data     map[string]any        // all data of the bundle, JSON-shaped
 }
 
 // About says what the bundle is: about/data.yaml.
@@ -76,6 +77,7 @@ type Value struct {
 	number   float64
 	interval calendar.Interval
 	kind     valueKind
+	fact     map[string]any
 }
 
 type valueKind uint8
@@ -198,6 +200,10 @@ func (l Library) IDs() []string {
 	sort.Strings(ids)
 	return ids
 }
+
+// Fact gives the value with its citation and mark, as findings show it. All findings share one map, which
+// nobody may change.
+func (v *Value) Fact() map[string]any { return v.fact }
 
 // Plain gives a value as it stands in JSON, for facts.
 func (v *Value) Plain() any {

@@ -17,7 +17,7 @@ func (b *Bundle) checkData(dir string, problems *diag.List) {
 	for _, name := range slices.Sorted(maps.Keys(b.Parameters)) {
 		p := b.Parameters[name]
 		for i := range p.Values {
-			if err := p.Values[i].prepare(); err != nil {
+			if err := p.Values[i].prepare(p.Unit); err != nil {
 				problems.Errorf(diag.Position{File: file, Field: name}, "Correct the value", "the parameter %s: %v", name, err)
 			}
 		}
@@ -49,6 +49,13 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 		}
 	}
 	m := b.Measures
+	if m.WorkingDays != nil {
+		week, err := m.WorkingDays.Week()
+		if err != nil {
+			problems.Errorf(at, "Write such as saturday, and days as YYYY-MM-DD", "working_days: %v", err)
+		}
+		b.Week = week
+	}
 	for _, name := range slices.Sorted(maps.Keys(m.Exposure.Levels)) {
 		level := m.Exposure.Levels[name]
 		if _, ok := m.Exposure.Channels[level.Channel]; !ok {
@@ -124,7 +131,7 @@ func nearRemedy(name string, known []string) string {
 }
 
 // prepare reads the dates and the value once.
-func (v *Value) prepare() (err error) {
+func (v *Value) prepare(unit string) (err error) {
 	if v.from, err = calendar.Parse(v.From); err != nil {
 		return err
 	}
@@ -148,6 +155,10 @@ func (v *Value) prepare() (err error) {
 		v.kind = wordsValue
 	default:
 		return fmt.Errorf("%v is neither a number, an interval nor a list", value)
+	}
+	v.fact = map[string]any{"value": v.Plain(), "cite": v.Cite, "seen": v.Seen, "from": v.From}
+	if unit != "" {
+		v.fact["unit"] = unit
 	}
 	return nil
 }

@@ -150,6 +150,7 @@ type Audiogram struct {
 	ID             string        `json:"id" doc:"id of the audiogram"`
 	Purpose        string        `json:"purpose" doc:"why it was made"`
 	Enrolled       bool          `json:"enrolled" doc:"whether the worker was enrolled on that day"`
+	InProgram      bool          `json:"in_program" doc:"whether it was made under the program: while enrolled, or as the baseline of a worker who was ever enrolled; and not found invalid"`
 	Invalidated    bool          `json:"invalidated" doc:"whether a professional has found it invalid"`
 	RetestOf       string        `json:"retest_of" doc:"reference of the test that this retest repeats in time"`
 	ReplacedBy     string        `json:"replaced_by" doc:"reference of the retest in time that stands in for this test"`

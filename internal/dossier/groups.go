@@ -69,6 +69,7 @@ func (b *Builder) group(id string, u *Usage) *File {
 	if h == nil {
 		h = b.channels.historyOf(nil, nil)
 	}
+	b.markCurrent(d.Measurements, h)
 	pieces := h.during(calendar.Spell{From: 1}, id)
 	d.Exposures = b.exposures(pieces, refs)
 	d.Exposed, d.Unknown, _ = b.levelSpells(pieces)
@@ -99,7 +100,7 @@ func (b *Builder) group(id string, u *Usage) *File {
 	}
 	d.Documents = []Document{}
 	for _, doc := range until(b.Registers.Documents, b.AsOf, func(d *record.Document) Date { return d.Date }) {
-		if doc.Group == id && id != "" || doc.Group == "" && doc.Area != "" && doc.Area == d.Area {
+		if b.covers(doc, d) {
 			d.Documents = append(d.Documents, document(doc, refs))
 		}
 	}
@@ -248,4 +249,23 @@ func (b *Builder) logYear(year int, y *logYear, documents []Document, refs Refs)
 		}
 	}
 	return out
+}
+
+// markCurrent says which measurements describe the group as it is, and which were repeated since.
+func (b *Builder) markCurrent(list []Measurement, h *history) {
+	var since Date
+	for _, e := range h.events {
+		for _, m := range list {
+			if m.Date >= e.day {
+				since = max(since, e.day)
+			}
+		}
+	}
+	channel := b.channels.index(b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols].Channel)
+	for i := range list {
+		list[i].Current = list[i].Date >= since
+		list[i].Repeated = slices.ContainsFunc(h.results, func(r *result) bool {
+			return r.day > list[i].Date && r.doses[channel].exact()
+		})
+	}
 }

@@ -1,6 +1,11 @@
 package dossier
 
 import (
+	"fmt"
+	"slices"
+	"strings"
+	"time"
+
 	"hearduty/internal/audiometry"
 	"hearduty/internal/calendar"
 )
@@ -12,7 +17,47 @@ type Measures struct {
 	Hearing    HearingMeasures    `json:"hearing" doc:"how hearing tests are compared"`
 	Protection ProtectionMeasures `json:"protection" doc:"how the attenuation of protectors is estimated"`
 	Training   TrainingMeasures   `json:"training" doc:"how training sessions are taken together"`
+
+	WorkingDays *WorkingDays `json:"working_days,omitempty" doc:"which days are working days, for a law that counts in them"`
 }
+
+// WorkingDays say which days are working days, as far as that is known.
+type WorkingDays struct {
+	Rest       []string  `json:"rest" doc:"days of the week without work, such as saturday"`
+	Holidays   []Holiday `json:"holidays" doc:"days of rest beside them"`
+	KnownUntil string    `json:"known_until" format:"date" doc:"last day for which the holidays are listed; beyond it nothing is counted"`
+	Cite       string    `json:"cite" doc:"paragraph"`
+}
+
+// Holiday is a day of rest.
+type Holiday struct {
+	Date string `json:"date" format:"date" doc:"the day"`
+	Name string `json:"name" doc:"its name"`
+}
+
+// Week gives the calendar of working days. It fails for a day of the week or a date that is none.
+func (w *WorkingDays) Week() (*calendar.WorkingWeek, error) {
+	out := &calendar.WorkingWeek{Holidays: map[calendar.Date]bool{}}
+	for _, name := range w.Rest {
+		i := slices.IndexFunc(weekdays, func(d time.Weekday) bool { return strings.EqualFold(d.String(), name) })
+		if i < 0 {
+			return nil, fmt.Errorf("there is no day of the week %q", name)
+		}
+		out.Weekend[i] = true
+	}
+	for _, h := range w.Holidays {
+		day, err := calendar.Parse(h.Date)
+		if err != nil {
+			return nil, err
+		}
+		out.Holidays[day] = true
+	}
+	var err error
+	out.KnownUntil, err = calendar.Parse(w.KnownUntil)
+	return out, err
+}
+
+var weekdays = []time.Weekday{time.Sunday, time.Monday, time.Tuesday, time.Wednesday, time.Thursday, time.Friday, time.Saturday}
 
 // ExposureMeasures say how noise exposure is taken.
 type ExposureMeasures struct {

@@ -20,7 +20,7 @@ type Group struct {
 	Unknown        map[string][]Open  `json:"exposure_unknown" doc:"stretches in which it is not known whether the level is reached, with the reason"`
 	Changes        []Change           `json:"changes" doc:"changes of production, process, equipment or controls, oldest first"`
 	Controls       []Control          `json:"controls" doc:"noise controls and studies of them, oldest first"`
-	Documents      []Document         `json:"documents" doc:"documents of the group and its area"`
+	Documents      []Document         `json:"documents" doc:"documents of the group, of its area, and of the whole site"`
 }
 
 // Measurement is one noise measurement; its dose channels are taken together.
@@ -38,6 +38,8 @@ type Measurement struct {
 	PeakWeighting    string        `json:"peak_weighting" doc:"C, or Z for unweighted"`
 	ObserversInvited record.Answer `json:"observers_invited" doc:"whether workers or their representatives could observe"`
 	Reaches          record.Answer `json:"reaches_enrolling" doc:"whether it reaches the level that enrols"`
+	Current          bool          `json:"current" doc:"whether it describes the group as it is: the group was not measured again since a later change or control"`
+	Repeated         bool          `json:"repeated" doc:"whether a later measurement gives the dose on the enrolling channel exactly"`
 }
 
 // Change is a change that may alter exposure.
@@ -119,7 +121,7 @@ type UseYear struct {
 type Drift struct {
 	Link
 	Type                 string        `json:"kind" doc:"functional, acoustic or exhaustive"`
-	Largest              record.Number `json:"largest_db" doc:"largest deviation without its sign, dB"`
+	Largest              record.Number `json:"largest_db" doc:"largest deviation without its sign, dB; null where the check failed and no figure is on record"`
 	Acoustic             *Link         `json:"acoustic" doc:"the first acoustic or exhaustive calibration on or after that day"`
 	Exhaustive           *Link         `json:"exhaustive" doc:"the first exhaustive calibration on or after that day"`
 	UsedBeforeAcoustic   *Link         `json:"used_before_acoustic" doc:"the first test after the check and before the acoustic calibration"`

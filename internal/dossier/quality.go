@@ -169,7 +169,7 @@ func useYears(tests *used, checks []*record.Calibration, refs Refs) []UseYear {
 	return out
 }
 
-// driftOf takes a check that found a deviation, with what came after it.
+// driftOf takes a check that found a deviation, or failed without a figure, with what came after it.
 func driftOf(c *record.Calibration, checks []*record.Calibration, uses []Link, refs Refs) (Drift, bool) {
 	largest := -1.0
 	if c.Deviation != nil {
@@ -179,10 +179,11 @@ func driftOf(c *record.Calibration, checks []*record.Calibration, uses []Link, r
 			}
 		}
 	}
-	if largest <= 0 || c.Type != "functional" && c.Type != "acoustic" && c.Type != "exhaustive" {
+	failed := largest < 0 && c.Result == "fail"
+	if largest <= 0 && !failed || c.Type != "functional" && c.Type != "acoustic" && c.Type != "exhaustive" {
 		return Drift{}, false
 	}
-	d := Drift{Link: *link(refs, c, c.Date), Type: c.Type, Largest: record.Num(largest)}
+	d := Drift{Link: *link(refs, c, c.Date), Type: c.Type, Largest: record.Number{Value: largest, Known: !failed}}
 	for _, later := range checks {
 		if later.Date < c.Date || later == c {
 			continue

@@ -9,7 +9,7 @@ var Kinds = []string{KindWorker, KindGroup, KindSite, KindInstrument, KindRoom, 
 //	audiogram.baseline   the baseline audiogram
 //	training.any         training sessions
 //	training.protectors  sessions that covered protectors
-//	protector.issue      protectors handed over
+//	protector.issue      protectors handed over; one still at hand when a stretch in the program begins counts from that day
 //	protector.worn       checks that found protectors worn
 //	measurement.any      noise measurements
 //	calibration.*        checks of the kind; an exhaustive calibration is also an acoustic one
@@ -24,6 +24,10 @@ var SeriesOf = map[string][]string{
 	KindTester:     {"test.use"},
 }
 
+// Lasting are the series of which a record from before the time begins fulfils an obligation, too: a
+// baseline once obtained stays.
+var Lasting = []string{"audiogram.baseline"}
+
 // File is a dossier as the judge takes it: the Rego input, the series by name, and where each record
 // that it refers to was read.
 type File struct {
@@ -31,7 +35,7 @@ type File struct {
 	ID     string
 	Site   string
 	Input  any               // *Worker, *Group, *Site, *Instrument, *Room or *Tester
-	Series map[string][]Link // oldest first, none after the as-of day
+	Series map[string][]Link // none after the as-of day
 	Uses   []Tally           // days of use, oldest first: the series test.use with its counts
 	Refs   Refs
 }

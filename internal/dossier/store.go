@@ -16,7 +16,7 @@ const shardCount = 256
 
 // memoryBudget is the number of bytes of packed records that stay in memory. Beyond it they move to one
 // temporary file that only this process can read and that is gone when the process ends.
-const memoryBudget = 64 << 20
+const memoryBudget = 48 << 20
 
 // Store sorts records by subject. Records of workers are kept packed, in shards; all others are registers
 // that every worker may refer to.
@@ -83,7 +83,7 @@ func (s *Store) flush() error {
 		}
 		sh.parts = append(sh.parts, part{s.spilled, len(sh.rest)})
 		s.spilled += int64(len(sh.rest))
-		sh.rest = sh.rest[:0]
+		sh.rest = nil
 	}
 	s.size = 0
 	return nil
@@ -100,10 +100,14 @@ func (s *Store) Close() error {
 	return err
 }
 
-// Registers gives the records that do not belong to one worker. Add must not be called any more.
-func (s *Store) Registers() *Registers {
+// Registers gives the records that do not belong to one worker. Add must not be called any more. Where
+// records have moved to the temporary file, the rest follows, to leave the memory to judging.
+func (s *Store) Registers() (*Registers, error) {
 	s.registers.index()
-	return s.registers
+	if s.spill != nil {
+		return s.registers, s.flush()
+	}
+	return s.registers, nil
 }
 
 // Shards gives the number of shards.

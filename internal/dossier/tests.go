@@ -58,6 +58,8 @@ type hearing struct {
 	effective []*test // tests after the baseline that stand for themselves; their standing() is compared
 	sex       string
 	birth     Date
+
+	everEnrolled bool // whether the worker was ever enrolled
 }
 
 func (b *Builder) hearing(w *WorkerRecords, refs Refs, enrolled []calendar.Spell) *hearing {
@@ -65,6 +67,8 @@ func (b *Builder) hearing(w *WorkerRecords, refs Refs, enrolled []calendar.Spell
 		b: b, w: w, refs: refs,
 		follow:  until(w.FollowUps, b.AsOf, func(f *record.FollowUp) Date { return f.Date }),
 		notices: until(w.Notices, b.AsOf, func(n *record.Notice) Date { return n.Date }),
+
+		everEnrolled: len(enrolled) > 0,
 	}
 	for _, e := range w.Employments {
 		if e.Sex != "" {
@@ -214,6 +218,7 @@ func (h *hearing) audiograms(compared map[*test]*comparison, lacks func(*test) [
 	for _, t := range h.tests {
 		a := Audiogram{
 			Link: Link{Date: t.rec.Date, Ref: t.ref}, ID: t.rec.AudiogramID, Purpose: t.rec.Purpose, Enrolled: t.enrolled,
+			InProgram:   !t.invalidated && (t.enrolled || t == h.baseline && h.everEnrolled),
 			Invalidated: t.invalidated, ToCompare: t.compare, ComparedOn: h.past(t.rec.DeterminedOn), Mobile: t.rec.Mobile,
 			ReviewedOn: h.past(t.rec.ReviewedOn), ReviewerKnown: t.rec.Reviewer != "", ReviewerIs: h.b.Registers.professionOf(t.rec.Reviewer),
 			EarsWithResult: earsWithResult(t.rec), CannotCompare: []string{}, RecordLacks: lacks(t),

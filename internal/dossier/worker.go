@@ -47,7 +47,7 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 	d.Protection = b.protection(w, now, h, refs)
 	d.Wear = b.wear(w, now, refs)
 	d.Training, d.ProtectorTraining = b.training(w, refs)
-	return &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, refs), Refs: refs}
+	return &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, enrolled, refs), Refs: refs}
 }
 
 func emptyNotNil[T any](list []T) []T {
@@ -196,7 +196,7 @@ func (b *Builder) training(w *WorkerRecords, refs Refs) (*Training, *Link) {
 	return out, protectors
 }
 
-func (b *Builder) workerSeries(w *WorkerRecords, h *hearing, refs Refs) map[string][]Link {
+func (b *Builder) workerSeries(w *WorkerRecords, h *hearing, enrolled []calendar.Spell, refs Refs) map[string][]Link {
 	series := map[string][]Link{"audiogram.valid": h.validSeries()}
 	if t := h.baseline; t != nil {
 		series["audiogram.baseline"] = []Link{{t.rec.Date, t.ref}}
@@ -210,6 +210,11 @@ func (b *Builder) workerSeries(w *WorkerRecords, h *hearing, refs Refs) map[stri
 	}
 	for _, i := range until(w.Issues, b.AsOf, func(i *record.ProtectorIssue) Date { return i.Date }) {
 		series["protector.issue"] = append(series["protector.issue"], *link(refs, i, i.Date))
+		for _, s := range enrolled { // one that is still at hand when a stretch begins counts from that day
+			if i.Date < s.From && (!i.ReturnedOn.Known() || i.ReturnedOn > s.From) {
+				series["protector.issue"] = append(series["protector.issue"], *link(refs, i, s.From))
+			}
+		}
 	}
 	for _, c := range until(w.WearChecks, b.AsOf, func(c *record.WearCheck) Date { return c.Date }) {
 		if c.Worn == record.Yes {

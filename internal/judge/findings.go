@@ -194,6 +194,7 @@ func (c *check) report() *finding.Report {
 			site.Workers = b.usage.Workers
 			maps.Copy(site.Choices, b.builder.Choices)
 			r.Findings = append(r.Findings, b.findings...)
+			b.findings = nil
 			r.Counts = append(r.Counts, b.sortedCounts(r.Totals)...)
 		}
 		r.Sites = append(r.Sites, site)

@@ -154,7 +154,10 @@ func (c *check) bundlesOf(s *program.Site) []string {
 
 // prepare makes the engine of every bundle and the builder of every site under each.
 func (c *check) prepare(ctx context.Context) error {
-	registers := c.store.Registers()
+	registers, err := c.store.Registers()
+	if err != nil {
+		return err
+	}
 	engines := map[string]Engine{}
 	grounds := map[string]*dossier.Ground{}
 	for _, s := range c.sites {

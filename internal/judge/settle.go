@@ -90,7 +90,7 @@ func (s *settler) deadline(name string, start calendar.Date) (calendar.Date, use
 	if !ok {
 		return 0, u, fmt.Sprintf("an interval as the value of %s", words(name))
 	}
-	day, err := interval.After(start, nil)
+	day, err := interval.After(start, s.bundle.Week)
 	if err != nil {
 		return 0, u, err.Error()
 	}
@@ -101,7 +101,7 @@ func (s *settler) once(o *obligation) []outcome {
 	key := o.keyOr(o.after)
 	done := o.by
 	if o.series != nil {
-		done = s.first(o.series)
+		done = s.first(o.series, o.after)
 	}
 	if !o.after.Known() {
 		return []outcome{unproven(o, key, orElse(o.missing, "the day on which the time begins")...)}
@@ -147,12 +147,13 @@ func orElse(given []string, word string) []string {
 	return []string{word}
 }
 
-// first gives the earliest record of several series.
-func (s *settler) first(series []string) *dossier.Link {
+// first gives the earliest record of several series since a day; of a lasting series, also from before it.
+func (s *settler) first(series []string, since calendar.Date) *dossier.Link {
 	var found *dossier.Link
 	for _, name := range series {
 		for i := range s.file.Series[name] {
-			if l := &s.file.Series[name][i]; found == nil || l.Date < found.Date {
+			l := &s.file.Series[name][i]
+			if (l.Date >= since || slices.Contains(dossier.Lasting, name)) && (found == nil || l.Date < found.Date) {
 				found = l
 			}
 		}
@@ -329,14 +330,9 @@ func (s *settler) opinion(o *obligation) outcome {
 // parameterFacts writes the parameters that decided an outcome, each with its citation and mark.
 func (out *outcome) parameterFacts(facts map[string]any) {
 	for _, u := range out.params {
-		if u.value == nil {
-			continue
+		if u.value != nil {
+			facts[u.name] = u.value.Fact()
 		}
-		entry := map[string]any{"value": u.value.Plain(), "cite": u.value.Cite, "seen": u.value.Seen, "from": u.value.From}
-		if u.unit != "" {
-			entry["unit"] = u.unit
-		}
-		facts[u.name] = entry
 	}
 	maps.Copy(facts, out.facts)
 }

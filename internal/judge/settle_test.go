@@ -24,6 +24,12 @@ half_year: {about: half a year, values: [{from: "1990-01-01", value: {months: 6}
 calendar_year: {about: a calendar year, values: [{from: "1990-01-01", value: {calendar_years: 1}, cite: N, seen: text}]}
 changing: {about: changing, unit: dB, values: [{from: "2000-01-01", to: "2010-01-01", value: 90, cite: N, seen: text}, {from: "2010-01-01", value: 85, cite: N, seen: memory}]}
 posting_time:`)
+	bundletest.Change(fsys, "small/parameters/data.yaml", "posting_time:",
+		`working: {about: five working days, values: [{from: "1990-01-01", value: {working_days: 5}, cite: N, seen: text}]}
+posting_time:`)
+	bundletest.Change(fsys, "small/measures/data.yaml", "training:",
+		`working_days: {rest: [saturday, sunday], holidays: [{date: "2026-01-01", name: New Year}], known_until: "2026-12-31", cite: N}
+training:`)
 	b, problems := bundle.Load(fsys, "small")
 	require.NoError(t, problems.Err())
 	file := &dossier.File{Kind: "worker", ID: "w1", Series: map[string][]dossier.Link{}, Refs: dossier.NewRefs()}
@@ -165,4 +171,15 @@ func TestOpinionAndLifted(t *testing.T) {
 	l := settleText(t, "2026-06-30", `{"lifted": "a physician found it not work-related", "cite": "N 9", "key": "b"}`, nil)[0]
 	assert.Equal(t, finding.Lifted, l.status)
 	assert.Equal(t, "N 9", l.cite)
+}
+
+// TestWorkingDays counts five working days over a holiday and a weekend: 31 December 2025 is a Wednesday,
+// so that 2, 5, 6, 7 and 8 January count.
+func TestWorkingDays(t *testing.T) {
+	open := func(after string) string { return `{"within": "working", "after": "` + after + `", "by": null}` }
+	assert.Equal(t, []string{"2025-12-31 due 2026-01-08 "}, statuses(settleText(t, "2026-01-08", open("2025-12-31"), nil)))
+	assert.Equal(t, []string{"2025-12-31 gap 2026-01-08 "}, statuses(settleText(t, "2026-01-09", open("2025-12-31"), nil)))
+	unknown := settleText(t, "2027-06-30", open("2026-12-28"), nil)
+	assert.Equal(t, finding.Unproven, unknown[0].status)
+	assert.Contains(t, unknown[0].message, "working days are not known after 2026-12-31")
 }

@@ -17,32 +17,50 @@ package duty.audiogram_compared
 
 import rego.v2
 
-obligations contains object.union(verdict(test), {
+obligations contains {
 	"key": test.id,
 	"on": test.date,
-	"because": [link.ref | some link in [test, input.baseline]; link != null],
-}) if {
-	some test in annual
+	"because": [test.ref, baseline],
+	"holds": true,
+	"note": "the audiogram was compared with the baseline",
+	"facts": {"compared_on": test.compared_on},
+} if {
+	some test in input.audiograms
+	test.to_compare
+	test.compared_on != null
+	count(test.cannot_compare) == 0
 }
 
-verdict(test) := {
+obligations contains {
+	"key": test.id,
+	"on": test.date,
+	"because": [test.ref, baseline],
+	"holds": false,
+	"note": "no comparison with the baseline is on record",
+} if {
+	some test in input.audiograms
+	test.to_compare
+	test.compared_on == null
+	count(test.cannot_compare) == 0
+}
+
+obligations contains {
+	"key": test.id,
+	"on": test.date,
+	"because": [test.ref, baseline],
 	"holds": null,
 	"missing": test.cannot_compare,
 	"note": "the audiogram cannot be compared with the baseline",
 } if {
+	some test in input.audiograms
+	test.to_compare
 	count(test.cannot_compare) > 0
-} else := {
-	"holds": false,
-	"note": "no comparison with the baseline is on record",
-} if {
-	test.compared_on == null
-} else := {
-	"holds": true,
-	"note": "the audiogram was compared with the baseline",
-	"facts": {"compared_on": test.compared_on},
 }
 
-# A test that a retest in time replaces needs no comparison of its own.
-annual := [test | some test in input.audiograms; test.to_compare; test.replaced_by == null]
+default baseline := null
 
-not_owed contains "there is no later audiogram, while in the program, to compare with the baseline" if count(annual) == 0
+baseline := input.baseline.ref
+
+not_owed contains "there is no later audiogram, while in the program, to compare with the baseline" if {
+	every test in input.audiograms { test.to_compare == false }
+}

@@ -11,7 +11,6 @@ worker(change) := {
 			"ref": "audiogram/a2",
 			"id": "a2",
 			"to_compare": true,
-			"replaced_by": null,
 			"compared_on": null,
 			"cannot_compare": [],
 		},
@@ -45,15 +44,14 @@ test_missing_threshold_gives_no_verdict if {
 	found.missing == ["left 3000 Hz"]
 }
 
-test_replaced_by_a_retest_in_time if {
-	replaced := worker({"replaced_by": "audiogram/a3"})
-	duty.obligations == set() with input as replaced
-	count(duty.not_owed) == 1 with input as replaced
-}
-
 test_nothing_to_compare if {
 	alone := worker({"to_compare": false})
 	duty.obligations == set() with input as alone
 	duty.not_owed == {"there is no later audiogram, while in the program, to compare with the baseline"} with input as alone
 	count(duty.not_owed) == 1 with input as {"baseline": null, "audiograms": []}
+}
+
+test_without_baseline_the_test_alone_is_cited if {
+	alone := object.union(worker({}), {"baseline": null})
+	obligation(alone).because == ["audiogram/a2", null]
 }

@@ -28,10 +28,17 @@ obligations contains {
 	some measurement in noisy
 }
 
-not_owed contains "no highest level on record, and no measurement at the action level" if count(noisy) == 0
+not_owed contains "no highest level on record, and no measurement at the action level, of how the group is now" if count(noisy) == 0
 
 noisy := [measurement | some measurement in input.measurements; may_matter(measurement)]
 
-may_matter(measurement) if measurement.max_dba != null
+# A measurement of how it was before a change or control, after which the group was measured again, decides nothing now.
+may_matter(measurement) if {
+	measurement.current
+	measurement.max_dba != null
+}
 
-may_matter(measurement) if measurement.reaches_enrolling == true
+may_matter(measurement) if {
+	measurement.current
+	measurement.reaches_enrolling == true
+}

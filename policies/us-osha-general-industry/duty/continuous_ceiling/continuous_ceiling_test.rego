@@ -5,7 +5,7 @@ import rego.v2
 
 group(highest, reaches) := {"workers": 12, "measurements": [{
 	"id": "m1", "ref": "measurement/m1", "date": "2024-03-05",
-	"max_dba": highest, "reaches_enrolling": reaches,
+	"current": true, "max_dba": highest, "reaches_enrolling": reaches,
 }]}
 
 test_highest_level_is_held_against_the_ceiling if {
@@ -31,6 +31,12 @@ test_quiet_without_highest_level if {
 		count(continuous_ceiling.obligations) == 0 with input as group(null, reaches)
 		count(continuous_ceiling.not_owed) == 1 with input as group(null, reaches)
 	}
+}
+
+test_level_from_before_a_change_decides_nothing if {
+	before := object.union(group(117, true).measurements[0], {"current": false})
+	count(continuous_ceiling.obligations) == 0 with input as {"workers": 12, "measurements": [before]}
+	count(continuous_ceiling.not_owed) == 1 with input as {"workers": 12, "measurements": [before]}
 }
 
 test_never_measured if count(continuous_ceiling.not_owed) == 1 with input as {"workers": 0, "measurements": []}

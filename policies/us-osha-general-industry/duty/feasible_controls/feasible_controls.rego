@@ -50,15 +50,15 @@ obligations contains {
 
 obligations contains {
 	"holds": null,
-	"note": "it is not known whether the group is above the permissible exposure",
-	"missing": reasons_not_known,
+	"note": sprintf("it is not known whether the group is above the permissible exposure: %s", [concat("; ", reasons_not_known)]),
+	"missing": ["an exposure that can be held against the permissible exposure"],
 	"facts": facts,
 } if {
 	not above_limit
 	count(reasons_not_known) > 0
 }
 
-not_owed contains "the group is not above the permissible exposure" if {
+not_owed contains "the group is not above the permissible exposure, or was never measured" if {
 	not above_limit
 	count(reasons_not_known) == 0
 }
@@ -68,7 +68,9 @@ above_limit if {
 	spell.current == true
 }
 
+# A group that was never measured is the matter of (d)(1), not of this duty.
 reasons_not_known := [stretch.reason |
+	input.first_survey != null
 	some stretch in input.exposure_unknown.limit
 	common.covers(stretch, input.as_of)
 ]

@@ -17,6 +17,7 @@ control(feasible, installed) := {
 group(exposed, controls) := {
 	"as_of": "2026-06-30", "workers": 12, "controls": controls,
 	"exposed": exposed, "exposure_unknown": {"limit": []},
+	"first_survey": {"date": "2020-01-01", "ref": "measurement/m1"},
 }
 
 not_known(from, to) := object.union(group(never, []), {"exposure_unknown": {"limit": [{"from": from, "to": to, "reason": "not measured"}]}})
@@ -54,8 +55,15 @@ test_not_above_the_limit_now if {
 test_not_known_whether_above if {
 	some o in feasible_controls.obligations with input as not_known("2025-01-01", null)
 	o.holds == null
-	o.missing == ["not measured"]
+	contains(o.note, "not measured")
+	count(o.missing) == 1
 	count(reasons(not_known("2025-01-01", null))) == 0
+}
+
+test_never_measured_is_not_this_matter if {
+	unmeasured := object.union(not_known("2025-01-01", null), {"first_survey": null})
+	holds(unmeasured) == set()
+	count(reasons(unmeasured)) == 1
 }
 
 test_not_known_formerly_is_over if {

@@ -41,7 +41,8 @@ not_owed contains "no impulse noise on record" if {
 	not peak_wanted
 }
 
-with_peak := [measurement | some measurement in input.measurements; measurement.peak_db != null]
+# A measurement of how it was before a change or control, after which the group was measured again, decides nothing now.
+with_peak := [measurement | some measurement in input.measurements; measurement.current; measurement.peak_db != null]
 
 peak_wanted if {
 	count(with_peak) == 0

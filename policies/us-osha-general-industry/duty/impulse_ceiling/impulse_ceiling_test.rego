@@ -3,7 +3,10 @@ package duty.impulse_ceiling_test
 import data.duty.impulse_ceiling
 import rego.v2
 
-measurement(peak) := {"id": "m1", "ref": "measurement/m1", "date": "2024-03-05", "peak_db": peak, "peak_weighting": "C"}
+measurement(peak) := {
+	"id": "m1", "ref": "measurement/m1", "date": "2024-03-05",
+	"current": true, "peak_db": peak, "peak_weighting": "C",
+}
 
 group(varied, peak) := {"workers": 12, "varied": varied, "measurements": [measurement(peak)]}
 
@@ -33,6 +36,13 @@ test_no_impulses if {
 		not obligation(group(varied, null))
 		count(reasons(group(varied, null))) == 1
 	}
+}
+
+test_peak_from_before_a_change_decides_nothing if {
+	before := object.union(measurement(141), {"current": false})
+	dossier := {"workers": 12, "varied": false, "measurements": [before]}
+	not obligation(dossier)
+	count(reasons(dossier)) == 1
 }
 
 test_varied_and_never_measured if {

@@ -43,4 +43,9 @@ obligations contains {
 
 not_owed contains "no noise dose on record" if count(doses) == 0
 
-doses := [measurement | some measurement in input.measurements; measurement.dosed == true]
+# A dose that was taken again with the right range decides nothing any more.
+doses := [measurement |
+	some measurement in input.measurements
+	measurement.dosed == true
+	not measurement.repeated
+]

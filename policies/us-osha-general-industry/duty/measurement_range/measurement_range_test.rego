@@ -4,7 +4,7 @@ import data.duty.measurement_range
 import rego.v2
 
 measurement(threshold, upper) := {
-	"id": "m1", "ref": "measurement/m1", "date": "2024-03-05", "dosed": true,
+	"id": "m1", "ref": "measurement/m1", "date": "2024-03-05", "dosed": true, "repeated": false,
 	"threshold_db": threshold, "upper_db": upper, "instrument": "D1",
 }
 
@@ -31,6 +31,11 @@ test_no_dose if {
 	level_only := object.union(measurement(null, null), {"dosed": false})
 	limits([level_only]) == set()
 	count(measurement_range.not_owed) == 1 with input as {"measurements": [level_only]}
+}
+
+test_dose_taken_again_decides_nothing if {
+	again := object.union(measurement(90, 115), {"repeated": true})
+	limits([again, measurement(80, 130)]) == {["m1/threshold", 80], ["m1/upper end", 130]}
 }
 
 test_no_measurement if count(measurement_range.not_owed) == 1 with input as {"measurements": []}

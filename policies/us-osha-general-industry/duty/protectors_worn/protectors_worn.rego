@@ -45,8 +45,8 @@ obligations contains {
 obligations contains {
 	"key": "now",
 	"holds": null,
-	"note": "it is not known whether exposure is above the permissible exposure, so that wear is compulsory",
-	"missing": limit_not_known,
+	"note": sprintf("it is not known whether exposure is above the permissible exposure, so that wear is compulsory: %s", [concat("; ", limit_not_known)]),
+	"missing": ["an exposure that can be held against the permissible exposure"],
 } if {
 	not compulsory
 	count(limit_not_known) > 0
@@ -90,10 +90,17 @@ checked if {
 	input.wear.date >= compulsory_since
 }
 
+# Of a worker who is not known to be in the program, enrolment tells; the other duties stay silent.
 limit_not_known := [stretch.reason |
+	in_program
 	some stretch in input.exposure_unknown.limit
 	common.covers(stretch, input.as_of)
 ]
+
+in_program if {
+	some spell in input.enrolled
+	spell.current == true
+}
 
 spells_with_van := [spell | some spell in input.enrolled; with_van(spell)]
 

@@ -56,8 +56,15 @@ test_check_without_outcome if holds(above(wear(null, "2026-05-05"))) == {null}
 test_not_known_whether_compulsory if {
 	some o in protectors_worn.obligations with input as not_known
 	o.holds == null
-	o.missing == ["not measured"]
+	contains(o.note, "not measured")
+	count(o.missing) == 1
 	count(reasons(not_known)) == 0
+}
+
+test_worker_not_known_to_be_in_the_program if {
+	outside := object.union(not_known, {"enrolled": []})
+	holds(outside) == set()
+	count(reasons(outside)) == 1
 }
 
 test_shift_decides_even_where_exposure_is_not_known if {

@@ -17,35 +17,46 @@ package duty.test_frequencies
 
 import rego.v2
 
-obligations contains object.union(verdict(test), {"key": test.id, "on": test.date, "because": [test.ref]}) if {
-	some test in program_tests
+obligations contains {
+	"key": test.id,
+	"on": test.date,
+	"because": [test.ref],
+	"holds": true,
+	"note": "each ear was tested at all required frequencies",
+} if {
+	some test in input.audiograms
+	test.in_program
+	count(test.not_tested) == 0
+	count(test.not_recorded) == 0
 }
 
-verdict(test) := {
+obligations contains {
+	"key": test.id,
+	"on": test.date,
+	"because": [test.ref],
 	"holds": false,
 	"note": sprintf("required thresholds that were not tested: %d", [count(test.not_tested)]),
 	"facts": {"not_tested": test.not_tested, "not_recorded": test.not_recorded},
 } if {
+	some test in input.audiograms
+	test.in_program
 	count(test.not_tested) > 0
-} else := {
+}
+
+obligations contains {
+	"key": test.id,
+	"on": test.date,
+	"because": [test.ref],
 	"holds": null,
 	"missing": test.not_recorded,
 	"note": sprintf("required thresholds on which the record says nothing: %d", [count(test.not_recorded)]),
 } if {
+	some test in input.audiograms
+	test.in_program
+	count(test.not_tested) == 0
 	count(test.not_recorded) > 0
-} else := {
-	"holds": true,
-	"note": "each ear was tested at all required frequencies",
 }
 
-# Tests under the paragraph: those made while in the program and the baseline, unless a professional voided them.
-program_tests := [test | some test in input.audiograms; not test.invalidated; under_the_program(test)]
-
-under_the_program(test) if test.enrolled
-
-under_the_program(test) if {
-	input.baseline.in_program
-	test.ref == input.baseline.ref
+not_owed contains "there is no audiogram under the program" if {
+	every test in input.audiograms { test.in_program == false }
 }
-
-not_owed contains "there is no audiogram under the program" if count(program_tests) == 0

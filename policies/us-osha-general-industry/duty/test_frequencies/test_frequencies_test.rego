@@ -4,14 +4,12 @@ import data.duty.test_frequencies as duty
 import rego.v2
 
 worker(change) := {
-	"baseline": null,
 	"audiograms": [object.union(
 		{
 			"date": "2024-02-01",
 			"ref": "audiogram/a2",
 			"id": "a2",
-			"enrolled": true,
-			"invalidated": false,
+			"in_program": true,
 			"not_tested": [],
 			"not_recorded": [],
 		},
@@ -44,20 +42,10 @@ test_record_says_nothing if {
 	found.missing == ["left 3000 Hz", "right 3000 Hz"]
 }
 
-test_baseline_counts_though_made_before_exposure if {
-	before := object.union(worker({"enrolled": false}), {"baseline": {"ref": "audiogram/a2", "in_program": true}})
-	obligation(before).holds == true
-}
-
 test_no_test_under_the_program[what] if {
 	some what, w in {
-		"no audiogram": {"baseline": null, "audiograms": []},
-		"made outside the program": worker({"enrolled": false}),
-		"voided by a professional": worker({"invalidated": true, "not_tested": ["left 500 Hz"]}),
-		"baseline of a worker who never was in it": object.union(
-			worker({"enrolled": false}),
-			{"baseline": {"ref": "audiogram/a2", "in_program": false}},
-		),
+		"no audiogram": {"audiograms": []},
+		"made outside the program": worker({"in_program": false, "not_tested": ["left 500 Hz"]}),
 	}
 	duty.obligations == set() with input as w
 	duty.not_owed == {"there is no audiogram under the program"} with input as w
