@@ -1,0 +1,56 @@
+// Package demo writes programs of invented firms: the demo program of Harrow & Slate, which shows every
+// status a finding can have, and programs of any size for measuring speed.
+//
+// The demo program is first made without a fault (firm.go, roster.go, career.go, clinic.go, papers.go).
+// Then each fault of the table in faults.go is planted at Kiln Hill. No name of a person or brand occurs,
+// no clock is read, and every random number comes from a fixed seed, so that two runs write the same bytes.
+package demo
+
+import (
+	"os"
+	"path/filepath"
+	"strings"
+
+	"hearduty/internal/calendar"
+	"hearduty/internal/record"
+)
+
+// Date is short for calendar.Date.
+type Date = calendar.Date
+
+// day is a date written in code.
+func day(s string) Date { return calendar.MustParse(s) }
+
+// asOf is the day on which the demo programs are judged; no record is later.
+var asOf = day("2026-06-30")
+
+// Write writes the demo program into dir: program.yaml and one canonical CSV file a record kind. The
+// folder is made if there is none; one that holds anything is refused and left as it is.
+func Write(dir string) error {
+	return publish(dir, func(temporary string) error {
+		b := harrowAndSlate()
+		for _, f := range faults {
+			f.plant(b)
+		}
+		return b.write(temporary)
+	})
+}
+
+const demoProgram = `# The demo program of hearduty: an invented firm, invented workers, invented numbers.
+# Kiln Hill has trouble of every kind; Larch Street does everything in time.
+program: Harrow & Slate hearing conservation
+as_of: 2026-06-30
+sites:
+  - {id: kiln-hill, name: Kiln Hill foundry, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
+  - {id: larch-street, name: Larch Street joinery, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
+`
+
+// writeProgram writes program.yaml: the head, and the record files of all kinds.
+func writeProgram(dir, head string) error {
+	var text strings.Builder
+	text.WriteString(head + "records:\n")
+	for _, k := range record.Kinds() {
+		text.WriteString("  - records/" + csvName(k) + "\n")
+	}
+	return os.WriteFile(filepath.Join(dir, "program.yaml"), []byte(text.String()), 0o644)
+}
