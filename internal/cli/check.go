@@ -1,0 +1,127 @@
+package cli
+
+import (
+	"fmt"
+	"io"
+	"slices"
+	"strings"
+
+	"github.com/urfave/cli/v2"
+
+	"hearduty/internal/bundle"
+	"hearduty/internal/finding"
+	"hearduty/internal/judge"
+	"hearduty/internal/report"
+)
+
+func (r *run) checkCommand() *cli.Command {
+	return &cli.Command{
+		Name:      "check",
+		Usage:     "judge the records of a program and list what is not fulfilled",
+		ArgsUsage: "[PROGRAM]",
+		Description: examples(
+			"PROGRAM is a program file or the folder that holds program.yaml; the current folder, if it is left out.\n"+
+				"The exit code is 0 if nothing is found of what --fail-on names, 1 if something is, 2 if the check was not possible.",
+			"hearduty check",
+			"hearduty check plants/program.yaml --site kiln-hill --as-of 2026-06-30",
+			"hearduty check --format json --out report.json --fail-on gap",
+		),
+		Flags: []cli.Flag{
+			asOfFlag(), siteFlag(), bundleFlag(),
+			&cli.StringFlag{Name: "format", Value: report.Names()[0], Usage: "write the report as `NAME`: " + strings.Join(report.Names(), " or ")},
+			outFlag(),
+			&cli.StringFlag{Name: "ahead", Value: "90d", Usage: "list what is due within `DAYS`"},
+			&cli.BoolFlag{Name: "all", Usage: "list what is met, lifted or due later, too", DisableDefaultText: true},
+			&cli.StringFlag{Name: "fail-on", Value: "gap,unproven", Usage: "end with exit code 1 if there is any of these `STATUSES`, or none"},
+			healthFlag(), widthFlag(), parallelFlag(),
+		},
+		Action: r.check,
+	}
+}
+
+func (r *run) check(c *cli.Context) error {
+	args, err := arguments(c, 0, 1)
+	if err != nil {
+		return err
+	}
+	fails, err := failOn(c)
+	if err != nil {
+		return err
+	}
+	style, err := r.style(c)
+	if err != nil {
+		return err
+	}
+	if err := oneOf("format", c.String("format"), report.Names()); err != nil {
+		return err
+	}
+	format, _ := report.Named(c.String("format"), style)
+	days, err := ahead(c)
+	if err != nil {
+		return err
+	}
+	options, err := r.options(c, args)
+	if err != nil {
+		return err
+	}
+	options.AheadDays, options.All = days, c.Bool("all")
+	result, err := judge.Check(c.Context, options)
+	if err != nil {
+		return err
+	}
+	if err := r.output(c, func(w io.Writer) error { return format.Write(w, result) }); err != nil {
+		return err
+	}
+	if path := c.String("out"); path != "" {
+		fmt.Fprintf(r.stderr, "Wrote %s: %s.\n", path, counts(result))
+	}
+	if found(result, fails) {
+		r.code = exitFound
+	}
+	return nil
+}
+
+// options reads the program and the flags that check and explain share.
+func (r *run) options(c *cli.Context, args []string) (judge.Options, error) {
+	var o judge.Options
+	var err error
+	if o.Parallel, err = parallel(c); err != nil {
+		return o, err
+	}
+	if _, err = day(c); err != nil {
+		return o, err
+	}
+	if o.Program, err = r.load(args); err != nil {
+		return o, err
+	}
+	if o.Library, err = bundle.Embedded(); err != nil {
+		return o, err
+	}
+	if o.Sites, err = choose(c, o.Program, o.Library); err != nil {
+		return o, err
+	}
+	if o.AsOf, err = r.judged(c, o.Program); err != nil {
+		return o, err
+	}
+	o.Bundle, o.HealthDetail, o.Version = c.String("bundle"), c.Bool("health-detail"), Version
+	return o, nil
+}
+
+// found says whether the report has a finding of one of the statuses. Of what is due, only what is
+// listed counts, that is what is due within the days looked ahead.
+func found(r *finding.Report, statuses []finding.Status) bool {
+	for _, s := range statuses {
+		if s != finding.Due && r.Totals[s] > 0 {
+			return true
+		}
+	}
+	return slices.Contains(statuses, finding.Due) && slices.ContainsFunc(r.Findings, func(f finding.Finding) bool { return f.Status == finding.Due })
+}
+
+func counts(r *finding.Report) string {
+	var parts []string
+	for _, s := range finding.Statuses {
+		parts = append(parts, fmt.Sprintf("%d %s", r.Totals[s], s))
+	}
+	return strings.Join(parts, ", ")
+}

@@ -1,0 +1,95 @@
+// Package json writes a report as one JSON object, for programs. Its schema is report.schema.json.
+package json
+
+import (
+	"bufio"
+	"bytes"
+	"encoding/json"
+	"fmt"
+	"io"
+
+	"hearduty/internal/finding"
+)
+
+// Format writes JSON.
+type Format struct{}
+
+// Name gives the name of the form.
+func (Format) Name() string { return "json" }
+
+// Write writes the report. Empty lists are [], never null, and keys have always the same order. The
+// findings are written one by one, so that a large report needs little memory.
+func (Format) Write(w io.Writer, r *finding.Report) error {
+	out := bufio.NewWriter(w)
+	head, err := marshal(withoutFindings(r), "")
+	if err != nil {
+		return err
+	}
+	end := []byte("[]\n}") // the findings are the last key
+	if !bytes.HasSuffix(head, end) {
+		return fmt.Errorf("the findings are not the last key of a report")
+	}
+	out.Write(bytes.TrimSuffix(head, end))
+	for i := range r.Findings {
+		f, err := marshal(complete(r.Findings[i]), "    ")
+		if err != nil {
+			return err
+		}
+		out.WriteString([]string{"[\n    ", ",\n    "}[min(i, 1)])
+		out.Write(f)
+	}
+	if len(r.Findings) == 0 {
+		out.WriteString("[]\n}\n")
+	} else {
+		out.WriteString("\n  ]\n}\n")
+	}
+	return out.Flush()
+}
+
+func marshal(v any, prefix string) ([]byte, error) {
+	var b bytes.Buffer
+	e := json.NewEncoder(&b)
+	e.SetEscapeHTML(false)
+	e.SetIndent(prefix, "  ")
+	err := e.Encode(v)
+	return bytes.TrimSuffix(b.Bytes(), []byte("\n")), err
+}
+
+// withoutFindings copies the report with no list null and no finding.
+func withoutFindings(r *finding.Report) *finding.Report {
+	c := *r
+	c.Findings = []finding.Finding{}
+	c.Cautions, c.Remarks = list(c.Cautions), list(c.Remarks)
+	c.Inputs, c.Rejects, c.Counts = list(c.Inputs), list(c.Rejects), list(c.Counts)
+	if c.Totals == nil {
+		c.Totals = map[finding.Status]int{}
+	}
+	c.Sites, c.Bundles = append([]finding.Site{}, c.Sites...), append([]finding.Bundle{}, c.Bundles...)
+	for i := range c.Sites {
+		c.Sites[i].Bundles = list(c.Sites[i].Bundles)
+		c.Sites[i].Choices = dictionary(c.Sites[i].Choices)
+	}
+	for i := range c.Bundles {
+		c.Bundles[i].Cautions = list(c.Bundles[i].Cautions)
+	}
+	return &c
+}
+
+func complete(f finding.Finding) finding.Finding {
+	f.Facts, f.Evidence = dictionary(f.Facts), list(f.Evidence)
+	return f
+}
+
+func list[T any](l []T) []T {
+	if l == nil {
+		return []T{}
+	}
+	return l
+}
+
+func dictionary(m map[string]any) map[string]any {
+	if m == nil {
+		return map[string]any{}
+	}
+	return m
+}

@@ -1,0 +1,49 @@
+// Package report writes the result of a check in the form that a reader wants. Each form has a package
+// of its own; all are written from the same neutral report and from nothing else.
+package report
+
+import (
+	"io"
+
+	"hearduty/internal/finding"
+	"hearduty/internal/report/json"
+	"hearduty/internal/report/text"
+)
+
+// Format is one form of a report.
+type Format interface {
+	// Name is what the user calls the form, such as text.
+	Name() string
+	// Write writes the report.
+	Write(w io.Writer, r *finding.Report) error
+}
+
+// Options say how to write for people. They do not matter to forms for machines.
+type Options struct {
+	Width  int  // columns of a line; 0 for 80
+	Colour bool // whether headings may have colour, which never says anything that the words do not
+}
+
+// Formats lists all forms, the default first.
+func Formats(o Options) []Format {
+	return []Format{text.Format{Width: o.Width, Colour: o.Colour}, json.Format{}}
+}
+
+// Named gives a form by its name. It returns false if there is no such form.
+func Named(name string, o Options) (Format, bool) {
+	for _, f := range Formats(o) {
+		if f.Name() == name {
+			return f, true
+		}
+	}
+	return nil, false
+}
+
+// Names lists the names of all forms, the default first.
+func Names() []string {
+	var names []string
+	for _, f := range Formats(Options{}) {
+		names = append(names, f.Name())
+	}
+	return names
+}

@@ -1,0 +1,110 @@
+package report
+
+import (
+	"bytes"
+	"encoding/json"
+	"flag"
+	"os"
+	"path/filepath"
+	"strings"
+	"testing"
+	"unicode"
+
+	"hearduty/internal/diag"
+	"hearduty/internal/finding"
+	"hearduty/internal/schema"
+)
+
+var update = flag.Bool("update", false, "write the golden files")
+
+// golden compares a text with the golden file of that name.
+func golden(t *testing.T, name string, got []byte) {
+	t.Helper()
+	path := filepath.Join("testdata", name)
+	if *update {
+		if err := os.WriteFile(path, got, 0o644); err != nil {
+			t.Fatal(err)
+		}
+	}
+	want, err := os.ReadFile(path)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if !bytes.Equal(got, want) {
+		t.Errorf("%s differs; look at it and run go test ./internal/report -update\n%s", path, got)
+	}
+}
+
+var reports = map[string]func() *finding.Report{"sample": sample, "empty": empty, "long": long}
+
+func TestGolden(t *testing.T) {
+	for name, make := range reports {
+		for _, f := range Formats(Options{}) {
+			var b bytes.Buffer
+			if err := f.Write(&b, make()); err != nil {
+				t.Fatal(err)
+			}
+			golden(t, name+"."+f.Name(), b.Bytes())
+		}
+	}
+}
+
+func TestJSONFitsItsSchema(t *testing.T) {
+	f, _ := Named("json", Options{})
+	for name, make := range reports {
+		var b bytes.Buffer
+		if err := f.Write(&b, make()); err != nil {
+			t.Fatal(err)
+		}
+		var value any
+		if err := json.Unmarshal(b.Bytes(), &value); err != nil {
+			t.Fatal(err)
+		}
+		if problems := schema.Validate("report", value, func(p string) diag.Position { return diag.Position{File: p} }); problems != nil {
+			t.Errorf("%s: %v", name, problems)
+		}
+		if bytes.Contains(b.Bytes(), []byte(": null")) && name == "empty" {
+			t.Error("an empty list is null")
+		}
+	}
+}
+
+func TestTextIsSafeAndFits(t *testing.T) {
+	for name, make := range reports {
+		for _, width := range []int{40, 80, 200} {
+			var b bytes.Buffer
+			f, _ := Named("text", Options{Width: width})
+			if err := f.Write(&b, make()); err != nil {
+				t.Fatal(err)
+			}
+			for line := range strings.SplitSeq(b.String(), "\n") {
+				if n := len([]rune(line)); n > max(width, 76) {
+					t.Errorf("%s at %d columns: a line has %d characters: %s", name, width, n, line)
+				}
+				if strings.ContainsFunc(line, unicode.IsControl) {
+					t.Errorf("%s: a line has a control character: %q", name, line)
+				}
+			}
+		}
+	}
+}
+
+func TestColourOnlyRepeats(t *testing.T) {
+	var plain, coloured bytes.Buffer
+	for _, c := range []struct {
+		b      *bytes.Buffer
+		colour bool
+	}{{&plain, false}, {&coloured, true}} {
+		f, _ := Named("text", Options{Colour: c.colour})
+		if err := f.Write(c.b, sample()); err != nil {
+			t.Fatal(err)
+		}
+	}
+	stripped := coloured.String()
+	for _, code := range []string{"\x1b[1m", "\x1b[1;31m", "\x1b[1;33m", "\x1b[0m"} {
+		stripped = strings.ReplaceAll(stripped, code, "")
+	}
+	if stripped != plain.String() || coloured.String() == plain.String() {
+		t.Error("the coloured report says something else")
+	}
+}
