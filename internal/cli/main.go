@@ -8,6 +8,7 @@ import (
 	"io"
 	"os"
 	"os/signal"
+	"runtime/debug"
 	"time"
 
 	"github.com/urfave/cli/v2"
@@ -36,6 +37,7 @@ type Env struct {
 
 // OS is the Env of a real run. An interrupt ends it.
 func OS() Env {
+	tuneMemory(os.Getenv)
 	ctx, _ := signal.NotifyContext(context.Background(), os.Interrupt)
 	return Env{
 		Context: ctx,
@@ -66,6 +68,23 @@ func Main(args []string, stdin io.Reader, stdout, stderr io.Writer, env Env) int
 	}
 	err := app.RunContext(env.Context, permute(app, args))
 	return r.exitCode(err)
+}
+
+// Memory that a run aims to stay below, and how much garbage may gather before that, in percent of what is
+// in use. Judging makes much garbage and keeps little.
+const (
+	memoryLimit    = 330 << 20
+	garbagePercent = 200
+)
+
+// tuneMemory sets both, unless whoever runs the program has set them for Go in the environment.
+func tuneMemory(getenv func(string) string) {
+	if getenv("GOGC") == "" {
+		debug.SetGCPercent(garbagePercent)
+	}
+	if getenv("GOMEMLIMIT") == "" {
+		debug.SetMemoryLimit(memoryLimit)
+	}
 }
 
 // run is one run of the program.

@@ -4,6 +4,7 @@ import (
 	"context"
 	"fmt"
 	"strings"
+	"sync"
 	"time"
 
 	"github.com/open-policy-agent/opa/v1/ast"
@@ -35,10 +36,13 @@ type Answer struct {
 // evaluationLimit is the time that the rules of one subject may take. A rule that does not end is cut off.
 const evaluationLimit = 20 * time.Second
 
-// stock is OPA's own evaluator: one prepared query a subject kind, and one a duty for the case that a rule
-// fails.
+// stock is OPA's own evaluator: one prepared query a subject kind and, once a rule fails, one a duty.
 type stock struct {
+	bundle *bundle.Bundle
+	store  storage.Store
 	kinds  map[string]*kindQuery
+
+	mu     sync.Mutex
 	single map[string]rego.PreparedEvalQuery
 }
 
@@ -50,7 +54,7 @@ type kindQuery struct {
 // NewEngine prepares the rules of a bundle for OPA's stock evaluator.
 func NewEngine(ctx context.Context, b *bundle.Bundle) (Engine, error) {
 	store := inmem.NewFromObjectWithOpts(b.Data, inmem.OptReturnASTValuesOnRead(true))
-	s := &stock{kinds: map[string]*kindQuery{}, single: map[string]rego.PreparedEvalQuery{}}
+	s := &stock{bundle: b, store: store, kinds: map[string]*kindQuery{}, single: map[string]rego.PreparedEvalQuery{}}
 	for _, d := range b.Duties {
 		q := s.kinds[d.Subject]
 		if q == nil {
@@ -58,11 +62,6 @@ func NewEngine(ctx context.Context, b *bundle.Bundle) (Engine, error) {
 			s.kinds[d.Subject] = q
 		}
 		q.duties = append(q.duties, d)
-		one, err := prepare(ctx, b, store, []*bundle.Duty{d})
-		if err != nil {
-			return nil, err
-		}
-		s.single[d.ID] = one
 	}
 	for _, q := range s.kinds {
 		var err error
@@ -101,7 +100,11 @@ func (s *stock) Evaluate(ctx context.Context, kind string, input ast.Value) ([]A
 	}
 	answers = nil
 	for _, d := range q.duties {
-		one, err := run(ctx, s.single[d.ID], []*bundle.Duty{d}, input)
+		var one []Answer
+		query, err := s.singleQuery(ctx, d)
+		if err == nil {
+			one, err = run(ctx, query, []*bundle.Duty{d}, input)
+		}
 		if ctx.Err() != nil {
 			return nil, ctx.Err()
 		}
@@ -111,6 +114,20 @@ func (s *stock) Evaluate(ctx context.Context, kind string, input ast.Value) ([]A
 		answers = append(answers, one...)
 	}
 	return answers, nil
+}
+
+// singleQuery prepares the query of one duty the first time that it is needed.
+func (s *stock) singleQuery(ctx context.Context, d *bundle.Duty) (rego.PreparedEvalQuery, error) {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	if q, ok := s.single[d.ID]; ok {
+		return q, nil
+	}
+	q, err := prepare(ctx, s.bundle, s.store, []*bundle.Duty{d})
+	if err == nil {
+		s.single[d.ID] = q
+	}
+	return q, err
 }
 
 func run(ctx context.Context, query rego.PreparedEvalQuery, duties []*bundle.Duty, input ast.Value) ([]Answer, error) {
