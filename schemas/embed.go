@@ -9,7 +9,7 @@ import (
 	"strings"
 )
 
-//go:generate go run hearduty/internal/schema/generate
+//go:generate go run hearduty/internal/catalogue/generate
 
 //go:embed *.schema.json
 var files embed.FS

@@ -6,7 +6,7 @@ import (
 	"fmt"
 	"os"
 
-	"hearduty/internal/schema/catalogue"
+	"hearduty/internal/catalogue"
 )
 
 func main() {
