@@ -30,7 +30,7 @@ func (g *register) admitWorker(w *record.Worker) *record.Problem {
 		known = &person{at: w.At()}
 	}
 	for _, other := range known.employment {
-		if !this.days.Intersect(other.days).Empty() {
+		if overlap(this.days, other.days) {
 			return refuse("hired_on", w.HiredOn.String(), "Give the earlier stretch its left_on, one row a stretch and site; if they are two people, give each an id of its own",
 				"the employment of worker %q overlaps with the one in %s", record.Shorten(w.WorkerID), g.place(other.at))
 		}
@@ -51,4 +51,15 @@ func (g *register) admitWorker(w *record.Worker) *record.Problem {
 	known.employment = append(known.employment, this)
 	g.workers[w.WorkerID] = known
 	return nil
+}
+
+// overlap says whether two stretches of employment share more than the day on which one ends and the other
+// begins, as it does when somebody moves to another site.
+func overlap(a, b calendar.Spell) bool {
+	shared := a.Intersect(b)
+	if shared.Empty() {
+		return false
+	}
+	handover := shared.To == shared.From+1 && a.From != b.From && (a.To == shared.To && b.From == shared.From || b.To == shared.To && a.From == shared.From)
+	return !handover
 }
