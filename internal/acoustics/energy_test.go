@@ -12,8 +12,8 @@ import (
 	"hearduty/internal/acoustics"
 )
 
-// TestLevelVectors takes sums, means and daily levels. Daily levels: formula of the French order of
-// 19 July 2006, art. 1 no. 1, computed by another program; sums and means: computed.
+// TestLevelVectors takes every row of its file. Daily levels: formula of the French order of 19 July 2006,
+// art. 1 no. 1, computed by another program; weekly levels: S.I. 299/2007 reg. 120; all others: computed.
 func TestLevelVectors(t *testing.T) {
 	seen := map[string]int{}
 	for _, r := range vectors(t, "lex.csv") {
@@ -33,14 +33,30 @@ func TestLevelVectors(t *testing.T) {
 			got, ok = acoustics.EnergySum(r.levels(t))
 		case "energy_mean":
 			got, ok = acoustics.EnergyMean(r.levels(t))
+		case "weekly_div5":
+			var err error
+			got, err = acoustics.WeeklyLEX(r.levels(t), len(r.levels(t)))
+			ok = err == nil
+		case "energy_diff":
+			levels := r.levels(t)
+			var corrected acoustics.Corrected
+			corrected, ok = acoustics.SubtractBackground(levels[0], levels[1])
+			got = corrected.Level
+		case "peak_pa_to_dB":
+			got, ok = acoustics.PressureLevel(r.number(t, "input"))
+		case "lex8h_to_Pa2h":
+			got, ok = acoustics.SoundExposure(r.number(t, "input"), 480)
+		case "Pa2h_to_lex8h":
+			got, ok = acoustics.LEXOfExposure(r.number(t, "input"))
 		default:
-			continue
+			t.Errorf("no rule for the kind %s", r["kind"])
 		}
 		seen[r["kind"]]++
 		require.True(t, ok, "%v", r)
 		assert.InDelta(t, r.number(t, "value"), got, 5.1e-5, "%v", r)
 	}
-	assert.Equal(t, map[string]int{"daily": 8, "energy_sum": 2, "energy_mean": 1}, seen)
+	assert.Equal(t, map[string]int{"daily": 8, "energy_sum": 2, "energy_mean": 1, "energy_diff": 1, "weekly_div5": 6,
+		"peak_pa_to_dB": 6, "lex8h_to_Pa2h": 4, "Pa2h_to_lex8h": 1}, seen)
 }
 
 func (r row) levels(t *testing.T) []float64 {

@@ -21,9 +21,15 @@ const (
 
 // Protected is the exposure under a hearing protector.
 type Protected struct {
-	Level       float64 // dB(A) under the protector
-	Attenuation float64 // dB taken off; never negative
+	Level       float64 // dB(A) under the protector; dB(C) for a peak
+	Attenuation float64 // dB taken off the level that was given; never negative
 	Clamped     bool    // the rule gave a negative attenuation, and 0 dB was used instead
+	working     working
+}
+
+// Working shows the formulas of the result with their numbers, one line a step.
+func (p Protected) Working() []string {
+	return p.working.lines()
 }
 
 // UnderNRR gives the exposure under a protector with a noise reduction rating in dB, for a time-weighted
@@ -31,16 +37,17 @@ type Protected struct {
 // A weighting other than C is treated as A, which credits less. An NRR below 7 would raise an A-weighted
 // level; then 0 dB is used and Clamped is set. The text of the law has no such clamp.
 func UnderNRR(twa float64, w Weighting, nrr float64) Protected {
-	return under(twa, nrrAttenuation(w, nrr))
+	attenuation, how := nrrAttenuation(working{}, w, nrr, aWeightingAllowance)
+	return under(twa, attenuation, how)
 }
 
 // UnderHalvedNRR gives the exposure under a protector with half the attenuation of UnderNRR (CPL
 // 02-02-035 App. A): C-weighted L - NRR/2, A-weighted L - (NRR - 7)/2. The directive uses it to weigh
 // engineering controls only; compliance with 29 CFR 1910.95(j) is judged with UnderNRR. Information only.
-// For two protectors the 5 dB of the second are not halved: give the higher NRR and take 5 dB off the
-// resulting level (from memory).
+// For two protectors use UnderHalvedDualNRR.
 func UnderHalvedNRR(twa float64, w Weighting, nrr float64) Protected {
-	return under(twa, nrrAttenuation(w, nrr)/2)
+	attenuation, how := nrrAttenuation(working{}, w, nrr, aWeightingAllowance)
+	return under(twa, attenuation/2, how.and("half of %s dB = %s dB", attenuation, attenuation/2))
 }
 
 // DualNRR gives the rating in dB of a plug and a muff worn together, the higher of the two plus 5 (from
@@ -49,16 +56,34 @@ func DualNRR(a, b float64) float64 {
 	return max(a, b) + secondProtectorGain
 }
 
-func nrrAttenuation(w Weighting, nrr float64) float64 {
-	if w == C {
-		return nrr
-	}
-	return nrr - aWeightingAllowance
+// UnderDualNRR gives the exposure under a plug and a muff worn together, as UnderNRR with DualNRR.
+func UnderDualNRR(twa float64, w Weighting, a, b float64) Protected {
+	how := working{}.and("NRR of both = %s + %s = %s dB", max(a, b), secondProtectorGain, DualNRR(a, b))
+	attenuation, how := nrrAttenuation(how, w, DualNRR(a, b), aWeightingAllowance)
+	return under(twa, attenuation, how)
 }
 
-func under(level, attenuation float64) Protected {
-	if attenuation < 0 {
-		return Protected{Level: level, Clamped: true}
+// UnderHalvedDualNRR gives the exposure under a plug and a muff worn together with half the attenuation of
+// the better one, as UnderHalvedNRR, and the 5 dB of the second one in full (from memory: OSHA Technical
+// Manual). Information only.
+func UnderHalvedDualNRR(twa float64, w Weighting, a, b float64) Protected {
+	single, how := nrrAttenuation(working{}, w, max(a, b), aWeightingAllowance)
+	attenuation := single/2 + secondProtectorGain
+	return under(twa, attenuation, how.and("half of %s dB + %s = %s dB", single, secondProtectorGain, attenuation))
+}
+
+// nrrAttenuation takes the allowance for A-weighted levels off a rating.
+func nrrAttenuation(how working, w Weighting, nrr, allowance float64) (float64, working) {
+	if w == C {
+		return nrr, how.and("attenuation of a C-weighted level = NRR = %s dB", nrr)
 	}
-	return Protected{Level: level - attenuation, Attenuation: attenuation}
+	return nrr - allowance, how.and("attenuation of an A-weighted level = %s - %s = %s dB", nrr, allowance, nrr-allowance)
+}
+
+func under(level, attenuation float64, how working) Protected {
+	if attenuation < 0 {
+		return Protected{Level: level, Clamped: true, working: how.and("%s dB is negative, so 0 dB is taken off %s dB", attenuation, level)}
+	}
+	return Protected{Level: level - attenuation, Attenuation: attenuation,
+		working: how.and("%s - %s = %s dB under the protector", level, attenuation, level-attenuation)}
 }

@@ -14,6 +14,7 @@ const (
 	criterionMinutes = 480  // the eight hours that every criterion level is set for
 	dayMinutes       = 1440 // 24 hours
 	timeSlack        = 1e-6 // minutes by which a sum of times may pass 24 h through binary rounding alone
+	levelSlack       = 1e-9 // dB by which a difference of two levels may miss a bound through binary rounding alone
 )
 
 // Scale says how a noise dose is counted. All fields are in dB.

@@ -44,12 +44,22 @@ func (r row) segments(t *testing.T, column string) []acoustics.Segment {
 	return day
 }
 
+// object reads a vector file in JSON into v.
+func object(t *testing.T, name string, v any) {
+	t.Helper()
+	b, err := os.ReadFile(filepath.Join("..", "..", "testdata", "vectors", name))
+	require.NoError(t, err)
+	require.NoError(t, json.Unmarshal(b, v))
+}
+
 func vectors(t *testing.T, name string) []row {
 	t.Helper()
 	f, err := os.Open(filepath.Join("..", "..", "testdata", "vectors", name))
 	require.NoError(t, err)
 	defer f.Close()
-	lines, err := csv.NewReader(f).ReadAll()
+	reader := csv.NewReader(f)
+	reader.Comment = '#' // how the rows were made
+	lines, err := reader.ReadAll()
 	require.NoError(t, err)
 	var rows []row
 	for _, line := range lines[1:] {
