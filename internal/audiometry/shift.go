@@ -50,14 +50,23 @@ func (c Change) Average() (float64, bool) {
 // The limit is taken to the nearest 0.1 dB. A lower bound that reaches the limit is Yes and an upper bound
 // that does not is No; any other bound, and a change with a missing frequency, are Undecided.
 func (c Change) Reaches(averageDB float64) Verdict {
+	return c.against(limitTenths(averageDB, c.Count), false)
+}
+
+// against holds the sum of the changes against a limit in tenths of dB, which it must reach or, with above,
+// exceed.
+func (c *Change) against(limit int, above bool) Verdict {
 	if len(c.Missing) > 0 || c.Count == 0 || c.AtLeast && c.AtMost {
 		return Undecided
 	}
-	reached := c.Tenths >= limitTenths(averageDB, c.Count)
+	met := c.Tenths >= limit
+	if above {
+		met = c.Tenths > limit || c.Tenths == limit && c.AtLeast // the true change lies above Tenths
+	}
 	switch {
-	case reached && !c.AtMost:
+	case met && !c.AtMost:
 		return Yes
-	case !reached && !c.AtLeast:
+	case !met && !c.AtLeast:
 		return No
 	}
 	return Undecided
