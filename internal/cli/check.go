@@ -24,7 +24,7 @@ func (r *run) checkCommand() *cli.Command {
 				"The exit code is 0 if nothing is found of what --fail-on names, 1 if something is, 2 if the check was not possible.",
 			"hearduty check",
 			"hearduty check plants/program.yaml --site kiln-hill --as-of 2026-06-30",
-			"hearduty check --format json --out report.json --fail-on gap",
+			"hearduty check --format json --out report.json --fail-on gap,unproven,reject",
 		),
 		Flags: []cli.Flag{
 			asOfFlag(), siteFlag(), bundleFlag(),
@@ -32,7 +32,7 @@ func (r *run) checkCommand() *cli.Command {
 			outFlag(),
 			&cli.StringFlag{Name: "ahead", Value: "90d", Usage: "list what is due within `DAYS`"},
 			&cli.BoolFlag{Name: "all", Usage: "list what is met, lifted or due later, too", DisableDefaultText: true},
-			&cli.StringFlag{Name: "fail-on", Value: "gap,unproven", Usage: "end with exit code 1 if there is any of these `STATUSES`, or none"},
+			&cli.StringFlag{Name: "fail-on", Value: "gap,unproven", Usage: "end with exit code 1 if there is any of these `STATUSES`, or a rejected row (reject), or never (none)"},
 			healthFlag(), widthFlag(), parallelFlag(),
 		},
 		Action: r.check,
@@ -44,7 +44,7 @@ func (r *run) check(c *cli.Context) error {
 	if err != nil {
 		return err
 	}
-	fails, err := failOn(c)
+	fails, reject, err := failOn(c)
 	if err != nil {
 		return err
 	}
@@ -75,7 +75,7 @@ func (r *run) check(c *cli.Context) error {
 	if path := c.String("out"); path != "" {
 		fmt.Fprintf(r.stderr, "Wrote %s: %s.\n", path, counts(result))
 	}
-	if found(result, fails) {
+	if found(result, fails) || reject && len(result.Rejects) > 0 {
 		r.code = exitFound
 	}
 	return nil
@@ -122,6 +122,13 @@ func counts(r *finding.Report) string {
 	var parts []string
 	for _, s := range finding.Statuses {
 		parts = append(parts, fmt.Sprintf("%d %s", r.Totals[s], s))
+	}
+	switch n := len(r.Rejects); n {
+	case 0:
+	case 1:
+		parts = append(parts, "1 rejected row")
+	default:
+		parts = append(parts, fmt.Sprintf("%d rejected rows", n))
 	}
 	return strings.Join(parts, ", ")
 }

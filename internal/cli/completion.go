@@ -8,7 +8,6 @@ import (
 	"github.com/urfave/cli/v2"
 
 	"hearduty/internal/bundle"
-	"hearduty/internal/finding"
 	"hearduty/internal/program"
 	"hearduty/internal/report"
 	"hearduty/policies"
@@ -112,9 +111,9 @@ func valuesOf(flag string, words []string, last string) []string {
 			head = last[:i+1]
 		}
 		var out []string
-		for _, s := range finding.Statuses {
-			if !slices.Contains(strings.Split(head, ","), string(s)) {
-				out = append(out, head+string(s))
+		for _, s := range failWords() {
+			if !slices.Contains(strings.Split(head, ","), s) {
+				out = append(out, head+s)
 			}
 		}
 		if head == "" {

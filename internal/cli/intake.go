@@ -79,8 +79,16 @@ func (r *run) ledger(l *intake.Ledger) {
 		if in.Sheet != "" {
 			name += " " + in.Sheet
 		}
-		fmt.Fprintf(r.stderr, "%s: %d rows = %d accepted + %d rejected\n", name, in.Rows, in.Accepted, in.Rejected)
+		r.account(name, in.Rows, in.Accepted, in.Rejected)
 	}
 	rows, accepted, rejected := l.Totals()
-	fmt.Fprintf(r.stderr, "in all: %d rows = %d accepted + %d rejected\n", rows, accepted, rejected)
+	r.account("in all", rows, accepted, rejected)
+}
+
+func (r *run) account(name string, rows, accepted, rejected int) {
+	word := "rows"
+	if rows == 1 {
+		word = "row"
+	}
+	fmt.Fprintf(r.stderr, "%s: %d %s = %d accepted + %d rejected\n", name, rows, word, accepted, rejected)
 }

@@ -5,10 +5,13 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"io/fs"
 	"os"
 	"path/filepath"
 
 	"github.com/urfave/cli/v2"
+
+	"hearduty/internal/diag"
 )
 
 // output gives what write writes to standard output or, with --out, to a file. The file is written
@@ -17,10 +20,12 @@ func (r *run) output(c *cli.Context, write func(io.Writer) error) error {
 	path := c.String("out")
 	if path == "" {
 		w := bufio.NewWriter(r.stdout)
-		if err := write(w); err != nil {
-			return err
+		err := write(w)
+		var refused diag.List
+		if err == nil || errors.As(err, &refused) { // what was read beside a refused file is not lost
+			err = errors.Join(err, w.Flush())
 		}
-		return w.Flush()
+		return err
 	}
 	if err := writeFile(path, write); err != nil {
 		return fmt.Errorf("%s cannot be written: %w", path, err)
@@ -42,6 +47,10 @@ func writeFile(path string, write func(io.Writer) error) (err error) {
 	}
 	f, err := os.CreateTemp(filepath.Dir(path), ".hearduty-*")
 	if err != nil {
+		var at *fs.PathError
+		if errors.As(err, &at) { // the user did not name the file that could not be made
+			err = fmt.Errorf("in the folder %s: %w", filepath.Dir(path), at.Err)
+		}
 		return err
 	}
 	defer func() {

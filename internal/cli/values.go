@@ -40,17 +40,17 @@ func ahead(c *cli.Context) (int, error) {
 	return n, nil
 }
 
-// failOn reads the flag --fail-on: statuses with commas between them, or none.
-func failOn(c *cli.Context) ([]finding.Status, error) {
+// rejectWord stands in --fail-on for a row that was rejected. It is no status: such a row gives no finding, but the gap
+// that it would have shown stays hidden.
+const rejectWord = "reject"
+
+// failOn reads the flag --fail-on: statuses, and reject, with commas between them, or none.
+func failOn(c *cli.Context) (out []finding.Status, reject bool, err error) {
 	text := strings.TrimSpace(c.String("fail-on"))
 	if text == "none" {
-		return nil, nil
+		return nil, false, nil
 	}
-	var names []string
-	for _, s := range finding.Statuses {
-		names = append(names, string(s))
-	}
-	var out []finding.Status
+	names := failWords()
 	for word := range strings.SplitSeq(text, ",") {
 		word = strings.TrimSpace(word)
 		if !slices.Contains(names, word) {
@@ -58,11 +58,23 @@ func failOn(c *cli.Context) ([]finding.Status, error) {
 			if near := diag.Near(word, names); near != "" && word != "" {
 				remedy = "Write " + near + " if that is meant"
 			}
-			return nil, usage(fmt.Sprintf("--fail-on cannot be %q", word), "%s", remedy)
+			return nil, false, usage(fmt.Sprintf("--fail-on cannot be %q", word), "%s", remedy)
+		}
+		if word == rejectWord {
+			reject = true
+			continue
 		}
 		out = append(out, finding.Status(word))
 	}
-	return out, nil
+	return out, reject, nil
+}
+
+func failWords() []string {
+	var names []string
+	for _, s := range finding.Statuses {
+		names = append(names, string(s))
+	}
+	return append(names, rejectWord)
 }
 
 // oneOf refuses a word that is none of the known ones.

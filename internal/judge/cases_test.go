@@ -6,6 +6,7 @@ import (
 	"fmt"
 	"io/fs"
 	"path"
+	"reflect"
 	"strings"
 	"testing"
 
@@ -37,6 +38,45 @@ type expected struct {
 	Duty, Subject, Status, Due, Done string
 	Key                              *string
 	Only                             bool
+	Facts, Health                    map[string]any // what the finding's facts and audiometric figures hold, among others
+}
+
+// holds says whether a value holds all that is wanted: of an object the fields named, of anything else the same. Numbers
+// are compared as float64, so that 94 is 94.0.
+func holds(got, want any) bool {
+	switch want := want.(type) {
+	case map[string]any:
+		object, ok := got.(map[string]any)
+		for name, w := range want {
+			v, there := object[name]
+			ok = ok && there && holds(v, w)
+		}
+		return ok
+	case []any:
+		v := reflect.ValueOf(got)
+		if got == nil || v.Kind() != reflect.Slice || v.Len() != len(want) {
+			return false
+		}
+		for i, w := range want {
+			if !holds(v.Index(i).Interface(), w) {
+				return false
+			}
+		}
+		return true
+	}
+	a, isNumber := asNumber(got)
+	b, wantsNumber := asNumber(want)
+	return isNumber && wantsNumber && a == b || reflect.DeepEqual(got, want)
+}
+
+func asNumber(v any) (float64, bool) {
+	switch v := v.(type) {
+	case int:
+		return float64(v), true
+	case float64:
+		return v, true
+	}
+	return 0, false
 }
 
 type caseRecords map[string][]map[string]yaml.Node
@@ -116,11 +156,14 @@ func checkExpected(t *testing.T, report *finding.Report, e expected) {
 		if f.Duty != e.Duty || e.Subject != "" && f.Subject.ID != e.Subject {
 			continue
 		}
-		if (e.Key == nil || f.Key == *e.Key) && string(f.Status) == e.Status && (e.Due == "" || f.Due.String() == e.Due) && (e.Done == "" || f.Done.String() == e.Done) {
+		if holds(f.Facts, e.Facts) && holds(f.Health, e.Health) && (e.Key == nil || f.Key == *e.Key) && string(f.Status) == e.Status && (e.Due == "" || f.Due.String() == e.Due) && (e.Done == "" || f.Done.String() == e.Done) {
 			found = true
 			continue
 		}
 		others = append(others, describe(f))
+		if e.Facts != nil || e.Health != nil {
+			others = append(others, fmt.Sprintf("    facts %v\n    health %v", f.Facts, f.Health))
+		}
 	}
 	key := ""
 	if e.Key != nil {

@@ -21,6 +21,7 @@ type Explanation struct {
 	Parameters  []UsedParameter // in order of use
 	Records     []ShownRecord   // in the order of the evidence
 	Obligation  string          // what the rule returned, as JSON; without audiometric figures unless asked for
+	Withheld    bool            // whether audiometric figures were left out
 	AsOf        calendar.Date
 	ProgramName string
 }
@@ -84,25 +85,29 @@ func (k *keeper) explain(d *bundle.Duty, x outcome, o *obligation, key string) {
 	}
 	for _, ev := range f.Evidence {
 		shown := ShownRecord{Evidence: ev}
-		if rec, ok := k.file.Refs.Record(ev.Record); ok {
+		if rec, ok := k.record(ev.Record); ok {
 			shown.Fields = fieldsOf(rec, k.check.HealthDetail)
 		}
 		e.Records = append(e.Records, shown)
 	}
 	if o != nil && o.returned != nil {
 		e.Obligation = obligationText(o, k.check.HealthDetail)
+		e.Withheld = o.health != nil && !k.check.HealthDetail
 	}
 	k.check.foundMu.Lock()
 	defer k.check.foundMu.Unlock()
 	k.check.found = append(k.check.found, explained{f, e})
 }
 
+// private says whether a field holds what only those may see who asked for audiometric figures.
+func private(f *record.Field) bool { return f.Type == record.Hearing || f.Name == "birth_date" }
+
 // fieldsOf lists the fields of a record that are present.
 func fieldsOf(rec record.Record, health bool) [][2]string {
 	t, _ := record.TableOf(rec.Kind())
 	var out [][2]string
 	for i, f := range t.Fields {
-		if (f.Type == record.Hearing || f.Name == "birth_date") && !health {
+		if private(&f) && !health {
 			continue
 		}
 		if text := t.Text(rec, i); text != "" {

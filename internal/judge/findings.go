@@ -5,6 +5,8 @@ import (
 	"fmt"
 	"maps"
 	"slices"
+	"strconv"
+	"strings"
 
 	"hearduty/internal/bundle"
 	"hearduty/internal/dossier"
@@ -145,12 +147,26 @@ func (k *keeper) evidence(refs []string) []finding.Evidence {
 			continue
 		}
 		e := finding.Evidence{Record: ref}
-		if rec, ok := k.file.Refs.Record(ref); ok {
+		if rec, ok := k.record(ref); ok {
 			e = k.check.origin(ref, rec)
 		}
 		out = append(out, e)
 	}
 	return out
+}
+
+// record finds the record of a reference: one of the dossier's, or one of the registers that all subjects share.
+func (k *keeper) record(ref string) (record.Record, bool) {
+	if rec, ok := k.file.Refs.Record(ref); ok {
+		return rec, true
+	}
+	kind, id, _ := strings.Cut(ref, "/")
+	if kind == "protector" {
+		if p := k.bench.builder.Registers.Protectors[id]; p != nil {
+			return p, true
+		}
+	}
+	return nil, false
 }
 
 func (c *check) origin(ref string, rec record.Record) finding.Evidence {
@@ -173,11 +189,8 @@ func (k *keeper) done() {
 func (c *check) report() *finding.Report {
 	r := &finding.Report{
 		Tool: finding.Tool{Name: "hearduty", Version: c.Version}, Program: c.Program.Title, AsOf: c.AsOf, Cautions: cautions,
-		Sites: []finding.Site{}, Bundles: []finding.Bundle{}, Inputs: c.ledger.Inputs, Rejects: c.ledger.Rejects, Remarks: []string{},
+		Sites: []finding.Site{}, Bundles: []finding.Bundle{}, Inputs: c.ledger.Inputs, Rejects: c.rejects(), Remarks: []string{},
 		Totals: map[finding.Status]int{}, Counts: []finding.Count{}, Listed: c.listedWords(), Findings: []finding.Finding{},
-	}
-	if r.Rejects == nil {
-		r.Rejects = []finding.Reject{}
 	}
 	for _, d := range c.ledger.Remarks {
 		r.Remarks = append(r.Remarks, d.String())
@@ -213,6 +226,26 @@ func (b *bench) sortedCounts(totals map[finding.Status]int) []finding.Count {
 				totals[status] += n
 			}
 		}
+	}
+	return out
+}
+
+// rejects gives the rejected rows. What stands in a cell of a threshold or a birth date is medical or personal and is left
+// out unless audiometric figures were asked for; file, row and column tell where to look.
+func (c *check) rejects() []finding.Reject {
+	kinds := map[[2]string]record.Kind{}
+	for _, in := range c.ledger.Inputs {
+		kinds[[2]string{in.File, in.Sheet}] = in.Kind
+	}
+	out := make([]finding.Reject, len(c.ledger.Rejects))
+	for i, r := range c.ledger.Rejects {
+		if t, ok := record.TableOf(kinds[[2]string{r.File, r.Sheet}]); ok && !c.HealthDetail {
+			if f := t.Index(r.Field); f >= 0 && private(&t.Fields[f]) {
+				r.Why = strings.ReplaceAll(r.Why, strconv.Quote(r.Read), "what stands there")
+				r.Read = ""
+			}
+		}
+		out[i] = r
 	}
 	return out
 }

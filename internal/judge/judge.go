@@ -240,6 +240,11 @@ func (c *check) judgeWorker(ctx context.Context, w *dossier.WorkerRecords) error
 			if file == nil {
 				continue
 			}
+			for _, e := range slices.Backward(w.Employments) {
+				if e.Site == site {
+					file.Refs.Of(e) // the latest has the worker's id alone
+				}
+			}
 			b.usage.Add(b.builder, w, file.Input.(*dossier.Worker))
 			if err := c.judgeFile(ctx, b, file); err != nil {
 				return err

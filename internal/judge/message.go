@@ -29,7 +29,23 @@ func (s *settler) clockMessage(o *obligation, out *outcome) string {
 	default:
 		text = "No record that it was done"
 	}
-	return joinSentences(o.note, text)
+	return joinSentences(o.note, text, touchedWords(out))
+}
+
+// touchedWords says how many tests were made between a missed deadline and its fulfilment.
+func touchedWords(out *outcome) string {
+	when := "since the last day"
+	if out.status == finding.Late {
+		when = "in between"
+	}
+	switch n, _ := out.facts["tests_touched"].(int); n {
+	case 0:
+		return ""
+	case 1:
+		return "1 test was made " + when
+	default:
+		return fmt.Sprintf("%d tests were made %s", n, when)
+	}
 }
 
 func days(n int) string {
@@ -41,13 +57,20 @@ func days(n int) string {
 
 // limitWords says a value beside its limit.
 func limitWords(o *obligation, u used, bound float64) string {
-	unit := ""
-	if u.unit != "" {
-		unit = " " + u.unit
-	}
 	relation := map[string]string{"at_most": "at most", "below": "below", "at_least": "at least", "above": "above"}[o.compare]
-	text := fmt.Sprintf("%s%s; the law asks for %s %s%s", short(o.value), unit, relation, short(bound), unit)
-	return text
+	who := "the law"
+	if u.value.Seen == "memory" {
+		who = "this bundle" // the number was not read in the text
+	}
+	return fmt.Sprintf("%s; %s asks for %s %s", withUnit(o.value, u.unit), who, relation, withUnit(bound, u.unit))
+}
+
+// withUnit writes a number with its unit, one thing without the s of several.
+func withUnit(n float64, unit string) string {
+	if n == 1 && len(unit) > 2 {
+		unit = strings.TrimSuffix(unit, "s")
+	}
+	return strings.TrimSpace(short(n) + " " + unit)
 }
 
 func short(v float64) string {

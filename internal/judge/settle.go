@@ -122,7 +122,10 @@ func (s *settler) once(o *obligation) []outcome {
 	if problem != "" {
 		return []outcome{unproven(o, key, problem)}
 	}
-	out.due, out.params = max(due, o.noSooner), []used{u}
+	out.due, out.params = due, []used{u}
+	if done == nil { // what is done is measured by the law's own time
+		out.due = max(due, o.noSooner)
+	}
 	switch {
 	case done != nil && done.Date <= out.due:
 		out.status = finding.Met
@@ -134,6 +137,12 @@ func (s *settler) once(o *obligation) []outcome {
 		out.status = finding.Due
 	default:
 		out.status = finding.Gap
+	}
+	if !s.isBrief(&out) {
+		out.facts = map[string]any{"counted_from": o.after.String()}
+		if out.due > due {
+			out.facts["not_due_before"] = o.noSooner.String()
+		}
 	}
 	out.message = s.clockMessage(o, &out)
 	return []outcome{out}
@@ -213,6 +222,9 @@ func (s *settler) recurring(o *obligation) []outcome {
 		default:
 			now.status = finding.Gap
 		}
+		if !s.isBrief(&now) {
+			now.facts = map[string]any{"counted_from": start.String()}
+		}
 		s.touch(o, &now)
 		now.message = s.clockMessage(o, &now)
 		out = append(out, now)
@@ -235,7 +247,10 @@ func (s *settler) touch(o *obligation, out *outcome) {
 			days++
 		}
 	}
-	out.facts = map[string]any{"tests_touched": tests, "days_touched": days}
+	if out.facts == nil {
+		out.facts = map[string]any{}
+	}
+	out.facts["tests_touched"], out.facts["days_touched"] = tests, days
 }
 
 // tolerance absorbs the rounding of binary arithmetic in values that were worked out, in their own unit.
@@ -268,7 +283,10 @@ func (s *settler) limit(o *obligation) outcome {
 		return out
 	}
 	out.facts = map[string]any{"value": o.value}
-	out.message = joinSentences(o.note, limitWords(o, u, bound))
+	out.message = sentence(limitWords(o, u, bound))
+	if o.note != "" {
+		out.message = sentence(o.note + ": " + limitWords(o, u, bound))
+	}
 	return out
 }
 

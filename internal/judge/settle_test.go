@@ -123,7 +123,7 @@ func TestRecurringCountsWhatAMissedPeriodTouches(t *testing.T) {
 		"calibration.acoustic": {"2021-03-01"}, "test.use": {"2020-12-31", "2021-01-01", "2021-01-02", "2021-02-28", "2021-04-01"},
 	})
 	require.Equal(t, finding.Late, got[0].status)
-	assert.Equal(t, map[string]any{"tests_touched": 4, "days_touched": 2}, got[0].facts, "two days, 2 January and 28 February, with two tests each")
+	assert.Equal(t, map[string]any{"counted_from": "2020-01-01", "tests_touched": 4, "days_touched": 2}, got[0].facts, "two days, 2 January and 28 February, with two tests each")
 }
 
 func TestLimits(t *testing.T) {

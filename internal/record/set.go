@@ -190,7 +190,7 @@ func (f *Field) setThreshold(p *audiometry.Threshold, text string) *Problem {
 		return nil
 	}
 	why := strings.Replace(err.Error(), strconv.Quote(text), strconv.Quote(Shorten(text)), 1)
-	return f.problem(text, "Write a level in dB HL such as 25, NR>100 for no response up to 100 dB, or NT for not tested", "%s", why)
+	return f.problem(text, "Correct the cell from the original record, or leave it empty if that is lost", "%s", why)
 }
 
 func (f *Field) problem(read, remedy, format string, args ...any) *Problem {

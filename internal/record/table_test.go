@@ -117,10 +117,10 @@ func TestSetRefuses(t *testing.T) {
 		{"measurement", "twa_dba", "<80", "not a number", "leave the cell empty"},
 		{"measurement", "twa_dba", "85.", "not a number", "decimals after a point"},
 		{"measurement", "twa_dba", "200", "200 is outside 0 to 140", "Check the number"},
-		{"audiogram", "left.500", "200", "outside -20 to 130", "Write a level"},
-		{"audiogram", "left.500", "1O", "letter O", "Write a level"},
-		{"audiogram", "left.500", "45m", "not a threshold", "Write a level"},
-		{"audiogram", "left.500", strings.Repeat("9", 500), "…", "Write a level"},
+		{"audiogram", "left.500", "200", "outside -20 to 130", "Correct the cell from the original record"},
+		{"audiogram", "left.500", "1O", "letter O", "Correct the cell from the original record"},
+		{"audiogram", "left.500", "45m", "not a threshold", "Correct the cell from the original record"},
+		{"audiogram", "left.500", strings.Repeat("9", 500), "…", "Correct the cell from the original record"},
 	} {
 		got, p := set(t, c.kind, c.field, c.text)
 		require.NotNil(t, p, "%s %q", c.field, c.text)

@@ -78,7 +78,7 @@ func TestTextIsSafeAndFits(t *testing.T) {
 				t.Fatal(err)
 			}
 			for line := range strings.SplitSeq(b.String(), "\n") {
-				if n := len([]rune(line)); n > max(width, 76) {
+				if n := len([]rune(line)); n > width {
 					t.Errorf("%s at %d columns: a line has %d characters: %s", name, width, n, line)
 				}
 				if strings.ContainsFunc(line, unicode.IsControl) {

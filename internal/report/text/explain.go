@@ -41,6 +41,10 @@ func Explain(w io.Writer, e *judge.Explanation, o Format) error {
 	}
 	parameters(p, e)
 	numbers(p, f)
+	if e.Withheld {
+		p.heading(bold, "Audiometric figures")
+		p.para(2, 2, "They are medical and left out here; --health-detail shows them, with the sums.")
+	}
 	records(p, e)
 	rule(p, e)
 	return p.flush()

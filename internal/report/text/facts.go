@@ -4,7 +4,9 @@ import (
 	"encoding/json"
 	"fmt"
 	"maps"
+	"math"
 	"slices"
+	"strconv"
 	"strings"
 
 	"hearduty/internal/finding"
@@ -48,12 +50,18 @@ func words(v any) string {
 	case bool:
 		return map[bool]string{true: "yes", false: "no"}[v]
 	case []any:
+		if len(v) == 0 {
+			return "none"
+		}
 		parts := make([]string, len(v))
 		for i, x := range v {
 			parts[i] = words(x)
 		}
 		return strings.Join(parts, ", ")
 	case []string:
+		if len(v) == 0 {
+			return "none"
+		}
 		return strings.Join(v, ", ")
 	case map[string]any:
 		var parts []string
@@ -73,8 +81,7 @@ func words(v any) string {
 
 func number(v any) string {
 	if f, ok := v.(float64); ok {
-		text, _ := json.Marshal(f)
-		return string(text)
+		return strconv.FormatFloat(math.Round(f*1e4)/1e4, 'f', -1, 64)
 	}
 	return fmt.Sprint(v)
 }
@@ -89,6 +96,12 @@ func pairs(m map[string]any) string {
 	return strings.Join(parts, "; ")
 }
 
+// plainNames are the names of facts that every bundle has, in words that say more.
+var plainNames = map[string]string{
+	"tests_touched": "tests made after the last day", "days_touched": "days with such tests",
+	"not_due_before": "not due before", "counted_from": "time counted from",
+}
+
 // unitOf gives the unit that the end of a fact's name tells.
 var unitOf = []struct{ ending, unit string }{
 	{"_dba", "dBA"}, {"_dbc", "dBC"}, {"_db", "dB"}, {"_pct", "%"}, {"_hz", "Hz"}, {"_hours", "h"}, {"_minutes", "min"},
@@ -97,6 +110,9 @@ var unitOf = []struct{ ending, unit string }{
 // named gives the name of a fact in words, and its value with the unit that stands in the name.
 func named(key string, value any) (name, text string) {
 	text = words(value)
+	if name, ok := plainNames[key]; ok {
+		return name, text
+	}
 	for _, u := range unitOf {
 		base, ok := strings.CutSuffix(key, u.ending)
 		if !ok || base == "" {

@@ -73,13 +73,19 @@ func table(p *page, r *finding.Report, site finding.Site) {
 			p.para(2, 2, bundle+": no duty is owed, or none could be judged.")
 			continue
 		}
+		if len(site.Bundles) > 1 {
+			p.para(2, 2, "By "+bundle)
+		}
+		if p.width < tableWidth {
+			for _, topic := range topics {
+				p.para(2, 4, topic+": "+inWords(numbers[topic]))
+			}
+			continue
+		}
 		const first = 16
 		line := padRight("", first)
 		for _, status := range columns {
 			line += padLeft(string(status), columnWidth(status))
-		}
-		if len(site.Bundles) > 1 {
-			p.para(2, 2, "By "+bundle)
 		}
 		p.raw(line)
 		for _, topic := range topics {
@@ -94,6 +100,19 @@ func table(p *page, r *finding.Report, site finding.Site) {
 			p.raw(line)
 		}
 	}
+}
+
+// tableWidth is the width of the table of counts. On a narrower page the counts are written in words.
+const tableWidth = 76
+
+func inWords(numbers map[finding.Status]int) string {
+	var parts []string
+	for _, status := range columns {
+		if n := numbers[status]; n > 0 {
+			parts = append(parts, fmt.Sprintf("%d %s", n, status))
+		}
+	}
+	return strings.Join(parts, ", ")
 }
 
 func columnWidth(s finding.Status) int { return max(8, len(s)+2) }
@@ -140,6 +159,7 @@ func totals(p *page, r *finding.Report) {
 	}
 	if judged == 0 {
 		p.para(0, 0, "Nothing was judged: no duty found anybody or anything to judge. That does not mean that all is well.")
+		unusable(p, r)
 		return
 	}
 	var parts []string
@@ -147,8 +167,20 @@ func totals(p *page, r *finding.Report) {
 		parts = append(parts, fmt.Sprintf("%d %s", r.Totals[s], s))
 	}
 	p.para(0, 2, "In all: "+strings.Join(parts, ", ")+".")
+	unusable(p, r)
 	if r.Listed != "" {
 		p.para(0, 2, sentence(upper(r.Listed)))
+	}
+}
+
+// unusable says how many rows could not be used: a duty that they would have shown to be broken is not seen.
+func unusable(p *page, r *finding.Report) {
+	rejected := 0
+	for _, in := range r.Inputs {
+		rejected += in.Rejected
+	}
+	if rejected > 0 {
+		p.para(0, 2, count(rejected, "row", "rows")+" of the records could not be used and may hide a gap: see Rejected rows, below.")
 	}
 }
 

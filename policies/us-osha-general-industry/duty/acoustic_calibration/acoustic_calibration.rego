@@ -40,6 +40,7 @@ obligations contains {
 	"key": sprintf("deviation/%s", [check.date]),
 	"holds": true,
 	"on": check.date,
+	"note": sprintf("the audiometer was not used between %s and an acoustic calibration", [found_in(check)]),
 	"because": common.refs([check, check.acoustic]),
 	"facts": {"largest_deviation_db": check.largest_db},
 } if {
@@ -51,7 +52,7 @@ obligations contains {
 	"key": sprintf("deviation/%s", [check.date]),
 	"holds": false,
 	"on": check.date,
-	"note": "the audiometer was used after the deviation and before an acoustic calibration",
+	"note": sprintf("the audiometer was used on %s, after %s and before an acoustic calibration", [check.used_before_acoustic.date, found_in(check)]),
 	"because": common.refs([check, check.used_before_acoustic, check.acoustic]),
 	"facts": {"largest_deviation_db": check.largest_db, "used_on": check.used_before_acoustic.date},
 } if {
@@ -64,7 +65,7 @@ obligations contains {
 	"key": sprintf("deviation/%s", [check.date]),
 	"holds": null,
 	"on": check.date,
-	"note": "the audiometer was used after a functional check that was not passed, and the deviation is not on record",
+	"note": sprintf("the audiometer was used on %s, after %s", [check.used_before_acoustic.date, found_in(check)]),
 	"missing": ["the deviation found in the functional check"],
 	"because": common.refs([check, check.used_before_acoustic, check.acoustic]),
 	"facts": {"used_on": check.used_before_acoustic.date},
@@ -103,6 +104,10 @@ checks_that_may_require_calibration := [check |
 ]
 
 may_require_calibration(check) if check.largest_db == null
+
+found_in(check) := sprintf("a deviation of %v dB in the functional check of %s", [check.largest_db, check.date]) if {
+	check.largest_db != null
+} else := sprintf("the functional check of %s, which was not passed", [check.date])
 
 may_require_calibration(check) if {
 	tolerated := common.at(data.parameters.functional_deviation, check.date)

@@ -42,18 +42,31 @@ not_owed contains "neither above the permissible exposure nor after a threshold 
 
 estimate := {
 	"value": input.protection.under_db,
-	"note": "estimated level under the protector",
+	"note": said,
 	"missing": [word | some word in input.protection.missing; input.protection.under_db == null],
-	"because": common.refs([input.protection]),
+	"because": records,
 	"facts": {
 		"protector": input.protection.protector,
 		"exposure_dba": input.protection.exposure_dba,
+		"notes_on_exposure": [exposure.note | some exposure in exposures_now; exposure.note != null],
 		"method": input.protection.method,
 		"working": input.protection.working,
 		"with_half_the_attenuation_dba": input.protection.halved_db,
 		"personal_attenuation_rating_db": input.protection.par_db,
 	},
 }
+
+said := "the level under the protector cannot be estimated" if {
+	input.protection.under_db == null
+} else := "estimated level under the protector"
+
+# The protector handed over, its model with the rating, and what the exposure of today rests on.
+records := array.concat(
+	[input.protection.ref, sprintf("protector/%s", [input.protection.protector])],
+	[exposure.ref | some exposure in exposures_now; exposure.ref != null],
+)
+
+exposures_now := [exposure | some exposure in input.exposures; common.covers(exposure, input.as_of)]
 
 in_program_now if {
 	some spell in input.enrolled

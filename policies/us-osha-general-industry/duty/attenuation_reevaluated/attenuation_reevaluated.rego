@@ -18,6 +18,7 @@ obligations contains {
 	"key": change.id,
 	"after": change.date,
 	"by": change.evaluated,
+	"note": sprintf("the change %s of %s raises exposure, so the attenuation is to be evaluated again", [change.id, change.date]),
 	"because": [change.ref],
 	"facts": {"change": change.what, "workers_with_protectors": input.protector_holders},
 } if {

@@ -22,7 +22,7 @@ obligations contains {
 	"on": test.date,
 	"because": [test.ref, baseline],
 	"holds": true,
-	"note": "the audiogram was compared with the baseline",
+	"note": sprintf("the audiogram of %s was compared with the baseline", [test.date]),
 	"facts": {"compared_on": test.compared_on},
 } if {
 	some test in input.audiograms
@@ -36,7 +36,7 @@ obligations contains {
 	"on": test.date,
 	"because": [test.ref, baseline],
 	"holds": false,
-	"note": "no comparison with the baseline is on record",
+	"note": sprintf("no comparison of the audiogram of %s with the baseline is on record", [test.date]),
 } if {
 	some test in input.audiograms
 	test.to_compare
@@ -50,7 +50,7 @@ obligations contains {
 	"because": [test.ref, baseline],
 	"holds": null,
 	"missing": test.cannot_compare,
-	"note": "the audiogram cannot be compared with the baseline",
+	"note": sprintf("the audiogram of %s cannot be compared with the baseline", [test.date]),
 } if {
 	some test in input.audiograms
 	test.to_compare

@@ -35,7 +35,7 @@ test_compared if {
 test_not_compared if {
 	found := obligation(worker({}))
 	found.holds == false
-	found.note == "no comparison with the baseline is on record"
+	found.note == "no comparison of the audiogram of 2024-02-01 with the baseline is on record"
 }
 
 test_missing_threshold_gives_no_verdict if {

@@ -18,7 +18,7 @@ obligations contains {
 	"key": lost.id,
 	"holds": false,
 	"on": lost.date,
-	"note": "other records speak of an audiogram that is not on file",
+	"note": sprintf("other records speak of the audiogram %s, which is not on file", [lost.id]),
 	"because": [lost.ref],
 } if {
 	employed

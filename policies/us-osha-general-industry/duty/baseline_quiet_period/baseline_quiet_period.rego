@@ -31,7 +31,7 @@ obligations contains {
 	"at_least": "quiet_period",
 	"on": input.baseline.date,
 	"missing": missing,
-	"note": "quiet before the baseline, with no protectors on record in its place",
+	"note": said,
 	"because": [input.baseline.ref],
 } if {
 	asked_of_the_baseline
@@ -44,6 +44,10 @@ asked_of_the_baseline if {
 }
 
 protectors_instead if input.baseline.quiet_by_protectors == true
+
+said := sprintf("it is not known how long it was quiet before the baseline of %s, and no protectors are on record in its place", [input.baseline.date]) if {
+	input.baseline.quiet_hours == null
+} else := sprintf("quiet before the baseline of %s, with no protectors on record in its place", [input.baseline.date])
 
 missing := ["hours without workplace noise before the baseline"] if {
 	input.baseline.quiet_hours == null

@@ -57,7 +57,7 @@ obligations contains {
 
 verdict(revision) := {
 	"holds": false,
-	"note": "who decided is not an audiologist, otolaryngologist or physician",
+	"note": sprintf("who moved the baseline is no audiologist, otolaryngologist or physician: %s", [replace(revision.by, "_", " ")]),
 } if {
 	revision.by != null
 	not revision.by in data.measures.hearing.professionals
@@ -72,7 +72,7 @@ verdict(revision) := {
 } else := {
 	"holds": null,
 	"missing": unknown(revision),
-	"note": "a baseline was moved",
+	"note": "a baseline was moved, and the records do not show whether that was right",
 } if {
 	count(unknown(revision)) > 0
 } else := {

@@ -51,7 +51,7 @@ test_other_ear_moved_too if {
 test_technician_cannot_revise if {
 	found := obligation(revised({"by": "technician"}))
 	found.holds == false
-	found.note == "who decided is not an audiologist, otolaryngologist or physician"
+	found.note == "who moved the baseline is no audiologist, otolaryngologist or physician: technician"
 }
 
 test_profession_not_known if {

@@ -20,8 +20,8 @@ obligations contains {
 	"value": measurement.max_dba,
 	"at_most": "continuous_ceiling",
 	"on": measurement.date,
-	"note": "highest continuous level",
-	"missing": common.missing(measurement.max_dba, "this level"),
+	"note": said(measurement),
+	"missing": common.missing(measurement.max_dba, "the highest continuous level"),
 	"because": [measurement.ref],
 	"facts": {"workers": input.workers},
 } if {
@@ -29,6 +29,10 @@ obligations contains {
 }
 
 not_owed contains "no highest level on record, and no measurement at the action level, of how the group is now" if count(noisy) == 0
+
+said(measurement) := sprintf("the measurement of %s reaches the action level and does not give its highest continuous level", [measurement.date]) if {
+	measurement.max_dba == null
+} else := sprintf("highest continuous level measured on %s", [measurement.date])
 
 noisy := [measurement | some measurement in input.measurements; may_matter(measurement)]
 

@@ -22,7 +22,7 @@ test_highest_level_counts_even_below_the_action_level if {
 test_noisy_without_highest_level if {
 	some o in continuous_ceiling.obligations with input as group(null, true)
 	o.value == null
-	o.missing == ["this level"]
+	o.missing == ["the highest continuous level"]
 	count(continuous_ceiling.not_owed) == 0 with input as group(null, true)
 }
 

@@ -21,7 +21,8 @@ import rego.v2
 obligations contains {
 	"holds": false,
 	"note": "exposure is at or above the action level, but the employer's roll leaves the worker out of the program",
-	"because": deciding,
+	"facts": {"exposed_since": min([stretch.from | some stretch in input.enrolled; stretch.current])},
+	"because": array.concat([sprintf("worker/%s", [input.id])], deciding),
 } if {
 	left_out
 }

@@ -8,6 +8,7 @@ today := {"from": "2020-01-01", "to": null, "current": true}
 past := {"from": "2020-01-01", "to": "2022-01-01", "current": false}
 
 known := {
+	"id": "w1",
 	"on_roll": null,
 	"enrolled": [today],
 	"exposure_unknown": {"action": [], "limit": []},
@@ -44,6 +45,8 @@ test_nothing_is_known_of_the_group if {
 test_left_out_of_the_program if {
 	finding := the_finding(object.union(known, {"on_roll": false}))
 	finding.holds == false
+	finding.because == ["worker/w1", "measurement/m1"]
+	finding.facts.exposed_since == "2020-01-01"
 	finding.note == "exposure is at or above the action level, but the employer's roll leaves the worker out of the program"
 }
 

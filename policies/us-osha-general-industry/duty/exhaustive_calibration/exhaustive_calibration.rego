@@ -40,6 +40,7 @@ obligations contains {
 	"key": sprintf("deviation/%s", [check.date]),
 	"holds": true,
 	"on": check.date,
+	"note": sprintf("the audiometer was not used between %s and an exhaustive calibration", [found_in(check)]),
 	"because": common.refs([check, check.exhaustive]),
 	"facts": {"largest_deviation_db": check.largest_db},
 } if {
@@ -51,7 +52,7 @@ obligations contains {
 	"key": sprintf("deviation/%s", [check.date]),
 	"holds": false,
 	"on": check.date,
-	"note": "the audiometer was used after the deviation and before an exhaustive calibration",
+	"note": sprintf("the audiometer was used on %s, after %s and before an exhaustive calibration", [check.used_before_exhaustive.date, found_in(check)]),
 	"because": common.refs([check, check.used_before_exhaustive, check.exhaustive]),
 	"facts": {"largest_deviation_db": check.largest_db, "used_on": check.used_before_exhaustive.date},
 } if {
@@ -64,7 +65,7 @@ obligations contains {
 	"key": sprintf("deviation/%s", [check.date]),
 	"holds": null,
 	"on": check.date,
-	"note": "the audiometer was used after an acoustic calibration that was not passed, and the deviation is not on record",
+	"note": sprintf("the audiometer was used on %s, after %s", [check.used_before_exhaustive.date, found_in(check)]),
 	"missing": ["the deviation found in the acoustic calibration"],
 	"because": common.refs([check, check.used_before_exhaustive, check.exhaustive]),
 	"facts": {"used_on": check.used_before_exhaustive.date},
@@ -103,6 +104,10 @@ calibrations_that_may_require_more := [check |
 ]
 
 may_require_more(check) if check.largest_db == null
+
+found_in(check) := sprintf("a deviation of %v dB in the acoustic calibration of %s", [check.largest_db, check.date]) if {
+	check.largest_db != null
+} else := sprintf("the acoustic calibration of %s, which was not passed", [check.date])
 
 may_require_more(check) if {
 	tolerated := common.at(data.parameters.acoustic_deviation, check.date)

@@ -18,12 +18,16 @@ obligations contains {
 	"key": name(result),
 	"after": result.since,
 	"by": result.notice,
-	"note": "the result puts the worker into the program",
+	"note": said(result),
 	"facts": {"dose_pct": result.dose_pct, "measured_on": result.date},
 	"because": [link.ref | some link in [result, result.notice]; link != null],
 } if {
 	some result in input.results
 }
+
+said(result) := sprintf("the measurement of %s puts the worker into the program, who is to be told the result", [result.date]) if {
+	result.date != null
+} else := "the exposure worked out from tasks puts the worker into the program, who is to be told the result"
 
 # An exposure worked out from tasks has no measurement id.
 name(result) := result.id if {

@@ -27,14 +27,13 @@ obligations contains {
 
 obligations contains {
 	"holds": false,
-	"on": latest_control.date,
-	"note": "a control was found feasible and is not in place",
-	"because": [latest_control.ref],
+	"on": control.date,
+	"note": sprintf("the control was found feasible and is not in place: %s", [named(control)]),
+	"because": [control.ref],
 	"facts": facts,
 } if {
 	above_limit
-	feasible
-	not controlled
+	some control in not_in_place
 }
 
 obligations contains {
@@ -44,7 +43,7 @@ obligations contains {
 	"facts": facts,
 } if {
 	above_limit
-	not feasible
+	count(not_in_place) == 0
 	not controlled
 }
 
@@ -77,13 +76,33 @@ reasons_not_known := [stretch.reason |
 
 latest_control := input.controls[count(input.controls) - 1]
 
-feasible if latest_control.feasible == "yes"
+# A control that was found feasible is owed until it is in place, or until a later record on the same control says
+# otherwise. What was found of another control does not replace it.
+not_in_place := [control |
+	some i, control in input.controls
+	control.feasible == "yes"
+	control.installed_on == null
+	not replaced(i)
+]
 
-controlled if latest_control.feasible == "no"
+replaced(i) if {
+	some j, later in input.controls
+	j > i
+	later.what == input.controls[i].what
+}
+
+named(control) := control.what if {
+	control.what != null
+} else := sprintf("the one of %s", [control.date])
 
 controlled if {
-	feasible
-	latest_control.installed_on != null
+	count(not_in_place) == 0
+	latest_control.feasible == "no"
+}
+
+controlled if {
+	count(not_in_place) == 0
+	latest_control.feasible == "yes"
 }
 
 facts := {"workers": input.workers, "controls": [control.what | some control in input.controls]}

@@ -45,6 +45,14 @@ test_feasible_and_not_in_place if holds(group(above, [control("yes", null)])) ==
 
 test_latest_record_counts if holds(group(above, [control("yes", null), control("no", null)])) == {true}
 
+test_another_control_does_not_replace_one_that_is_owed if {
+	other := object.union(control("no", null), {"what": "rotation"})
+	holds(group(above, [control("yes", null), other])) == {false}
+	holds(group(above, [control("yes", "2024-05-01"), other])) == {true}
+	holds(group(above, [object.union(control("yes", null), {"what": null}), other])) == {false}
+	holds(group(above, [control("yes", null), control("yes", "2024-05-01")])) == {true}
+}
+
 test_not_above_the_limit_now if {
 	every exposed in [never, formerly_above] {
 		holds(group(exposed, [control("yes", null)])) == set()

@@ -42,4 +42,4 @@ checked_on_every_day(year) if {
 
 said(year) := null if {
 	year.unchecked_days == 0
-} else := sprintf("no functional check is on record for %d of %d days of use", [year.unchecked_days, year.days])
+} else := sprintf("no functional check is on record for %d of %d days of use in %s", [year.unchecked_days, year.days, year.year])

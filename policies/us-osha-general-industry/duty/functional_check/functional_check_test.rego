@@ -15,7 +15,7 @@ test_one_day_without_check if {
 	o.holds == false
 	o.key == "2024"
 	o.facts.tests_on_those_days == 9
-	o.note == "no functional check is on record for 1 of 12 days of use"
+	o.note == "no functional check is on record for 1 of 12 days of use in 2024"
 }
 
 test_every_day_checked if {

@@ -22,7 +22,10 @@ import rego.v2
 
 obligations contains object.union(verdict(loss), {
 	"key": loss.id,
-	"facts": {"ears": loss.ears, "compared_with": loss.compared_with},
+	"facts": object.union(
+		{"ears": loss.ears, "compared_with": loss.compared_with},
+		{"retest_possible_until": day | day := loss.retest_until; day != null},
+	),
 	"health": loss.hearing,
 	"because": records(loss),
 }) if {

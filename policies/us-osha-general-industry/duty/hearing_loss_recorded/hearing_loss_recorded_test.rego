@@ -87,7 +87,7 @@ test_opinions_contradict if {
 test_figures_only_under_health if {
 	found := obligation(worker({}))
 	found.health == {"left_level_db": 30}
-	object.keys(found.facts) == {"ears", "compared_with"}
+	object.keys(found.facts) == {"ears", "compared_with", "retest_possible_until"}
 }
 
 test_nothing_to_record if {

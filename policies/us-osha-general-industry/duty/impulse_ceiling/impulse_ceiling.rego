@@ -19,7 +19,7 @@ obligations contains {
 	"value": measurement.peak_db,
 	"at_most": "impulse_ceiling",
 	"on": measurement.date,
-	"note": "highest peak",
+	"note": sprintf("highest peak measured on %s", [measurement.date]),
 	"because": [measurement.ref],
 	"facts": {"peak_weighting": measurement.peak_weighting, "workers": input.workers},
 } if {

@@ -32,7 +32,7 @@ obligations contains {
 	"holds": false,
 	"on": year.latest.date,
 	"for": "log_retention",
-	"note": "no record shows that the log of the year is kept",
+	"note": sprintf("no record shows that the log of %s is kept", [year.year]),
 	"because": common.refs([year.latest]),
 	"facts": {"hearing_losses_in_log": year.entries},
 } if {

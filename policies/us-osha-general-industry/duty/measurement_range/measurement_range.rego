@@ -20,8 +20,8 @@ obligations contains {
 	"value": measurement.threshold_db,
 	"at_most": "integration_floor",
 	"on": measurement.date,
-	"note": "integration threshold of the dose",
-	"missing": common.missing(measurement.threshold_db, "this setting"),
+	"note": said(measurement.threshold_db, "integration threshold", measurement.date),
+	"missing": common.missing(measurement.threshold_db, "the integration threshold"),
 	"because": [measurement.ref],
 	"facts": {"instrument": measurement.instrument},
 } if {
@@ -33,13 +33,17 @@ obligations contains {
 	"value": measurement.upper_db,
 	"at_least": "integration_top",
 	"on": measurement.date,
-	"note": "upper end of the range of the dose",
-	"missing": common.missing(measurement.upper_db, "this setting"),
+	"note": said(measurement.upper_db, "upper end of the range", measurement.date),
+	"missing": common.missing(measurement.upper_db, "the upper end of the range"),
 	"because": [measurement.ref],
 	"facts": {"instrument": measurement.instrument},
 } if {
 	some measurement in doses
 }
+
+said(setting, what, day) := sprintf("the record of the dose of %s does not give the %s", [day, what]) if {
+	setting == null
+} else := sprintf("%s of the dose of %s", [what, day])
 
 not_owed contains "no noise dose on record" if count(doses) == 0
 

@@ -19,6 +19,7 @@ obligations contains {
 	"key": change.id,
 	"after": change.date,
 	"by": change.measured,
+	"note": sprintf("the change %s of %s raises exposure, so it is to be measured again", [change.id, change.date]),
 	"because": [change.ref],
 	"facts": {"change": change.what, "workers": input.workers},
 } if {
@@ -30,6 +31,7 @@ obligations contains {
 	"key": change.id,
 	"holds": true,
 	"on": change.date,
+	"note": sprintf("measured on %s, since the change %s of %s", [change.measured.date, change.id, change.date]),
 	"because": [change.ref, change.measured.ref],
 	"facts": {"change": change.what, "workers": input.workers},
 } if {
@@ -41,7 +43,7 @@ obligations contains {
 	"key": change.id,
 	"holds": null,
 	"on": change.date,
-	"note": "nothing was measured since a change whose effect on exposure is not known",
+	"note": sprintf("nothing was measured since the change %s of %s, whose effect on exposure is not known", [change.id, change.date]),
 	"missing": ["whether the change raises exposure"],
 	"because": [change.ref],
 	"facts": {"change": change.what, "workers": input.workers},

@@ -19,7 +19,7 @@ obligations contains {
 	"key": use.id,
 	"on": use.date,
 	"holds": finding.holds,
-	"note": finding.note,
+	"note": sprintf("measurement of %s: %s", [use.date, finding.note]),
 	"missing": finding.missing,
 	"because": array.concat([use.ref], common.refs([use.calibrated])),
 	"facts": {"measurements_with_it": count(input.noise_measurements)},
@@ -41,7 +41,7 @@ is_audiometer if input.kind == "audiometer"
 # The first of these that fits.
 calibration_of(use) := {"holds": false, "note": "the instrument had failed its latest calibration", "missing": []} if {
 	use.calibration_failed == true
-} else := {"holds": true, "note": null, "missing": []} if {
+} else := {"holds": true, "note": "the instrument was calibrated or checked with a calibrator", "missing": []} if {
 	shown_accurate(use)
 } else := {"holds": null, "note": "only one check with a calibrator is on record", "missing": checks_lacking(use)} if {
 	count(checks_lacking(use)) == 1

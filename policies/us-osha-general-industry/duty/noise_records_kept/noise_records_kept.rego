@@ -19,7 +19,7 @@ obligations contains {
 	"holds": false,
 	"on": lost.date,
 	"for": "noise_record_retention",
-	"note": "another record refers to a measurement that is not in the records",
+	"note": sprintf("another record refers to the measurement %s, which is not in the records", [lost.id]),
 	"because": [lost.ref],
 	"facts": {"measurement": lost.id},
 } if {

@@ -25,27 +25,27 @@ obligations contains object.union(verdict(test), {
 	some test in problem_audiograms
 }
 
-verdict(test) := {"holds": true, "note": "a professional found the audiogram invalid"} if {
+verdict(test) := {"holds": true, "note": sprintf("a professional found the audiogram of %s invalid", [test.date])} if {
 	test.invalidated
-} else := {"holds": false, "note": "the reviewer is not an audiologist, otolaryngologist or physician"} if {
+} else := {"holds": false, "note": sprintf("the reviewer of the audiogram of %s is no audiologist, otolaryngologist or physician", [test.date])} if {
 	test.reviewer_is != null
 	not test.reviewer_is in data.measures.hearing.professionals
 } else := {
 	"holds": null,
 	"missing": ["profession of the reviewer"],
-	"note": "the audiogram was reviewed",
+	"note": sprintf("the audiogram of %s was reviewed, but it is not known by whom", [test.date]),
 } if {
 	test.reviewed_on != null
 	test.reviewer_is == null
-} else := {"holds": true, "note": "a professional reviewed the audiogram"} if {
+} else := {"holds": true, "note": sprintf("a professional reviewed the audiogram of %s", [test.date])} if {
 	test.reviewed_on != null
 } else := {
 	"holds": null,
 	"missing": ["day of the review"],
-	"note": "a reviewer is named",
+	"note": sprintf("a reviewer is named for the audiogram of %s, but not the day of the review", [test.date]),
 } if {
 	test.reviewer_named
-} else := {"holds": false, "note": sprintf("%s, and no professional review is on record", [test.problem])}
+} else := {"holds": false, "note": sprintf("the audiogram of %s shows %s, and no professional review is on record", [test.date, test.problem])}
 
 # A test that a retest in time replaces is settled by the retest.
 problem_audiograms := [test |

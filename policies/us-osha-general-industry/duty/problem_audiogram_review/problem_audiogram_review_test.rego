@@ -33,7 +33,7 @@ test_review_settles_it[profession] if {
 test_technician_is_no_reviewer if {
 	found := obligation(worker({"reviewed_on": "2024-02-09", "reviewer_is": "technician", "reviewer_named": true}))
 	found.holds == false
-	found.note == "the reviewer is not an audiologist, otolaryngologist or physician"
+	found.note == "the reviewer of the audiogram of 2024-02-01 is no audiologist, otolaryngologist or physician"
 }
 
 test_profession_not_known if {
@@ -51,7 +51,7 @@ test_review_without_a_day if {
 test_not_reviewed if {
 	found := obligation(worker({}))
 	found.holds == false
-	found.note == "a threshold shift, and no professional review is on record"
+	found.note == "the audiogram of 2024-02-01 shows a threshold shift, and no professional review is on record"
 	found.facts.problem == "a threshold shift"
 }
 

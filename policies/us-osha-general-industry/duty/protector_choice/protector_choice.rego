@@ -19,8 +19,8 @@ obligations contains {
 	"value": input.protection.choices_offered,
 	"at_least": "protector_variety",
 	"on": input.protection.date,
-	"note": "number of models to choose from",
-	"missing": common.missing(input.protection.choices_offered, "this number"),
+	"note": said,
+	"missing": common.missing(input.protection.choices_offered, "the number of models offered"),
 	"because": [input.protection.ref],
 	"facts": {"protector": input.protection.protector},
 } if {
@@ -34,6 +34,10 @@ not_owed contains "no protector at hand, which is a finding of its own" if {
 	in_program_now
 	input.protection == null
 }
+
+said := "it is not known from how many models the worker could choose" if {
+	input.protection.choices_offered == null
+} else := "number of models to choose from"
 
 in_program_now if {
 	some spell in input.enrolled

@@ -20,7 +20,7 @@ test_number_is_held_against_the_variety if {
 
 test_number_not_recorded if {
 	obligation(worker(true, protection(null))).value == null
-	obligation(worker(true, protection(null))).missing == ["this number"]
+	obligation(worker(true, protection(null))).missing == ["the number of models offered"]
 }
 
 test_not_in_the_program_now if {

@@ -20,7 +20,8 @@ obligations contains {
 	"after": spell.from,
 	"by": spell.protector,
 	"during": spell,
-	"because": common.refs([spell.protector]),
+	"note": sprintf("exposure at or above the action level began on %s, so protectors are owed", [spell.from]),
+	"because": [exposure.ref | some exposure in input.exposures; exposure.from == spell.from],
 } if {
 	some spell in in_program_now
 	not used_up(spell)

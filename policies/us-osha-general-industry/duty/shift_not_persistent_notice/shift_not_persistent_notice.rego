@@ -36,7 +36,7 @@ verdict(later) := {
 	"note": found(later),
 }
 
-found(later) := sprintf("the test of %s no longer shows the shift of %s", [later.date, later.shift.date])
+found(later) := sprintf("the test of %s no longer shows the shift of %s, and the worker is to be told", [later.date, later.shift.date])
 
 # Above the limit protectors stay compulsory, so the paragraph asks for nothing.
 to_be_told := [later | some later in input.lapsed; not later.below_limit == false]

@@ -29,7 +29,7 @@ test_not_told if {
 	found.key == "a3/a2"
 	found.after == "2025-03-01"
 	found.by == null
-	found.note == "the test of 2025-03-01 no longer shows the shift of 2024-03-01"
+	found.note == "the test of 2025-03-01 no longer shows the shift of 2024-03-01, and the worker is to be told"
 }
 
 test_told if {

@@ -34,7 +34,7 @@ obligations contains {
 	"key": shift.id,
 	"holds": null,
 	"missing": ["whether the notice was in writing"],
-	"note": "a notice of the shift is on record",
+	"note": sprintf("the worker was told on %s of the shift that the test of %s shows, but it is not known whether in writing", [shift.unclear_notice.date, shift.date]),
 	"facts": {"told_on": shift.unclear_notice.date, "ears": shift.ears},
 	"health": shift.hearing,
 	"because": records(shift),

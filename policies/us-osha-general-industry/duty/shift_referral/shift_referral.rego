@@ -45,7 +45,7 @@ verdict(shift) := {
 } else := {
 	"holds": null,
 	"missing": ["profession of who decided on the referral"],
-	"note": "a decision on a referral is on record",
+	"note": sprintf("a referral was decided on %s, but it is not known by whom", [shift.referral_decision.date]),
 } if {
 	shift.referral_decision_by == null
 } else := question(shift, "who decided on the referral is not an audiologist, otolaryngologist or physician") if {
@@ -53,7 +53,7 @@ verdict(shift) := {
 } else := {
 	"holds": null,
 	"missing": ["outcome of the decision on a referral"],
-	"note": "a decision on a referral is on record",
+	"note": sprintf("a referral was decided on %s, but not how", [shift.referral_decision.date]),
 } if {
 	shift.referral_needed == null
 } else := {
@@ -65,7 +65,7 @@ verdict(shift) := {
 } else := {
 	"after": shift.referral_decision.date,
 	"by": shift.referral,
-	"note": "a professional decided that a referral is needed",
+	"note": sprintf("a professional decided on %s that a referral is needed", [shift.referral_decision.date]),
 }
 
 question(shift, why) := {

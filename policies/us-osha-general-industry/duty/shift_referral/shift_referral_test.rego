@@ -100,7 +100,7 @@ test_referral_needed_and_not_made if {
 		"referral_needed": true,
 	}))
 	found.by == null
-	found.note == "a professional decided that a referral is needed"
+	found.note == "a professional decided on 2024-03-12 that a referral is needed"
 }
 
 test_referred_without_more_ado if obligation(worker({"referral": referred})).holds == true

@@ -35,7 +35,7 @@ obligations contains {
 	"on": test.date,
 	"because": [test.ref],
 	"holds": false,
-	"note": sprintf("required thresholds that were not tested: %d", [count(test.not_tested)]),
+	"note": sprintf("the test of %s left out: %s", [test.date, concat(", ", test.not_tested)]),
 	"facts": {"not_tested": test.not_tested, "not_recorded": test.not_recorded},
 } if {
 	some test in input.audiograms
@@ -49,7 +49,7 @@ obligations contains {
 	"because": [test.ref],
 	"holds": null,
 	"missing": test.not_recorded,
-	"note": sprintf("required thresholds on which the record says nothing: %d", [count(test.not_recorded)]),
+	"note": sprintf("the record of the test of %s says nothing on required thresholds: %d", [test.date, count(test.not_recorded)]),
 } if {
 	some test in input.audiograms
 	test.in_program

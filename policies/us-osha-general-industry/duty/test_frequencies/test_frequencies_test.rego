@@ -32,7 +32,7 @@ test_complete if {
 test_frequency_left_out if {
 	found := obligation(worker({"not_tested": ["right 6000 Hz"], "not_recorded": ["left 3000 Hz"]}))
 	found.holds == false
-	found.note == "required thresholds that were not tested: 1"
+	found.note == "the test of 2024-02-01 left out: right 6000 Hz"
 	found.facts.not_tested == ["right 6000 Hz"]
 }
 

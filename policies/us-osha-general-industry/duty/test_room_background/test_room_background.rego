@@ -16,6 +16,10 @@ package duty.test_room_background
 import data.common
 import rego.v2
 
+said(level, hz, day) := sprintf("the survey of %s has no level in the octave band at %s Hz", [day, hz]) if {
+	level == null
+} else := sprintf("background level in the octave band at %s Hz, survey of %s", [hz, day])
+
 table_d1 := [
 	{"band": "500", "at_most": "room_500"},
 	{"band": "1000", "at_most": "room_1000"},
@@ -29,7 +33,7 @@ obligations contains {
 	"value": level,
 	"at_most": line.at_most,
 	"on": survey.date,
-	"note": sprintf("octave band at %s Hz", [line.band]),
+	"note": said(level, line.band, survey.date),
 	"missing": common.missing(level, "the level in this octave band"),
 	"because": [survey.ref],
 	"facts": {"band_hz": line.band, "tests_in_room": input.tests, "workers_tested": input.workers},

@@ -18,7 +18,7 @@ test_five_bands_are_held_against_the_table if {
 }
 
 test_band_not_measured if {
-	{[o.note, o.missing] | some o in test_room_background.obligations; o.value == null} == {["octave band at 8000 Hz", ["the level in this octave band"]]} with input as room
+	{[o.note, o.missing] | some o in test_room_background.obligations; o.value == null} == {["the survey of 2024-01-10 has no level in the octave band at 8000 Hz", ["the level in this octave band"]]} with input as room
 	every o in test_room_background.obligations {
 		o.facts.tests_in_room == 40
 	} with input as room

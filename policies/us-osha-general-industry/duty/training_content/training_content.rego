@@ -29,7 +29,7 @@ obligations contains object.union(verdict, {
 verdict := {
 	"holds": null,
 	"missing": ["topics of the training"],
-	"note": "a training session is on record",
+	"note": sprintf("the latest training, of %s, does not say what it was about", [input.training.date]),
 } if {
 	input.training.topics_unrecorded
 } else := {
@@ -40,12 +40,12 @@ verdict := {
 	required == null
 } else := {
 	"holds": false,
-	"note": sprintf("the training left out: %s", [concat(", ", left_out)]),
+	"note": sprintf("the training of %s left out: %s", [input.training.date, concat(", ", [replace(topic, "_", " ") | some topic in left_out])]),
 } if {
 	count(left_out) > 0
 } else := {
 	"holds": true,
-	"note": "the training covered every topic",
+	"note": sprintf("the training of %s covered every topic", [input.training.date]),
 }
 
 required := common.at(data.parameters.training_topics, input.training.date)

@@ -31,7 +31,7 @@ test_every_topic if {
 test_topic_left_out if {
 	found := obligation(worker({"training": {"topics": ["noise_effects", "site_rules"]}}))
 	found.holds == false
-	found.note == "the training left out: protectors, audiometry"
+	found.note == "the training of 2026-02-01 left out: protectors, audiometry"
 }
 
 test_topics_not_recorded if {
