@@ -1,6 +1,7 @@
 package bundle
 
 import (
+	"errors"
 	"fmt"
 	"maps"
 	"path"
@@ -8,6 +9,7 @@ import (
 
 	"hearduty/internal/calendar"
 	"hearduty/internal/diag"
+	"hearduty/internal/dossier"
 )
 
 // checkData checks what a schema cannot: that periods of parameters follow each other, and that names
@@ -70,10 +72,20 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 	if _, ok := m.Exposure.Levels[m.Exposure.Enrols]; !ok {
 		problems.Errorf(at, "Name one of the levels", "enrols names the level %q, which the measures do not have", m.Exposure.Enrols)
 	}
+	for _, name := range slices.Sorted(maps.Keys(m.Exposure.Channels)) {
+		if err := checkChannel(m.Exposure.Channels[name]); err != nil {
+			problems.Errorf(at, "Correct the channel", "the channel %s %v", name, err)
+		}
+	}
+	if err := m.Hearing.Shift.Check(); err != nil {
+		problems.Errorf(at, "Correct hearing.shift", "%v", err)
+	}
+	needParameter(m.Protection.RealWorld, "protection")
+	needParameter(m.Protection.Bands, "protection")
 	if _, ok := m.Exposure.Channels[m.Protection.Channel]; !ok {
 		problems.Errorf(at, "Name one of the channels", "protection names the channel %q, which the measures do not have", m.Protection.Channel)
 	}
-	needParameter(m.Hearing.Shift.AtLeast, "hearing.shift")
+	needParameter(m.Hearing.Shift.Parameter(), "hearing.shift")
 	needParameter(m.Hearing.Shift.Retest, "hearing.shift")
 	if r := m.Hearing.Recordable; r != nil {
 		needParameter(r.AtLeast, "hearing.recordable")
@@ -83,6 +95,23 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 			problems.Errorf(at, "Name one of the choices", "age_correction names the choice %q, which the bundle does not have", a.Choice)
 		}
 	}
+}
+
+// checkChannel checks that a channel has what its kind needs, and nothing of the other kind.
+func checkChannel(c dossier.Channel) error {
+	if c.Kind == dossier.LevelChannel {
+		if c.CriterionDB != 0 || c.ExchangeDB != 0 || c.ThresholdDB != 0 || c.UpperDB != 0 {
+			return errors.New("is a level and has no criterion_db, exchange_db, threshold_db or upper_db")
+		}
+		return nil
+	}
+	if c.CriterionDB <= 0 || c.ExchangeDB <= 0 {
+		return errors.New("is a dose and needs criterion_db and exchange_db")
+	}
+	if c.Weekly {
+		return errors.New("is a dose and has no weekly")
+	}
+	return nil
 }
 
 // checkParagraphs checks that every duty answers a paragraph and every paragraph is accounted for once.

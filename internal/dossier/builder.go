@@ -45,12 +45,20 @@ func NewGround(r *Registers, m Measures, law Law, asOf Date) *Ground {
 	for id := range r.tasksOf {
 		ids[id] = true
 	}
+	for _, c := range r.Changes {
+		if c.Group != "" {
+			ids[c.Group] = true
+		}
+	}
 	for id := range ids {
 		group, area := r.Groups[id], ""
 		if group != nil {
 			area = group.Area
 		}
-		g.histories[id] = g.channels.historyOf(g.channels.resultsOf(r, group, id, asOf), r.eventsOf(id, area, asOf))
+		results, events := g.channels.resultsOf(r, group, id, asOf), r.eventsOf(id, area, asOf)
+		if group != nil || len(results)+len(events) > 0 {
+			g.histories[id] = g.channels.historyOf(results, events)
+		}
 	}
 	return g
 }
@@ -119,12 +127,12 @@ func (b *Builder) levelSpells(pieces []stretch) (map[string][]Spell, map[string]
 			if p.From > b.AsOf {
 				continue
 			}
-			answer, why := b.reaches(level, p.doses[channel], max(p.From, 1))
+			answer, why := b.reaches(level, p.on[channel].dose, max(p.From, 1))
 			switch answer {
 			case record.Yes:
 				yes = append(yes, p.Spell)
 			case record.Unanswered:
-				reason := p.reason
+				reason := p.on[channel].reason
 				if why != "" {
 					reason = why
 				}
@@ -175,19 +183,20 @@ func (b *Builder) exposures(pieces []stretch, refs Refs) []Exposure {
 		if p.From > b.AsOf {
 			continue
 		}
-		e := Exposure{From: p.From, To: p.To, Group: p.group, Own: p.own, Channels: map[string]Level{}, Note: p.note}
-		if p.reason != "" {
-			e.Note = p.reason
+		k := p.on[enrolling]
+		e := Exposure{From: p.From, To: p.To, Group: p.group, Own: k.own, Channels: map[string]Level{}, Note: k.note}
+		if k.reason != "" {
+			e.Note = k.reason
 		}
 		for i, name := range b.channels.names {
 			sum := ""
-			if p.src[i] != nil {
-				sum = p.src[i].sums[i]
+			if src := p.on[i].src; src != nil {
+				sum = src.sums[i]
 			}
-			e.Channels[name] = b.channels.level(i, p.doses[i], sum)
+			e.Channels[name] = b.channels.level(i, p.on[i].dose, sum)
 		}
-		if src := p.src[enrolling]; src != nil {
-			e.Ref, e.MeasuredOn = refs.Of(src.rec), src.day
+		if k.src != nil {
+			e.Ref, e.MeasuredOn = refs.Of(k.src.rec), k.src.day
 		}
 		out = append(out, e)
 	}

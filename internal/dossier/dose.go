@@ -45,6 +45,7 @@ func (c channels) index(name string) int { return slices.Index(c.names, name) }
 type result struct {
 	day   Date
 	rec   record.Record
+	rows  []*record.Measurement // the dose channels of a measurement
 	id    string
 	doses []dose // one a channel
 	notes []string
@@ -67,6 +68,7 @@ func (c channels) newResult(day Date, rec record.Record, id string) *result {
 // upper bound, one taken with a higher threshold a lower bound of the dose asked for.
 func (c channels) ofMeasurement(rows []*record.Measurement) *result {
 	r := c.newResult(rows[0].Date, rows[0], rows[0].MeasurementID)
+	r.rows = rows
 	for _, m := range rows {
 		if !coversShift(m) {
 			r.notes = append(r.notes, "the sample is not marked as covering the full shift")

@@ -10,13 +10,19 @@ import (
 	"hearduty/internal/record"
 )
 
+// known is what is known of the exposure on one channel.
+type known struct {
+	dose
+	src    *result // the result that decides
+	own    bool    // whether it is the worker's own
+	note   string  // how it was taken
+	reason string  // why it is not known exactly, if more is to be said than that it lies within bounds
+}
+
 // step is a group's exposure from a day on, until the next step.
 type step struct {
-	from   Date
-	doses  []dose
-	src    []*result // the result that decides, one a channel
-	note   string
-	reason string // why the exposure is not known, if it is not
+	from Date
+	on   []known // one a channel
 }
 
 // event is a change of a group's noise: of its process, or by a control that was put in place.
@@ -74,12 +80,9 @@ func (c channels) resultsOf(r *Registers, group *record.Group, id string, asOf D
 	var out []*result
 	rows := r.measurementsOf(group, id)
 	for len(rows) > 0 {
-		n := 1
-		for n < len(rows) && rows[n].MeasurementID == rows[0].MeasurementID {
-			n++
-		}
+		n := sameMeasurement(rows)
 		if rows[0].Type != "task" && rows[0].Date <= asOf {
-			out = append(out, c.ofMeasurement(rows[:n]))
+			out = append(out, c.ofMeasurement(rows[:n:n]))
 		}
 		rows = rows[n:]
 	}
@@ -90,7 +93,7 @@ func (c channels) resultsOf(r *Registers, group *record.Group, id string, asOf D
 			n++
 		}
 		if tasks[0].Date <= asOf {
-			out = append(out, c.ofTasks(tasks[:n], r.levelOf))
+			out = append(out, c.ofTasks(tasks[:n], func(sample string) (float64, bool) { return r.levelOf(sample, asOf) }))
 		}
 		tasks = tasks[n:]
 	}
@@ -99,9 +102,9 @@ func (c channels) resultsOf(r *Registers, group *record.Group, id string, asOf D
 }
 
 // levelOf gives the level that a task's sample names: a number in dBA, or the id of a measurement.
-func (r *Registers) levelOf(sample string) (float64, bool) {
+func (r *Registers) levelOf(sample string, asOf Date) (float64, bool) {
 	for _, m := range r.Measurements {
-		if m.MeasurementID == sample && m.LAeqDBA.Known {
+		if m.MeasurementID == sample && m.LAeqDBA.Known && m.Date <= asOf {
 			return m.LAeqDBA.Value, true
 		}
 	}
@@ -133,31 +136,39 @@ func (c channels) historyOf(results []*result, events []event) *history {
 }
 
 func (h *history) step(c channels, day Date) step {
-	s := step{from: day, doses: make([]dose, len(c.names)), src: make([]*result, len(c.names))}
-	for i := range s.doses {
-		s.doses[i], s.src[i], s.note, s.reason = h.doseOn(i, day)
+	s := step{from: day, on: make([]known, len(c.names))}
+	for i := range s.on {
+		s.on[i] = h.knownOn(i, day)
 	}
 	return s
 }
 
-// doseOn gives what is known of the dose on a channel on a day, the result that decides, a note on how it
-// was taken, and where it is not known, the reason.
-func (h *history) doseOn(channel int, day Date) (d dose, src *result, note, reason string) {
+// lastEvent gives the latest event up to a day; of several on one day, one that may have raised exposure.
+func (h *history) lastEvent(day Date) event {
 	var last event
 	for _, e := range h.events {
-		if e.day <= day {
+		if e.day <= day && (e.day > last.day || e.raises) {
 			last = e
 		}
 	}
-	if d, src = h.highest(channel, last.day, day); src != nil {
-		return d, src, "", ""
+	return last
+}
+
+// knownOn gives what is known of the dose on a channel on a day.
+func (h *history) knownOn(channel int, day Date) known {
+	last := h.lastEvent(day)
+	if d, src := highest(h.results, channel, last.day, day); src != nil {
+		return known{dose: d, src: src}
 	}
 	if last.day.Known() {
-		if before, beforeSrc, _, _ := h.doseOn(channel, last.day-1); beforeSrc != nil && beforeSrc.day < last.day {
+		if k := h.knownOn(channel, last.day-1); k.src != nil && k.src.day < last.day {
 			if last.raises {
-				return dose{before.low, unknownDose.high}, beforeSrc, "at least the value before the " + last.what, "not measured since the " + last.what + ", which may have raised exposure"
+				k.high, k.note = unknownDose.high, "at least the value before the "+last.what
+				k.reason = "not measured since the " + last.what + ", which may have raised exposure"
+				return k
 			}
-			return before, beforeSrc, "value before the " + last.what + "; not measured since", ""
+			k.note = "value before the " + last.what + "; not measured since"
+			return k
 		}
 	}
 	for _, r := range h.results {
@@ -166,18 +177,18 @@ func (h *history) doseOn(channel int, day Date) (d dose, src *result, note, reas
 		}
 		for _, e := range h.events {
 			if e.day > day && e.day <= r.day && e.raises {
-				return unknownDose, nil, "", fmt.Sprintf("the first measurement is of %s, and the %s, which may have raised exposure, lies between", r.day, e.what)
+				return known{dose: unknownDose, reason: fmt.Sprintf("the first measurement is of %s, and the %s, which may have raised exposure, lies between", r.day, e.what)}
 			}
 		}
-		d, src = h.highest(channel, r.day, r.day)
-		return d, src, "taken backwards from the first measurement, of " + r.day.String(), ""
+		d, src := highest(h.results, channel, r.day, r.day)
+		return known{dose: d, src: src, note: "taken backwards from the first measurement, of " + r.day.String()}
 	}
-	return unknownDose, nil, "", h.why()
+	return known{dose: unknownDose, reason: whyNone(h.results)}
 }
 
 // highest gives the highest dose among the usable results from one day to another.
-func (h *history) highest(channel int, from, to Date) (d dose, src *result) {
-	for _, r := range h.results {
+func highest(results []*result, channel int, from, to Date) (d dose, src *result) {
+	for _, r := range results {
 		if r.day < from || r.day > to || !r.usable(channel) {
 			continue
 		}
@@ -193,13 +204,13 @@ func (h *history) highest(channel int, from, to Date) (d dose, src *result) {
 	return d, src
 }
 
-// why says why no result tells the exposure.
-func (h *history) why() string {
-	if len(h.results) == 0 {
+// whyNone says why none of the results tells the exposure.
+func whyNone(results []*result) string {
+	if len(results) == 0 {
 		return "there is no full-shift measurement"
 	}
 	var notes []string
-	for _, r := range h.results {
+	for _, r := range results {
 		for _, n := range r.notes {
 			if !slices.Contains(notes, n) {
 				notes = append(notes, n)
@@ -225,12 +236,8 @@ func (h *history) on(day Date) *step {
 // stretch is a piece of a subject's time with one exposure.
 type stretch struct {
 	calendar.Spell
-	group  string
-	doses  []dose
-	src    []*result
-	own    bool
-	note   string
-	reason string
+	group string
+	on    []known // one a channel
 }
 
 // during gives the steps of a group's history within a spell.
@@ -242,7 +249,7 @@ func (h *history) during(spell calendar.Spell, group string) []stretch {
 			piece.To = h.steps[i+1].from
 		}
 		if piece = piece.Intersect(spell); !piece.Empty() {
-			out = append(out, stretch{Spell: piece, group: group, doses: s.doses, src: s.src, note: s.note, reason: s.reason})
+			out = append(out, stretch{piece, group, s.on})
 		}
 	}
 	return out

@@ -40,7 +40,7 @@ func (h *hearing) shifts(c *course, enrolledNow bool, had func(Date) bool) []Shi
 func (h *hearing) fitting(t *test) *Link {
 	found := h.followLink(t, "fitting", "refitting")
 	for _, i := range h.w.Issues {
-		if i.FittedBy != "" && i.Date <= h.b.AsOf && about("", i.Date, t) && (found == nil || i.Date < found.Date) {
+		if i.FittedBy != "" && about("", i.Date, t) && (found == nil || i.Date < found.Date) {
 			found = link(h.refs, i, i.Date)
 		}
 	}
@@ -51,7 +51,7 @@ func (h *hearing) fitting(t *test) *Link {
 func (h *hearing) retraining(t *test) *Link {
 	found := h.followLink(t, "retraining")
 	for _, s := range h.w.Trainings {
-		if s.Topics.Has("protectors") && s.Date <= h.b.AsOf && about("", s.Date, t) && (found == nil || s.Date < found.Date) {
+		if s.Topics.Has("protectors") && about("", s.Date, t) && (found == nil || s.Date < found.Date) {
 			found = link(h.refs, s, s.Date)
 		}
 	}
@@ -154,7 +154,7 @@ func (h *hearing) recordables(c *course) []Recorded {
 func (h *hearing) revisions() []Revision {
 	out := []Revision{}
 	for _, f := range h.follow {
-		if f.Type != "baseline_revision" {
+		if f.Type != "baseline_revision" || !h.b.here(h.w, f.Date) {
 			continue
 		}
 		r := Revision{Link: *link(h.refs, f, f.Date), Ears: []string{}, Unfounded: []string{}, Undecided: []string{}, By: h.b.Registers.professionOf(f.By), ByRecorded: f.By != ""}
@@ -221,7 +221,7 @@ func (h *hearing) dangling() []Dangling {
 		seen[a.AudiogramID] = true
 	}
 	miss := func(id string, rec record.Record, day Date) {
-		if id != "" && !seen[id] {
+		if id != "" && !seen[id] && h.b.here(h.w, day) {
 			seen[id] = true
 			out = append(out, Dangling{Link: *link(h.refs, rec, day), ID: id})
 		}

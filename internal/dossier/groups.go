@@ -86,7 +86,7 @@ func (b *Builder) group(id string, u *Usage) *File {
 	if len(u.loose[id]) > 0 && d.FirstSurvey == nil {
 		d.FirstSurvey = &d.Measurements[0].Link
 	}
-	if tasks := b.Registers.tasksOf[id]; len(tasks) > 0 {
+	if tasks := until(b.Registers.tasksOf[id], b.AsOf, func(t *record.Task) Date { return t.Date }); len(tasks) > 0 {
 		d.TaskDay = link(refs, tasks[0], tasks[0].Date)
 	}
 	b.changes(d, refs)
@@ -117,10 +117,7 @@ func (b *Builder) measurements(rows []*record.Measurement, refs Refs) []Measurem
 	level := b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols]
 	i := b.channels.index(level.Channel)
 	for len(rows) > 0 {
-		n := 1
-		for n < len(rows) && rows[n].MeasurementID == rows[0].MeasurementID {
-			n++
-		}
+		n := sameMeasurement(rows)
 		first := rows[0]
 		m := Measurement{
 			Link: *link(refs, first, first.Date), ID: first.MeasurementID, Type: first.Type, FullShift: first.FullShift,
@@ -226,6 +223,9 @@ func (b *Builder) SiteDossier(u *Usage) *File {
 		}
 	}
 	for _, id := range slices.Sorted(maps.Keys(u.missing)) {
+		if seen[id] { // another worker wore it
+			continue
+		}
 		x := u.missing[id]
 		x.Ref = refs.Of(u.missingRec[id])
 		d.MissingMeasurements = append(d.MissingMeasurements, x)

@@ -64,24 +64,35 @@ type ExposureMeasures struct {
 	Channels map[string]Channel   `json:"channels" doc:"dose settings, by name"`
 	Levels   map[string]Threshold `json:"levels" doc:"exposure levels of the law, by name"`
 	Enrols   string               `json:"enrols" doc:"name of the level that puts a worker into the program"`
-	Several  string               `json:"several" enum:"highest" doc:"which result counts where a group has several since its latest change: the highest"`
+	Several  string               `json:"several" enum:"highest|sampled" doc:"what counts where a group has several results since its latest change: the highest, or the mean with its uncertainty by sampling (levels only)"`
+	Strategy string               `json:"strategy,omitempty" enum:"job|full_day" doc:"how samples were taken, where several is sampled (ISO 9612): over jobs or over full days"`
+	Decision string               `json:"decision,omitempty" enum:"best|upper|zones" doc:"what of an uncertain level is compared: the best estimate, its upper limit, or three zones, of which the middle one decides nothing; the best estimate if left out"`
 	Note     string               `json:"note,omitempty" doc:"reading of the law behind these choices"`
 }
 
-// Channel is one setting of a noise dosimeter.
+// The kinds of channels.
+const (
+	DoseChannel  = "dose"
+	LevelChannel = "level"
+)
+
+// Channel is one way in which exposure is expressed: the dose of a dosimeter setting, or the level L_EX,8h
+// by equal energy.
 type Channel struct {
-	CriterionDB float64 `json:"criterion_db" doc:"criterion level for 8 h, dBA"`
-	ExchangeDB  float64 `json:"exchange_db" doc:"exchange rate, dB"`
-	ThresholdDB float64 `json:"threshold_db,omitempty" doc:"integration threshold, dBA; levels at it count"`
-	UpperDB     float64 `json:"upper_db,omitempty" doc:"upper end of the range to be integrated, dBA"`
+	Kind        string  `json:"kind,omitempty" enum:"dose|level" doc:"a noise dose in percent, or the level L_EX,8h in dBA; a dose if left out"`
+	CriterionDB float64 `json:"criterion_db,omitempty" doc:"criterion level of a dose for 8 h, dBA"`
+	ExchangeDB  float64 `json:"exchange_db,omitempty" doc:"exchange rate of a dose, dB"`
+	ThresholdDB float64 `json:"threshold_db,omitempty" doc:"integration threshold of a dose, dBA; levels at it count"`
+	UpperDB     float64 `json:"upper_db,omitempty" doc:"upper end of the range to be integrated into a dose, dBA"`
+	Weekly      bool    `json:"weekly,omitempty" doc:"whether a level is averaged over the week of five 8-hour days, by the days worked"`
 	Cite        string  `json:"cite" doc:"paragraph"`
 }
 
-// Threshold is an exposure level of the law: a channel whose dose reaches, or exceeds, a parameter.
+// Threshold is an exposure level of the law: a channel whose value reaches, or exceeds, a parameter.
 type Threshold struct {
 	Channel string `json:"channel" doc:"name of the channel"`
-	AtLeast string `json:"at_least,omitempty" doc:"parameter that the dose reaches, percent"`
-	Above   string `json:"above,omitempty" doc:"parameter that the dose exceeds, percent"`
+	AtLeast string `json:"at_least,omitempty" doc:"parameter that the dose, percent, or the level, dBA, reaches"`
+	Above   string `json:"above,omitempty" doc:"parameter that the dose, percent, or the level, dBA, exceeds"`
 }
 
 // HearingMeasures say how hearing tests are compared.
@@ -95,11 +106,11 @@ type HearingMeasures struct {
 	Licensed      []string       `json:"licensed" doc:"professions whose finding lifts the entry in the log"`
 }
 
-// ShiftMeasure is a threshold shift: an average change, over frequencies, against the baseline.
+// ShiftMeasure is the threshold shift of the law, and the time within which a retest may stand in for the
+// test that shows it.
 type ShiftMeasure struct {
-	Frequencies []int  `json:"frequencies" doc:"frequencies averaged, Hz"`
-	AtLeast     string `json:"at_least" doc:"parameter that the average change reaches, dB"`
-	Retest      string `json:"retest" doc:"parameter: time within which a retest may stand in for the test"`
+	audiometry.Scheme
+	Retest string `json:"retest" doc:"parameter: time within which a retest may stand in for the test"`
 }
 
 // RecordMeasure is the hearing level of the recording rule, over the frequencies of the shift.
@@ -116,8 +127,12 @@ type AgeMeasure struct {
 
 // ProtectionMeasures say how the attenuation of protectors is estimated.
 type ProtectionMeasures struct {
-	Rating  string `json:"rating" enum:"nrr" doc:"rating that is used"`
-	Channel string `json:"channel" doc:"channel whose average is reduced"`
+	Rating    string  `json:"rating" enum:"nrr|snr|hml|octave|slc80" doc:"rating of the label, or laboratory data, that is used"`
+	Channel   string  `json:"channel" doc:"channel whose 8-hour level is reduced"`
+	Derating  string  `json:"derating,omitempty" enum:"niosh|csa" doc:"reduction of a noise reduction rating by type of protector"`
+	Percent   float64 `json:"percent,omitempty" doc:"percentage of wearers for whom octave band values are assumed; 84 if left out"`
+	RealWorld string  `json:"real_world,omitempty" doc:"parameter: dB added to the level at the ear for use outside the laboratory"`
+	Bands     string  `json:"bands,omitempty" doc:"parameter: action level, dBA, against which the level at the ear is graded from too little to too much protection"`
 }
 
 // TrainingMeasures say how training sessions are taken together.

@@ -96,7 +96,7 @@ type Instrument struct {
 	Known       bool      `json:"registered" doc:"whether the instrument is in the instrument records"`
 	Type        string    `json:"kind" doc:"audiometer, dosimeter, sound_level_meter or calibrator; null if not known"`
 	Standard    string    `json:"standard" doc:"standard that it meets"`
-	InUse       *Spell    `json:"in_use" doc:"from its first day in service or first use, to its last day in service"`
+	InUse       *Spell    `json:"in_use" doc:"from its first day in service or first use, to its last day in service or, if later, its last use"`
 	Tests       int       `json:"tests" doc:"hearing tests made with it"`
 	Workers     int       `json:"workers" doc:"workers tested with it"`
 	Years       []UseYear `json:"years" doc:"years in which hearing tests were made with it"`

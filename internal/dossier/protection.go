@@ -2,7 +2,6 @@ package dossier
 
 import (
 	"fmt"
-	"slices"
 
 	"hearduty/internal/acoustics"
 	"hearduty/internal/record"
@@ -46,7 +45,7 @@ func (b *Builder) fit(p *Protection, w *WorkerRecords, issue *record.ProtectorIs
 			p.Fitted = link(refs, f, f.Date)
 		}
 	}
-	for _, t := range until(w.FitTests, b.AsOf, func(t *record.FitTest) Date { return t.Date }) {
+	for _, t := range w.FitTests {
 		if t.ProtectorID != issue.ProtectorID || t.Date < issue.Date {
 			continue
 		}
@@ -101,59 +100,44 @@ func (b *Builder) unprotected(now *stretch) (float64, acoustics.Weighting, bool)
 		return 0, "", false
 	}
 	i := b.channels.index(b.Measures.Protection.Channel)
-	if src := now.src[i]; src != nil {
-		for _, m := range b.rowsOf(src) {
-			if m.TWADBC.Known && now.doses[i].exact() {
+	k := now.on[i]
+	if k.src != nil && k.exact() {
+		for _, m := range k.src.rows {
+			if m.TWADBC.Known {
 				return m.TWADBC.Value, acoustics.C, true
 			}
 		}
 	}
-	twa, ok := b.channels.scales[i].TWAReported(now.doses[i].high)
-	if !ok || now.doses[i].high == unknownDose.high {
+	twa, ok := b.channels.scales[i].TWAReported(k.high)
+	if !ok {
 		return 0, "", false
 	}
 	return twa, acoustics.A, true
 }
 
-// rowsOf gives the rows of the measurement that decides.
-func (b *Builder) rowsOf(r *result) []*record.Measurement {
-	m, ok := r.rec.(*record.Measurement)
-	if !ok {
-		return nil
-	}
-	if m.Group == "" && m.Area == "" {
-		return []*record.Measurement{m}
-	}
-	var out []*record.Measurement
-	for _, row := range slices.Concat(b.Registers.byGroup[m.Group], b.Registers.byArea[m.Area]) {
-		if row.MeasurementID == m.MeasurementID {
-			out = append(out, row)
-		}
-	}
-	return out
-}
-
 // wear gives the latest check of whether the worker wore protectors: one of the worker's own, or one of the
-// area in which all wore them.
+// area in which all wore them while the worker was in a group of that area.
 func (b *Builder) wear(w *WorkerRecords, now *stretch, refs Refs) *Wear {
 	var out *Wear
-	for _, c := range until(w.WearChecks, b.AsOf, func(c *record.WearCheck) Date { return c.Date }) {
+	for _, c := range w.WearChecks {
 		out = &Wear{Link: *link(refs, c, c.Date), Worn: c.Worn, Own: true}
 	}
 	if now == nil {
 		return out
 	}
-	group := b.Registers.Groups[now.group]
-	if group == nil || group.Area == "" {
-		return out
-	}
-	for _, c := range until(b.Registers.wearOf[group.Area], b.AsOf, func(c *record.WearCheck) Date { return c.Date }) {
-		if out != nil && c.Date <= out.Date {
+	for _, m := range w.memberships() {
+		group := b.Registers.Groups[m.group]
+		if group == nil || group.Area == "" || !m.Contains(b.AsOf) {
 			continue
 		}
-		all := c.Observed.Known && c.Wearing.Known && c.Observed.Value > 0 && c.Observed.Value == c.Wearing.Value
-		if all { // a check in which some wore none says nothing of this worker
-			out = &Wear{Link: *link(refs, c, c.Date), Worn: record.Yes}
+		for _, c := range until(b.Registers.wearOf[group.Area], b.AsOf, func(c *record.WearCheck) Date { return c.Date }) {
+			if !m.Contains(c.Date) || out != nil && c.Date <= out.Date {
+				continue
+			}
+			all := c.Observed.Known && c.Wearing.Known && c.Observed.Value > 0 && c.Observed.Value == c.Wearing.Value
+			if all { // a check in which some wore none says nothing of this worker
+				out = &Wear{Link: *link(refs, c, c.Date), Worn: record.Yes}
+			}
 		}
 	}
 	return out

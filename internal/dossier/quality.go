@@ -42,20 +42,16 @@ func (b *Builder) Instruments(u *Usage) []*File {
 	return out
 }
 
-// noiseUses gives the noise measurements of the site by instrument, oldest first.
+// noiseUses gives the rows of the noise measurements of the site by instrument, oldest first.
 func (b *Builder) noiseUses(u *Usage) map[string][]*record.Measurement {
 	out := map[string][]*record.Measurement{}
-	seen := map[string]bool{}
-	take := func(m *record.Measurement) {
-		key := m.InstrumentID + "\x00" + m.MeasurementID
-		if m.Date <= b.AsOf && !seen[key] {
-			seen[key] = true
-			out[m.InstrumentID] = append(out[m.InstrumentID], m)
-		}
-	}
+	seen := map[*record.Measurement]bool{}
 	for _, id := range b.groupIDs(u) {
 		for _, m := range b.measurementsOf(u, id) {
-			take(m)
+			if !seen[m] {
+				seen[m] = true
+				out[m.InstrumentID] = append(out[m.InstrumentID], m)
+			}
 		}
 	}
 	for id := range out {
@@ -79,7 +75,7 @@ func (b *Builder) instrument(id string, tests *used, noise []*record.Measurement
 			d.Calibration = link(refs, c, c.Date)
 		}
 	}
-	var first Date
+	var first, last Date
 	if tests != nil {
 		if d.Type == "" && len(noise) == 0 {
 			d.Type = "audiometer" // it tests hearing
@@ -88,31 +84,33 @@ func (b *Builder) instrument(id string, tests *used, noise []*record.Measurement
 		for _, day := range tests.sortedDays() {
 			file.Series["test.use"] = append(file.Series["test.use"], tests.link(refs, day))
 		}
-		first = file.Uses[0].Date
+		first, last = file.Uses[0].Date, file.Uses[len(file.Uses)-1].Date
 	}
-	d.InUse = b.inUse(reg, first)
+	d.InUse = b.inUse(reg, first, last)
 	for _, c := range checks {
 		if drift, ok := driftOf(c, checks, file.Series["test.use"], refs); ok {
 			d.Deviations = append(d.Deviations, drift)
 		}
 	}
-	for _, m := range noise {
-		d.NoiseUse = append(d.NoiseUse, useOf(m, checks, refs))
+	for len(noise) > 0 {
+		n := sameMeasurement(noise)
+		d.NoiseUse = append(d.NoiseUse, useOf(noise[:n], checks, refs))
+		noise = noise[n:]
 	}
 	return file
 }
 
-// inUse gives the stretch in which an audiometer is in use at the site: from its first day in service or,
-// where that is not recorded, its first test, to its last day in service. One that was never used, and whose
-// first day in service is not recorded, is not in use.
-func (b *Builder) inUse(reg *record.Instrument, firstTest Date) *Spell {
+// inUse gives the stretch in which an audiometer is in use at the site: from its first day in service or
+// its first test to its last day in service or, if it is used after that, its last test. One that was never
+// used, and whose first day in service is not recorded, is not in use.
+func (b *Builder) inUse(reg *record.Instrument, firstTest, lastTest Date) *Spell {
 	s := calendar.Spell{From: firstTest}
 	if reg != nil {
-		if reg.InServiceFrom.Known() {
+		if reg.InServiceFrom.Known() && (!firstTest.Known() || reg.InServiceFrom < firstTest) {
 			s.From = reg.InServiceFrom
 		}
 		if reg.InServiceTo.Known() {
-			s.To = reg.InServiceTo + 1
+			s.To = max(reg.InServiceTo, lastTest) + 1
 		}
 	}
 	if !s.From.Known() || s.From > b.AsOf {
@@ -179,7 +177,7 @@ func driftOf(c *record.Calibration, checks []*record.Calibration, uses []Link, r
 			}
 		}
 	}
-	failed := largest < 0 && c.Result == "fail"
+	failed := largest <= 0 && c.Result == "fail" // no figure says why
 	if largest <= 0 && !failed || c.Type != "functional" && c.Type != "acoustic" && c.Type != "exhaustive" {
 		return Drift{}, false
 	}
@@ -212,8 +210,18 @@ func usedBefore(c *record.Calibration, remedy *Link, uses []Link) *Link {
 	return nil
 }
 
-func useOf(m *record.Measurement, checks []*record.Calibration, refs Refs) Use {
-	u := Use{Link: *link(refs, m, m.Date), ID: m.MeasurementID, CheckBefore: m.CheckBeforeDB, CheckAfter: m.CheckAfterDB}
+// useOf takes a noise measurement; any of its rows may hold the checks before and after.
+func useOf(rows []*record.Measurement, checks []*record.Calibration, refs Refs) Use {
+	m := rows[0]
+	u := Use{Link: *link(refs, m, m.Date), ID: m.MeasurementID}
+	for _, row := range rows {
+		if !u.CheckBefore.Known {
+			u.CheckBefore = row.CheckBeforeDB
+		}
+		if !u.CheckAfter.Known {
+			u.CheckAfter = row.CheckAfterDB
+		}
+	}
 	for _, c := range checks {
 		if c.Date <= m.Date {
 			u.Calibrated, u.Failed = link(refs, c, c.Date), c.Result == "fail"

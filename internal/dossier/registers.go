@@ -1,6 +1,8 @@
 package dossier
 
 import (
+	"fmt"
+	"maps"
 	"slices"
 
 	"hearduty/internal/record"
@@ -26,13 +28,13 @@ type Registers struct {
 	tasksOf       map[string][]*record.Task
 	calibrations  map[string][]*record.Calibration
 	wearOf        map[string][]*record.WearCheck
-	measurementID map[string]bool
+	firstMeasured map[string]Date // by id
 }
 
 func newRegisters() *Registers {
 	return &Registers{
 		Groups: map[string]*record.Group{}, Protectors: map[string]*record.Protector{},
-		Instruments: map[string]*record.Instrument{}, Testers: map[string]*record.Tester{}, measurementID: map[string]bool{},
+		Instruments: map[string]*record.Instrument{}, Testers: map[string]*record.Tester{}, firstMeasured: map[string]Date{},
 	}
 }
 
@@ -77,7 +79,9 @@ func (r *Registers) index() {
 	r.byGroup = map[string][]*record.Measurement{}
 	r.byArea = map[string][]*record.Measurement{}
 	for _, m := range r.Measurements {
-		r.measurementID[m.MeasurementID] = true
+		if _, ok := r.firstMeasured[m.MeasurementID]; !ok {
+			r.firstMeasured[m.MeasurementID] = m.Date
+		}
 		if m.Group != "" {
 			r.byGroup[m.Group] = append(r.byGroup[m.Group], m)
 		} else {
@@ -102,6 +106,15 @@ func compareMeasurements(a, b *record.Measurement) int {
 		return 1
 	}
 	return compareOrigin(a, b)
+}
+
+// sameMeasurement gives the number of rows, in order, that belong to the first measurement.
+func sameMeasurement(rows []*record.Measurement) int {
+	n := 1
+	for n < len(rows) && rows[n].MeasurementID == rows[0].MeasurementID {
+		n++
+	}
+	return n
 }
 
 func groupBy[R any](records []R, key func(R) string) map[string][]R {
@@ -134,4 +147,36 @@ func (r *Registers) professionOf(person string) string {
 		return person
 	}
 	return ""
+}
+
+// Unplaced says, a sentence each, which measurements, changes and controls appear in no dossier, since no
+// group has their area, or neither a record nor a worker their group.
+func (r *Registers) Unplaced(members func(group string) bool) []string {
+	areas := map[string]bool{}
+	for _, g := range r.Groups {
+		areas[g.Area] = true
+	}
+	counts := map[string]int{}
+	place := func(what, group, area string) {
+		switch {
+		case group != "" && r.Groups[group] == nil && !members(group):
+			counts[what+" of the group "+group+", which has neither a record nor a worker"]++
+		case group == "" && area != "" && !areas[area]:
+			counts[what+" of the area "+area+", which no group has"]++
+		}
+	}
+	for _, m := range r.Measurements {
+		place("measurement", m.Group, m.Area)
+	}
+	for _, c := range r.Changes {
+		place("change", c.Group, c.Area)
+	}
+	for _, c := range r.Controls {
+		place("control", c.Group, c.Area)
+	}
+	var out []string
+	for _, text := range slices.Sorted(maps.Keys(counts)) {
+		out = append(out, fmt.Sprintf("%d × %s: not judged. Add a group record with its site and area.", counts[text], text))
+	}
+	return out
 }

@@ -214,26 +214,25 @@ func (h *hearing) find(id string) *test {
 // advance notes whether a shift appears, returns or lapses with a comparison.
 func (h *hearing) advance(c *course, now *comparison, limit func(Date) record.Answer) {
 	var lapsed, again [2]bool
-	var before *comparison
 	for i := range now.verdict {
 		was := c.since[i]
 		switch {
 		case now.verdict[i] == audiometry.Yes && was == nil:
 			c.since[i] = now
 		case now.verdict[i] == audiometry.Yes && was.base[i] == now.base[i]:
-			again[i], before = true, was
+			again[i] = true
 		case now.verdict[i] == audiometry.Yes:
 			c.since[i] = now
 		case now.verdict[i] == audiometry.No && was != nil && was.base[i] == now.base[i]:
-			lapsed[i], before = true, was
+			lapsed[i] = true
 		}
 	}
-	day := now.test.standing().rec.Date
-	if lapsed[0] || lapsed[1] {
-		h.lapse(c, now, before, lapsed, limit(day))
+	day, since := now.test.standing().rec.Date, c.since
+	for _, ears := range together(lapsed, since) {
+		h.lapse(c, now, firstShown(since, ears), ears, limit(day))
 	}
-	if again[0] || again[1] {
-		h.persist(c, now, before, again)
+	for _, ears := range together(again, since) {
+		h.persist(c, now, firstShown(since, ears), ears)
 	}
 	if now.shifted() {
 		from := h.determined(now.test)
@@ -244,7 +243,26 @@ func (h *hearing) advance(c *course, now *comparison, limit func(Date) record.An
 	}
 }
 
-func (h *hearing) lapse(c *course, now, before *comparison, ears [2]bool, over record.Answer) {
+// together divides ears into those whose shift one test first showed.
+func together(ears [2]bool, since [2]*comparison) [][2]bool {
+	switch {
+	case ears[0] && ears[1] && since[0] != since[1]:
+		return [][2]bool{{true, false}, {false, true}}
+	case ears[0] || ears[1]:
+		return [][2]bool{ears}
+	}
+	return nil
+}
+
+// firstShown gives the test that first showed the shift of the ears.
+func firstShown(since [2]*comparison, ears [2]bool) *test {
+	if ears[0] {
+		return since[0].test.standing()
+	}
+	return since[1].test.standing()
+}
+
+func (h *hearing) lapse(c *course, now *comparison, first *test, ears [2]bool, over record.Answer) {
 	below := record.Unanswered
 	switch over {
 	case record.Yes:
@@ -254,7 +272,7 @@ func (h *hearing) lapse(c *course, now, before *comparison, ears [2]bool, over r
 	}
 	s := now.test.standing()
 	c.lapsed = append(c.lapsed, Lapsed{
-		Link: Link{s.rec.Date, s.ref}, ID: s.rec.AudiogramID, Shift: Link{before.test.standing().rec.Date, before.test.standing().ref},
+		Link: Link{s.rec.Date, s.ref}, ID: s.rec.AudiogramID, Shift: Link{first.rec.Date, first.ref},
 		Ears: earsText(ears[0], ears[1]), BelowLimit: below, Notice: h.notice(now.test, "persistent_shift_lifted"),
 	})
 	if below != record.Yes {
@@ -271,9 +289,8 @@ func (h *hearing) lapse(c *course, now, before *comparison, ears [2]bool, over r
 }
 
 // persist notes that a shift is there again; of several tests in a row the latest is kept.
-func (h *hearing) persist(c *course, now, before *comparison, ears [2]bool) {
+func (h *hearing) persist(c *course, now *comparison, first *test, ears [2]bool) {
 	s := now.test.standing()
-	first := before.test.standing()
 	p := Persisted{Link: Link{s.rec.Date, s.ref}, Shift: Link{first.rec.Date, first.ref}, Ears: earsText(ears[0], ears[1])}
 	for _, f := range h.follow {
 		if (f.Type == "persistence_opinion" || f.Type == "baseline_revision") && f.Date >= first.rec.Date && concerns(f.Ear, ears) &&
@@ -282,8 +299,8 @@ func (h *hearing) persist(c *course, now, before *comparison, ears [2]bool) {
 			break
 		}
 	}
-	if n := len(c.persisted); n > 0 && c.persisted[n-1].Shift.Ref == p.Shift.Ref {
-		c.persisted[n-1] = p
+	if n := slices.IndexFunc(c.persisted, func(x Persisted) bool { return x.Shift.Ref == p.Shift.Ref }); n >= 0 {
+		c.persisted[n] = p
 		return
 	}
 	c.persisted = append(c.persisted, p)

@@ -14,8 +14,7 @@ import (
 // time, so that memory stays flat however many workers there are.
 const shardCount = 256
 
-// memoryBudget is the number of bytes of packed records that stay in memory. Beyond it they move to one
-// temporary file that only this process can read and that is gone when the process ends.
+// memoryBudget is the number of bytes of packed records that stay in memory.
 const memoryBudget = 48 << 20
 
 // Store sorts records by subject. Records of workers are kept packed, in shards; all others are registers
@@ -24,6 +23,7 @@ type Store struct {
 	registers *Registers
 	shards    [shardCount]shard
 	size      int
+	budget    int // bytes of packed records beyond which they move to the temporary file
 	spill     *os.File
 	spilled   int64
 }
@@ -41,7 +41,7 @@ type part struct {
 
 // NewStore makes an empty store. Close it when done.
 func NewStore() *Store {
-	return &Store{registers: newRegisters()}
+	return &Store{registers: newRegisters(), budget: memoryBudget}
 }
 
 // Add takes a record. It fails only if the temporary file cannot be written.
@@ -57,13 +57,14 @@ func (s *Store) Add(rec record.Record) error {
 	before := len(sh.rest)
 	sh.rest = record.Append(sh.rest, rec)
 	s.size += len(sh.rest) - before
-	if s.size > memoryBudget {
+	if s.size > s.budget {
 		return s.flush()
 	}
 	return nil
 }
 
-// flush moves all packed records to the temporary file.
+// flush moves all packed records to one temporary file that only this process can read and that is gone
+// when the process ends.
 func (s *Store) flush() error {
 	if s.spill == nil {
 		f, err := os.CreateTemp("", "hearduty-*")
@@ -224,6 +225,23 @@ func (w *WorkerRecords) add(rec record.Record) {
 		w.FitTests = append(w.FitTests, v)
 	case *record.WearCheck:
 		w.WearChecks = append(w.WearChecks, v)
+	}
+}
+
+// until gives the records up to and including a day.
+func (w *WorkerRecords) until(last Date) *WorkerRecords {
+	return &WorkerRecords{
+		ID:           w.ID,
+		Employments:  until(w.Employments, last, func(r *record.Worker) Date { return r.HiredOn }),
+		Assignments:  until(w.Assignments, last, func(r *record.Assignment) Date { return r.From }),
+		Measurements: until(w.Measurements, last, func(r *record.Measurement) Date { return r.Date }),
+		Notices:      until(w.Notices, last, func(r *record.Notice) Date { return r.Date }),
+		Audiograms:   until(w.Audiograms, last, func(r *record.Audiogram) Date { return r.Date }),
+		FollowUps:    until(w.FollowUps, last, func(r *record.FollowUp) Date { return r.Date }),
+		Trainings:    until(w.Trainings, last, func(r *record.Training) Date { return r.Date }),
+		Issues:       until(w.Issues, last, func(r *record.ProtectorIssue) Date { return r.Date }),
+		FitTests:     until(w.FitTests, last, func(r *record.FitTest) Date { return r.Date }),
+		WearChecks:   until(w.WearChecks, last, func(r *record.WearCheck) Date { return r.Date }),
 	}
 }
 

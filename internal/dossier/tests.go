@@ -52,7 +52,7 @@ type hearing struct {
 	refs      Refs
 	follow    []*record.FollowUp
 	notices   []*record.Notice
-	tests     []*test // all tests up to the as-of day, oldest first
+	tests     []*test // all tests, oldest first
 	baseline  *test   // the first valid baseline
 	marked    bool    // whether its record is marked as baseline
 	effective []*test // tests after the baseline that stand for themselves; their standing() is compared
@@ -64,9 +64,7 @@ type hearing struct {
 
 func (b *Builder) hearing(w *WorkerRecords, refs Refs, enrolled []calendar.Spell) *hearing {
 	h := &hearing{
-		b: b, w: w, refs: refs,
-		follow:  until(w.FollowUps, b.AsOf, func(f *record.FollowUp) Date { return f.Date }),
-		notices: until(w.Notices, b.AsOf, func(n *record.Notice) Date { return n.Date }),
+		b: b, w: w, refs: refs, follow: w.FollowUps, notices: w.Notices,
 
 		everEnrolled: len(enrolled) > 0,
 	}
@@ -78,7 +76,7 @@ func (b *Builder) hearing(w *WorkerRecords, refs Refs, enrolled []calendar.Spell
 			h.birth = e.BirthDate
 		}
 	}
-	for _, a := range until(w.Audiograms, b.AsOf, func(a *record.Audiogram) Date { return a.Date }) {
+	for _, a := range w.Audiograms {
 		_, in := calendar.Find(enrolled, a.Date)
 		h.tests = append(h.tests, &test{rec: a, ref: refs.Of(a), enrolled: in, invalidated: h.invalidated(a)})
 	}
@@ -110,18 +108,19 @@ func (h *hearing) findBaseline() {
 	}
 }
 
-// pairRetests lets a retest within the law's time stand in for the test before it. Of several retests the
-// latest counts.
+// pairRetests lets a retest within the law's time stand in for the test before it, unless that is the
+// baseline or the retest lacks a threshold that the comparison needs. Of several retests the latest counts.
 func (h *hearing) pairRetests() {
 	var first *test
 	for _, t := range h.tests {
-		if t.rec.Purpose != "retest" {
-			if t.counts() {
-				first = t
-			}
+		if !t.counts() {
 			continue
 		}
-		if first == nil || !t.counts() {
+		if t.rec.Purpose != "retest" || first == nil || first == h.baseline {
+			first = t
+			continue
+		}
+		if !h.comparable(t) {
 			continue
 		}
 		within, ok := h.b.Law.Interval(h.b.Measures.Hearing.Shift.Retest, first.rec.Date)
@@ -135,6 +134,12 @@ func (h *hearing) pairRetests() {
 			first = t
 		}
 	}
+}
+
+// comparable says whether the test has every threshold that a comparison needs, in both ears.
+func (h *hearing) comparable(t *test) bool {
+	freqs := h.b.Measures.Hearing.Shift.Frequencies
+	return len(t.rec.Left.Sum(freqs).Missing)+len(t.rec.Right.Sum(freqs).Missing) == 0
 }
 
 // findEffective lists the tests after the baseline that stand for themselves and says which are to be

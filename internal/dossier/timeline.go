@@ -1,6 +1,7 @@
 package dossier
 
 import (
+	"cmp"
 	"slices"
 
 	"hearduty/internal/calendar"
@@ -28,20 +29,41 @@ func inclusive(first, last Date) calendar.Spell {
 	return calendar.Spell{From: first, To: last}
 }
 
+// membership is a stretch in a group.
+type membership struct {
+	calendar.Spell
+	group string
+}
+
+// memberships gives a worker's stretches in groups, by first day. Assignments to one group that touch or
+// overlap make one stretch.
+func (w *WorkerRecords) memberships() []membership {
+	spells := map[string][]calendar.Spell{}
+	for _, a := range w.Assignments {
+		spells[a.Group] = append(spells[a.Group], inclusive(a.From, a.To))
+	}
+	var out []membership
+	for group, list := range spells {
+		for _, s := range calendar.Union(list) {
+			out = append(out, membership{s, group})
+		}
+	}
+	slices.SortFunc(out, func(a, b membership) int { return cmp.Or(cmp.Compare(a.From, b.From), cmp.Compare(a.group, b.group)) })
+	return out
+}
+
 // timeline works out a worker's exposure while employed at the site. The worker's own full-shift result
 // counts before the group's from its day on, until the group is measured or changed again. Where several
 // assignments overlap, the highest exposure counts. Days without assignment and without own result are
 // not known.
 func (b *Builder) timeline(w *WorkerRecords, employed []calendar.Spell) []stretch {
-	own := b.ownResults(w)
-	days := []Date{}
-	for _, s := range employed {
-		days = append(days, s.From)
-	}
-	for _, a := range w.Assignments {
-		s := inclusive(a.From, a.To)
-		days = append(days, s.From, s.To)
-		if h := b.histories[a.Group]; h != nil {
+	own, groups := b.ownResults(w), w.memberships()
+	var days []Date
+	var assigned []calendar.Spell
+	for _, m := range groups {
+		assigned = append(assigned, m.Spell)
+		days = append(days, m.From, m.To)
+		if h := b.histories[m.group]; h != nil {
 			for _, st := range h.steps {
 				days = append(days, st.from)
 			}
@@ -61,12 +83,22 @@ func (b *Builder) timeline(w *WorkerRecords, employed []calendar.Spell) []stretc
 				inside = append(inside, d)
 			}
 		}
+		gaps := calendar.Subtract([]calendar.Spell{spell}, assigned)
 		for i, from := range inside {
 			piece := calendar.Spell{From: from, To: spell.To}
 			if i+1 < len(inside) {
 				piece.To = inside[i+1]
 			}
-			out = join(out, b.onDay(w, own, piece))
+			s := stretch{Spell: piece}
+			if gap, ok := calendar.Find(gaps, from); ok {
+				s.on = b.inNoGroup(gap, own, from)
+			}
+			for _, m := range groups {
+				if m.Contains(from) {
+					s.add(m.group, b.inGroup(m, own, from))
+				}
+			}
+			out = join(out, s)
 		}
 	}
 	return out
@@ -75,9 +107,7 @@ func (b *Builder) timeline(w *WorkerRecords, employed []calendar.Spell) []stretc
 // join adds a stretch, or lengthens the one before if nothing but the days differ.
 func join(list []stretch, s stretch) []stretch {
 	if n := len(list); n > 0 {
-		l := &list[n-1]
-		if l.To == s.From && l.group == s.group && l.own == s.own && l.note == s.note && l.reason == s.reason &&
-			slices.Equal(l.doses, s.doses) && slices.Equal(l.src, s.src) {
+		if l := &list[n-1]; l.To == s.From && l.group == s.group && slices.Equal(l.on, s.on) {
 			l.To = s.To
 			return list
 		}
@@ -85,142 +115,111 @@ func join(list []stretch, s stretch) []stretch {
 	return append(list, s)
 }
 
-// onDay works out the exposure in a piece of time in which nothing changes.
-func (b *Builder) onDay(w *WorkerRecords, own []*result, piece calendar.Spell) stretch {
-	day := piece.From
-	out := stretch{Spell: piece, doses: make([]dose, len(b.channels.names)), src: make([]*result, len(b.channels.names))}
-	assigned := 0
-	for _, a := range w.Assignments {
-		s := inclusive(a.From, a.To)
-		if !s.Contains(day) {
-			continue
-		}
-		assigned++
-		part := b.inGroup(a.Group, s, own, day)
-		if assigned == 1 {
-			part.Spell = piece
-			out = part
-			continue
-		}
-		out.merge(part)
+// add takes the exposure in a group into the stretch. Where there are several groups on one day, the higher
+// exposure counts.
+func (s *stretch) add(group string, on []known) {
+	if s.on == nil {
+		s.group, s.on = group, on
+		return
 	}
-	if assigned == 0 {
-		out.ownOnly(own, day)
+	s.group += " and " + group
+	for i, a := range s.on {
+		k, other := a, on[i]
+		if a.src == nil || other.src != nil && other.low > a.low {
+			k, other = other, a
+		}
+		k.dose = higher(k.dose, other.dose)
+		switch {
+		case k.exact():
+			k.reason = ""
+		case k.reason == "":
+			k.reason = other.reason
+		}
+		s.on[i] = k
 	}
-	return out
+}
+
+// inNoGroup gives the exposure on a day in a gap between assignments: own results of that gap tell it.
+func (b *Builder) inNoGroup(gap calendar.Spell, own []*result, day Date) []known {
+	const reason = "the worker is in no group and has no full-shift measurement"
+	return b.withOwn(b.channels.historyOf(nil, nil), reason, gap, own, day)
 }
 
 // inGroup gives the exposure of a worker who is in a group on a day.
-func (b *Builder) inGroup(group string, assigned calendar.Spell, own []*result, day Date) stretch {
-	out := stretch{group: group, doses: make([]dose, len(b.channels.names)), src: make([]*result, len(b.channels.names))}
-	h := b.histories[group]
-	if h == nil {
-		for i := range out.doses {
-			out.doses[i] = unknownDose
-		}
-		out.reason = "the group " + group + " has no record and no measurement"
-	} else {
-		st := h.on(day)
-		copy(out.doses, st.doses)
-		copy(out.src, st.src)
-		out.note, out.reason = st.note, st.reason
+func (b *Builder) inGroup(m membership, own []*result, day Date) []known {
+	if h := b.histories[m.group]; h != nil {
+		return b.withOwn(h, "", m.Spell, own, day)
 	}
-	since := assigned.From
-	if h != nil {
-		since = max(since, h.latest(day))
-	}
-	for i := range out.doses {
-		var r *result
-		for _, o := range own {
-			if o.usable(i) && assigned.Contains(o.day) && o.day >= since && o.day <= day && (r == nil || o.doses[i].low >= r.doses[i].low) {
-				r = o
-			}
+	return b.withOwn(b.channels.historyOf(nil, nil), "the group "+m.group+" has no record and no measurement", m.Spell, own, day)
+}
+
+// withOwn gives what is known on a day from a group's history and from the own results of the stretch in
+// the group.
+func (b *Builder) withOwn(h *history, silent string, in calendar.Spell, own []*result, day Date) []known {
+	own = slices.DeleteFunc(slices.Clone(own), func(r *result) bool { return !in.Contains(r.day) })
+	out := slices.Clone(h.on(day).on)
+	for i := range out {
+		if silent != "" {
+			out[i].reason = silent
 		}
-		if r == nil && out.src[i] == nil { // the group tells nothing: the first own result, backwards
-			for _, o := range own {
-				if o.usable(i) && assigned.Contains(o.day) && o.day > day && (h == nil || !h.raisedBetween(day, o.day)) {
-					r = o
-					break
-				}
-			}
-		}
-		if r != nil {
-			out.doses[i], out.src[i], out.own, out.note, out.reason = r.doses[i], r, true, "the worker's own measurement", ""
-		}
+		out[i] = h.withOwn(i, out[i], own, day)
 	}
 	return out
 }
 
-// latest gives the day of the group's latest result or change up to a day.
-func (h *history) latest(day Date) Date {
-	var last Date
-	for _, r := range h.results {
-		if r.day <= day {
-			last = max(last, r.day)
+// withOwn takes own results into what is known on a channel. They count from their day on until the group
+// is measured or changed again, the highest of several, and where the group tells nothing also backwards.
+// A result known only within bounds leaves the group's value in force as a lower bound, unless it lies
+// below that.
+func (h *history) withOwn(channel int, k known, own []*result, day Date) known {
+	d, src := highest(own, channel, h.latest(channel, day), day)
+	if src == nil && k.src == nil {
+		for _, r := range own {
+			if r.usable(channel) && r.day > day && !h.raisedBetween(day, r.day) {
+				d, src = highest(own, channel, r.day, r.day)
+				break
+			}
 		}
 	}
-	for _, e := range h.events {
-		if e.day <= day {
-			last = max(last, e.day)
+	if src == nil {
+		unusable := !slices.ContainsFunc(own, func(r *result) bool { return r.usable(channel) })
+		if k.src == nil && len(own) > 0 && unusable {
+			k.reason = whyNone(slices.Concat(h.results, own))
+		}
+		return k
+	}
+	mine := known{dose: d, src: src, own: true, note: "the worker's own measurement"}
+	if !d.exact() && k.low > d.low && k.low <= d.high {
+		mine.low, mine.src, mine.own = k.low, k.src, false
+		mine.note = "at least the group's value; the worker's own measurement gives only bounds"
+	}
+	return mine
+}
+
+// latest gives the day of the group's latest change, or latest result on a channel, up to a day.
+func (h *history) latest(channel int, day Date) Date {
+	last := h.lastEvent(day).day
+	for _, r := range h.results {
+		if r.day <= day && r.usable(channel) {
+			last = max(last, r.day)
 		}
 	}
 	return last
 }
 
 func (h *history) raisedBetween(after, until Date) bool {
-	for _, e := range h.events {
-		if e.raises && e.day > after && e.day <= until {
-			return true
-		}
-	}
-	return false
-}
-
-// merge takes another assignment of the same day into the stretch: the higher exposure counts.
-func (s *stretch) merge(o stretch) {
-	for i := range s.doses {
-		if s.src[i] == nil || o.src[i] != nil && o.doses[i].low > s.doses[i].low {
-			s.src[i] = o.src[i]
-		}
-		s.doses[i] = higher(s.doses[i], o.doses[i])
-	}
-	s.group += " and " + o.group
-	if s.note == "" {
-		s.note = o.note
-	}
-	if s.reason == "" {
-		s.reason = o.reason
-	}
-}
-
-// ownOnly takes the exposure of a day without assignment from the worker's own results.
-func (s *stretch) ownOnly(own []*result, day Date) {
-	s.own = true
-	for i := range s.doses {
-		s.doses[i] = unknownDose
-		for _, o := range own {
-			if o.usable(i) && (o.day <= day || s.src[i] == nil) {
-				s.doses[i], s.src[i] = o.doses[i], o
-			}
-		}
-	}
-	if !slices.ContainsFunc(s.src, func(r *result) bool { return r != nil }) {
-		s.own, s.reason = false, "the worker is in no group and has no full-shift measurement"
-	}
+	return slices.ContainsFunc(h.events, func(e event) bool { return e.raises && e.day > after && e.day <= until })
 }
 
 // ownResults gives the results of the worker's own measurements.
 func (b *Builder) ownResults(w *WorkerRecords) []*result {
-	rows := slices.Clone(until(w.Measurements, b.AsOf, func(m *record.Measurement) Date { return m.Date }))
+	rows := slices.Clone(w.Measurements)
 	slices.SortStableFunc(rows, compareMeasurements)
 	var out []*result
 	for len(rows) > 0 {
-		n := 1
-		for n < len(rows) && rows[n].MeasurementID == rows[0].MeasurementID {
-			n++
-		}
+		n := sameMeasurement(rows)
 		if rows[0].Type == "personal" {
-			out = append(out, b.channels.ofMeasurement(rows[:n]))
+			out = append(out, b.channels.ofMeasurement(rows[:n:n]))
 		}
 		rows = rows[n:]
 	}

@@ -56,6 +56,7 @@ func NewUsage() *Usage {
 
 // Add takes the records of one worker whose dossier was made at the builder's site.
 func (u *Usage) Add(b *Builder, w *WorkerRecords, d *Worker) {
+	w = w.until(b.AsOf)
 	u.mu.Lock()
 	defer u.mu.Unlock()
 	employed := false
@@ -96,7 +97,7 @@ func (b *Builder) here(w *WorkerRecords, day Date) bool {
 
 func (u *Usage) addTests(b *Builder, w *WorkerRecords) {
 	seen := map[*used]map[Date]bool{}
-	for _, a := range until(w.Audiograms, b.AsOf, func(a *record.Audiogram) Date { return a.Date }) {
+	for _, a := range w.Audiograms {
 		if !b.here(w, a.Date) {
 			continue
 		}
@@ -132,22 +133,23 @@ func (u *Usage) addTests(b *Builder, w *WorkerRecords) {
 }
 
 func (u *Usage) addGroups(b *Builder, w *WorkerRecords, d *Worker, employed bool) {
-	for _, a := range w.Assignments {
-		if employed && inclusive(a.From, a.To).Contains(b.AsOf) {
-			u.members[a.Group]++
+	groups := w.memberships()
+	for _, g := range groups {
+		if employed && g.Contains(b.AsOf) {
+			u.members[g.group]++
 			if d.Protection != nil {
-				u.holders[a.Group]++
+				u.holders[g.group]++
 			}
 		}
 	}
-	for _, m := range until(w.Measurements, b.AsOf, func(m *record.Measurement) Date { return m.Date }) {
+	for _, m := range w.Measurements {
 		if !b.here(w, m.Date) {
 			continue
 		}
 		group := ""
-		for _, a := range w.Assignments {
-			if inclusive(a.From, a.To).Contains(m.Date) {
-				group = a.Group
+		for _, g := range groups {
+			if reg := b.Registers.Groups[g.group]; g.Contains(m.Date) && (reg == nil || reg.Site == b.Place.ID) {
+				group = g.group
 			}
 		}
 		u.loose[group] = append(u.loose[group], m)
@@ -155,7 +157,7 @@ func (u *Usage) addGroups(b *Builder, w *WorkerRecords, d *Worker, employed bool
 }
 
 func (u *Usage) addLog(b *Builder, w *WorkerRecords) {
-	for _, f := range until(w.FollowUps, b.AsOf, func(f *record.FollowUp) Date { return f.Date }) {
+	for _, f := range w.FollowUps {
 		if f.Type != "log_entry" || !b.here(w, f.Date) {
 			continue
 		}
@@ -172,9 +174,10 @@ func (u *Usage) addLog(b *Builder, w *WorkerRecords) {
 }
 
 func (u *Usage) addMissing(b *Builder, w *WorkerRecords) {
-	for _, n := range until(w.Notices, b.AsOf, func(n *record.Notice) Date { return n.Date }) {
+	for _, n := range w.Notices {
 		id := n.MeasurementID
-		if id == "" || b.Registers.measurementID[id] || !b.here(w, n.Date) ||
+		first, ok := b.Registers.firstMeasured[id]
+		if id == "" || ok && first <= b.AsOf || !b.here(w, n.Date) ||
 			slices.ContainsFunc(w.Measurements, func(m *record.Measurement) bool { return m.MeasurementID == id }) {
 			continue
 		}
@@ -209,3 +212,6 @@ func (u *used) tallies() []Tally {
 	}
 	return out
 }
+
+// HasMembers says whether a worker of the site is in a group on the as-of day.
+func (u *Usage) HasMembers(group string) bool { return u.members[group] > 0 }

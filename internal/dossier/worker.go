@@ -9,17 +9,17 @@ import (
 
 // Worker makes the dossier of a worker at the builder's site. Tests, notices and so on count at this site
 // unless the worker was employed at another site on the day. It returns nil for a worker who was not
-// employed at the site by the as-of day.
+// employed at the site by the as-of day. Records of later days are not seen.
 func (b *Builder) Worker(w *WorkerRecords) *File {
+	w = w.until(b.AsOf)
 	employed := employedAt(b.Place.ID, w.Employments)
-	employed = slices.DeleteFunc(employed, func(s calendar.Spell) bool { return s.From > b.AsOf })
 	if len(employed) == 0 {
 		return nil
 	}
 	refs := NewRefs()
 	d := &Worker{Common: b.common(w.ID), Employed: b.spells(employed)}
 	for _, e := range w.Employments {
-		if e.Site == b.Place.ID && e.HiredOn <= b.AsOf {
+		if e.Site == b.Place.ID {
 			d.JobTitle, d.OnRoll = e.JobTitle, e.InProgram
 			refs.Of(e)
 		}
@@ -90,7 +90,7 @@ func (b *Builder) limitOn(pieces []stretch, day Date) record.Answer {
 	if p == nil {
 		return record.Unanswered
 	}
-	answer, _ := b.reaches(level, p.doses[b.channels.index(b.Measures.Exposure.Levels[level].Channel)], day)
+	answer, _ := b.reaches(level, p.on[b.channels.index(b.Measures.Exposure.Levels[level].Channel)].dose, day)
 	return answer
 }
 
@@ -105,7 +105,7 @@ func (b *Builder) enrolled(w *WorkerRecords, h *hearing, spells []calendar.Spell
 			e.Tested = &tested
 		}
 		for _, i := range w.Issues {
-			if i.Date <= b.AsOf && (!i.ReturnedOn.Known() || i.ReturnedOn > s.From) && (!s.To.Known() || i.Date < s.To) {
+			if (!i.ReturnedOn.Known() || i.ReturnedOn > s.From) && (!s.To.Known() || i.Date < s.To) {
 				e.Issue = link(refs, i, i.Date)
 				break
 			}
@@ -122,20 +122,21 @@ func (b *Builder) results(w *WorkerRecords, pieces []stretch, refs Refs) []Resul
 	out := []Result{}
 	seen := map[*result]bool{}
 	for _, p := range pieces {
-		src := p.src[channel]
+		k := p.on[channel]
+		src := k.src
 		if src == nil || seen[src] || p.From > b.AsOf {
 			continue
 		}
-		if answer, _ := b.reaches(level, p.doses[channel], max(p.From, 1)); answer != record.Yes {
+		if answer, _ := b.reaches(level, k.dose, max(p.From, 1)); answer != record.Yes {
 			continue
 		}
 		seen[src] = true
 		r := Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: max(src.day, p.From)}
-		if p.doses[channel].exact() {
-			r.Dose = record.Num(p.doses[channel].low)
+		if k.exact() {
+			r.Dose = record.Num(k.low)
 		}
 		for _, n := range w.Notices {
-			if n.About == "exposure" && n.Date <= b.AsOf && n.Date >= src.day && (n.MeasurementID != "" && n.MeasurementID == src.id || n.MeasurementID == "" && n.Date >= r.Since) {
+			if n.About == "exposure" && n.Date >= src.day && (n.MeasurementID != "" && n.MeasurementID == src.id || n.MeasurementID == "" && n.Date >= r.Since) {
 				r.Notice = link(refs, n, n.Date)
 				break
 			}
@@ -164,7 +165,7 @@ func (b *Builder) recordLacks(t *test, h *hearing, jobTitle string, pieces []str
 		out = append(out, "date of the last acoustic or exhaustive calibration of the audiometer")
 	}
 	channel := b.channels.index(b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols].Channel)
-	if p := stretchOn(pieces, t.rec.Date); t.enrolled && (p == nil || p.src[channel] == nil) {
+	if p := stretchOn(pieces, t.rec.Date); t.enrolled && (p == nil || p.on[channel].src == nil) {
 		out = append(out, "most recent noise exposure assessment")
 	}
 	return out
@@ -172,14 +173,13 @@ func (b *Builder) recordLacks(t *test, h *hearing, jobTitle string, pieces []str
 
 // training gives the latest session, with the topics of the time before it, and the latest on protectors.
 func (b *Builder) training(w *WorkerRecords, refs Refs) (*Training, *Link) {
-	sessions := until(w.Trainings, b.AsOf, func(t *record.Training) Date { return t.Date })
-	if len(sessions) == 0 {
+	if len(w.Trainings) == 0 {
 		return nil, nil
 	}
-	last := sessions[len(sessions)-1]
+	last := w.Trainings[len(w.Trainings)-1]
 	out := &Training{Link: *link(refs, last, last.Date), Topics: []string{}, Silent: true}
 	var protectors *Link
-	for _, s := range sessions {
+	for _, s := range w.Trainings {
 		if s.Topics.Has("protectors") {
 			protectors = link(refs, s, s.Date)
 		}
@@ -201,14 +201,14 @@ func (b *Builder) workerSeries(w *WorkerRecords, h *hearing, enrolled []calendar
 	if t := h.baseline; t != nil {
 		series["audiogram.baseline"] = []Link{{t.rec.Date, t.ref}}
 	}
-	for _, t := range until(w.Trainings, b.AsOf, func(t *record.Training) Date { return t.Date }) {
+	for _, t := range w.Trainings {
 		l := *link(refs, t, t.Date)
 		series["training.any"] = append(series["training.any"], l)
 		if t.Topics.Has("protectors") {
 			series["training.protectors"] = append(series["training.protectors"], l)
 		}
 	}
-	for _, i := range until(w.Issues, b.AsOf, func(i *record.ProtectorIssue) Date { return i.Date }) {
+	for _, i := range w.Issues {
 		series["protector.issue"] = append(series["protector.issue"], *link(refs, i, i.Date))
 		for _, s := range enrolled { // one that is still at hand when a stretch begins counts from that day
 			if i.Date < s.From && (!i.ReturnedOn.Known() || i.ReturnedOn > s.From) {
@@ -216,7 +216,7 @@ func (b *Builder) workerSeries(w *WorkerRecords, h *hearing, enrolled []calendar
 			}
 		}
 	}
-	for _, c := range until(w.WearChecks, b.AsOf, func(c *record.WearCheck) Date { return c.Date }) {
+	for _, c := range w.WearChecks {
 		if c.Worn == record.Yes {
 			series["protector.worn"] = append(series["protector.worn"], *link(refs, c, c.Date))
 		}

@@ -212,6 +212,7 @@ func (c *check) report() *finding.Report {
 		}
 		r.Sites = append(r.Sites, site)
 	}
+	r.Remarks = append(r.Remarks, c.unplaced()...)
 	slices.SortFunc(r.Findings, func(x, y finding.Finding) int { return finding.Compare(&x, &y) })
 	return r
 }
@@ -255,4 +256,20 @@ func (c *check) listedWords() string {
 		return "all findings"
 	}
 	return fmt.Sprintf("all findings but those that are met or lifted, and those due in more than %s", days(c.AheadDays))
+}
+
+// unplaced says which records appear in no dossier of the sites judged. Where only some sites are judged it
+// cannot be told.
+func (c *check) unplaced() []string {
+	if len(c.sites) < len(c.Program.Sites) {
+		return nil
+	}
+	return c.registers.Unplaced(func(group string) bool {
+		for _, benches := range c.benches {
+			if slices.ContainsFunc(benches, func(b *bench) bool { return b.usage.HasMembers(group) }) {
+				return true
+			}
+		}
+		return false
+	})
 }

@@ -63,14 +63,16 @@ func Check(ctx context.Context, o Options) (*finding.Report, error) {
 // check is one check under way.
 type check struct {
 	Options
-	store   *dossier.Store
-	ledger  *intake.Ledger
-	sites   []*program.Site
-	benches map[string][]*bench // by site
-	used    []*bundle.Bundle    // in order of id
-	wanted  string              // beginning of the id of the one finding to be explained
-	foundMu sync.Mutex
-	found   []explained
+	store *dossier.Store
+
+	registers *dossier.Registers
+	ledger    *intake.Ledger
+	sites     []*program.Site
+	benches   map[string][]*bench // by site
+	used      []*bundle.Bundle    // in order of id
+	wanted    string              // beginning of the id of the one finding to be explained
+	foundMu   sync.Mutex
+	found     []explained
 }
 
 // bench is one site under one bundle.
@@ -158,6 +160,7 @@ func (c *check) prepare(ctx context.Context) error {
 	if err != nil {
 		return err
 	}
+	c.registers = registers
 	engines := map[string]Engine{}
 	grounds := map[string]*dossier.Ground{}
 	for _, s := range c.sites {

@@ -129,10 +129,10 @@ func (s *settler) once(o *obligation) []outcome {
 	switch {
 	case done != nil && done.Date <= out.due:
 		out.status = finding.Met
-	case done != nil:
-		out.status = finding.Late
 	case o.during != nil && o.during.To.Known() && out.due >= o.during.To:
 		return nil // the obligation has ended with its spell
+	case done != nil:
+		out.status = finding.Late
 	case s.asOf <= out.due:
 		out.status = finding.Due
 	default:

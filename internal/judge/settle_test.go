@@ -83,6 +83,8 @@ func TestOnceEndsWithItsSpell(t *testing.T) {
 	}
 	assert.Empty(t, settleText(t, "2026-06-30", text("2026-02-09"), nil), "the last day, 9 February, is no day of the spell any more")
 	assert.Equal(t, []string{"2026-01-10 gap 2026-02-09 "}, statuses(settleText(t, "2026-06-30", text("2026-02-10"), nil)))
+	after := `{"within": "posting_time", "after": "2026-01-10", "by": "protector.issue", "during": {"from": "2026-01-10", "to": "2026-02-01"}}`
+	assert.Empty(t, settleText(t, "2026-06-30", after, map[string][]string{"protector.issue": {"2026-05-01"}}), "what comes after the spell is not late for it")
 }
 
 func TestOnceByTheFirstOfSeveralSeries(t *testing.T) {

@@ -14,7 +14,7 @@ func Small() fstest.MapFS {
 		"small/parameters/data.yaml": "posting_time: {about: time to post, values: [{from: \"2000-01-01\", value: {days: 30}, cite: N 1, seen: text}]}\ndose: {about: dose, unit: \"%\", values: [{from: \"2000-01-01\", value: 50, cite: N 2, seen: text}]}\nshift: {about: shift, unit: dB, values: [{from: \"2000-01-01\", value: 10, cite: N 3, seen: text}]}\n",
 		"small/choices/data.yaml":    "{}\n",
 		"small/paragraphs/data.yaml": "\"N 1\": {says: post it, checked: [posting]}\n",
-		"small/measures/data.yaml":   "exposure: {channels: {action: {criterion_db: 90, exchange_db: 5, threshold_db: 80, cite: N 2}}, levels: {action: {channel: action, at_least: dose}}, enrols: action, several: highest}\nhearing: {required: [2000], shift: {frequencies: [2000], at_least: shift, retest: posting_time}, professionals: [], physicians: [], licensed: []}\nprotection: {rating: nrr, channel: action}\ntraining: {topics_over: {months: 12}}\n",
+		"small/measures/data.yaml":   "exposure: {channels: {action: {criterion_db: 90, exchange_db: 5, threshold_db: 80, cite: N 2}}, levels: {action: {channel: action, at_least: dose}}, enrols: action, several: highest}\nhearing: {required: [2000], shift: {rule: mean, frequencies: [2000], at_least: shift, retest: posting_time}, professionals: [], physicians: [], licensed: []}\nprotection: {rating: nrr, channel: action}\ntraining: {topics_over: {months: 12}}\n",
 		"small/duty/posting/posting.rego": `# METADATA
 # title: Posting
 # description: The note is posted.
