@@ -143,6 +143,7 @@ func (c *check) choose() error {
 			c.sites = append(c.sites, s)
 		}
 	}
+	problems = append(problems, c.checkChoices()...)
 	return problems.Err()
 }
 
