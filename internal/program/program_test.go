@@ -36,7 +36,9 @@ func load(t *testing.T, text string) (*Program, diag.List) {
 
 func TestLoad(t *testing.T) {
 	p, diags := load(t, good)
-	require.Empty(t, diags)
+	require.NoError(t, diags.Err())
+	require.Len(t, diags, 1)
+	require.Contains(t, diags[0].Problem, "accepted gaps are not applied")
 	require.Equal(t, "Harrow & Slate", p.Title)
 	require.Len(t, p.Digest, 64)
 	require.Equal(t, "accepted.yaml", p.Accepted)
@@ -61,7 +63,7 @@ func TestLoadFolder(t *testing.T) {
 	require.Contains(t, diags.Error(), "there is no such program file")
 	require.NoError(t, os.WriteFile(filepath.Join(dir, FileName), []byte(good), 0o600))
 	p, diags := Load(dir)
-	require.Empty(t, diags)
+	require.NoError(t, diags.Err())
 	require.Equal(t, dir, p.Dir)
 	require.Equal(t, filepath.Join(dir, "records/audiograms.csv"), p.Sources[0].Path)
 	_, diags = Load(filepath.Join(dir, "nothing"))

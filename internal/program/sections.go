@@ -32,6 +32,7 @@ func (d *decoder) program(root *yaml.Node, p *Program) {
 		if name := d.text(n, "accepted"); name != "" {
 			if clean, ok := d.inside(n, name); ok {
 				p.Accepted = filepath.Join(p.Dir, filepath.FromSlash(clean))
+				d.diags.Warnf(d.at(n), "Read the gaps as they stand", "accepted gaps are not applied by this version")
 			}
 		}
 	}
