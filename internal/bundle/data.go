@@ -77,8 +77,11 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 			problems.Errorf(at, "Correct the channel", "the channel %s %v", name, err)
 		}
 	}
-	if err := m.Hearing.Shift.Check(); err != nil {
-		problems.Errorf(at, "Correct hearing.shift", "%v", err)
+	for _, p := range checkSchemes(&m.Hearing) {
+		problems.Errorf(at, "Correct hearing in the measures", "%s", p)
+	}
+	for _, s := range m.Hearing.Others {
+		needParameter(s.Parameter(), "hearing.others."+s.Name)
 	}
 	needParameter(m.Protection.RealWorld, "protection")
 	needParameter(m.Protection.Bands, "protection")

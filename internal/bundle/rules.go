@@ -55,6 +55,7 @@ func (b *Bundle) readRules(all files, dir string, problems *diag.List) {
 		Levels:   slices.Sorted(maps.Keys(b.Measures.Exposure.Levels)),
 		Channels: slices.Sorted(maps.Keys(b.Measures.Exposure.Channels)),
 		Choices:  slices.Sorted(maps.Keys(b.Choices)),
+		Schemes:  b.schemeNames(),
 	}
 	schemas := ast.NewSchemaSet()
 	for _, kind := range dossier.Kinds {

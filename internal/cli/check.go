@@ -31,7 +31,7 @@ func (r *run) checkCommand() *cli.Command {
 			&cli.StringFlag{Name: "format", Value: report.Names()[0], Usage: "write the report as `NAME`: " + strings.Join(report.Names(), " or ")},
 			outFlag(),
 			&cli.StringFlag{Name: "ahead", Value: "90d", Usage: "list what is due within `DAYS`"},
-			&cli.BoolFlag{Name: "all", Usage: "list what is met, lifted or due later, too", DisableDefaultText: true},
+			&cli.BoolFlag{Name: "all", Usage: "list what is met, lifted or due later, and each observation", DisableDefaultText: true},
 			&cli.StringFlag{Name: "fail-on", Value: "gap,unproven", Usage: "end with exit code 1 if there is any of these `STATUSES`, or a rejected row (reject), or never (none)"},
 			healthFlag(), widthFlag(), parallelFlag(),
 		},

@@ -32,7 +32,7 @@ type Ground struct {
 // NewGround works out the exposure of every group.
 func NewGround(r *Registers, m Measures, law Law, asOf Date) *Ground {
 	g := &Ground{
-		Registers: r, Measures: m, Law: law, AsOf: asOf, channels: newChannels(m.Exposure.Channels),
+		Registers: r, Measures: m, Law: law, AsOf: asOf, channels: newChannels(m.Exposure, r, law, asOf),
 		levels: slices.Sorted(maps.Keys(m.Exposure.Levels)), histories: map[string]*history{},
 	}
 	ids := map[string]bool{}
@@ -55,7 +55,7 @@ func NewGround(r *Registers, m Measures, law Law, asOf Date) *Ground {
 		if group != nil {
 			area = group.Area
 		}
-		results, events := g.channels.resultsOf(r, group, id, asOf), r.eventsOf(id, area, asOf)
+		results, events := g.channels.resultsOf(group, id), r.eventsOf(id, area, asOf)
 		if group != nil || len(results)+len(events) > 0 {
 			g.histories[id] = g.channels.historyOf(results, events)
 		}
@@ -88,9 +88,9 @@ func (b *Builder) spells(list []calendar.Spell) []Spell {
 // verdict is yes, no, or not known.
 type verdict = record.Answer
 
-// reaches says whether a dose reaches an exposure level on a day. Where the level's parameter has no value
-// on that day, it is not known.
-func (b *Builder) reaches(level string, d dose, day Date) (verdict, string) {
+// reaches says whether an exposure, percent or dBA, reaches an exposure level on a day. Where the level's
+// parameter has no value on that day, it is not known.
+func (b *Builder) reaches(level string, d bounds, day Date) (verdict, string) {
 	t := b.Measures.Exposure.Levels[level]
 	name := t.AtLeast + t.Above
 	limit, ok := b.Law.Number(name, day)
@@ -112,7 +112,7 @@ func (b *Builder) reaches(level string, d dose, day Date) (verdict, string) {
 	return record.Unanswered, ""
 }
 
-// tolerance absorbs the rounding of binary arithmetic in doses worked out from tasks, percent.
+// tolerance absorbs the rounding of binary arithmetic in doses and levels that were worked out, percent or dBA.
 const tolerance = 1e-9
 
 // levelSpells divides stretches by exposure level: where the level is reached, and where that is not known.
@@ -127,7 +127,7 @@ func (b *Builder) levelSpells(pieces []stretch) (map[string][]Spell, map[string]
 			if p.From > b.AsOf {
 				continue
 			}
-			answer, why := b.reaches(level, p.on[channel].dose, max(p.From, 1))
+			answer, why := b.reaches(level, p.on[channel].bounds, max(p.From, 1))
 			switch answer {
 			case record.Yes:
 				yes = append(yes, p.Spell)
@@ -137,7 +137,8 @@ func (b *Builder) levelSpells(pieces []stretch) (map[string][]Spell, map[string]
 					reason = why
 				}
 				if reason == "" {
-					reason = "the dose on this channel is known only within bounds"
+					limit, _ := b.Law.Number(name, max(p.From, 1))
+					reason = b.channels.openReason(channel, &p.on[channel], limit, b.Measures.Exposure.Levels[level].AtLeast != "")
 				}
 				open = appendOpen(open, Open{From: p.From, To: p.To, Reason: reason})
 			}
@@ -178,27 +179,45 @@ func splitAt(pieces []stretch, days []Date) []stretch {
 // exposures writes stretches as the dossier shows them.
 func (b *Builder) exposures(pieces []stretch, refs Refs) []Exposure {
 	out := []Exposure{}
-	enrolling := b.channels.index(b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols].Channel)
 	for _, p := range pieces {
 		if p.From > b.AsOf {
 			continue
 		}
-		k := p.on[enrolling]
-		e := Exposure{From: p.From, To: p.To, Group: p.group, Own: k.own, Channels: map[string]Level{}, Note: k.note}
+		k := p.on[b.channels.enrols]
+		e := Exposure{From: p.From, To: p.To, Group: p.group, Own: k.own, Channels: make(map[string]Level, len(b.channels.names)), Note: k.note}
 		if k.reason != "" {
 			e.Note = k.reason
 		}
 		for i, name := range b.channels.names {
-			sum := ""
-			if src := p.on[i].src; src != nil {
-				sum = src.sums[i]
-			}
-			e.Channels[name] = b.channels.level(i, p.on[i].dose, sum)
+			e.Channels[name] = b.channels.level(i, &p.on[i])
 		}
 		if k.src != nil {
 			e.Ref, e.MeasuredOn = refs.Of(k.src.rec), k.src.day
+			for _, rec := range k.src.more {
+				e.Others = append(e.Others, refs.Of(rec))
+			}
 		}
 		out = append(out, e)
+	}
+	return out
+}
+
+// workings tell stretch by stretch how the exposure on the enrolling channel came about: the days, what decides,
+// and the sums.
+func (b *Builder) workings(list []Exposure) []string {
+	out := []string{}
+	name := b.channels.names[b.channels.enrols]
+	for _, e := range list {
+		days := "from " + e.From.String() + " on"
+		if e.To.Known() && e.To <= b.AsOf {
+			days = "from " + e.From.String() + " until " + e.To.String()
+		}
+		for _, text := range []string{e.Ref, e.Note} {
+			if text != "" {
+				days += "; " + text
+			}
+		}
+		out = append(append(out, days), e.Channels[name].Working...)
 	}
 	return out
 }

@@ -3,7 +3,6 @@ package dossier
 import (
 	"fmt"
 	"slices"
-	"strconv"
 	"strings"
 
 	"hearduty/internal/calendar"
@@ -12,7 +11,7 @@ import (
 
 // known is what is known of the exposure on one channel.
 type known struct {
-	dose
+	bounds
 	src    *result // the result that decides
 	own    bool    // whether it is the worker's own
 	note   string  // how it was taken
@@ -34,6 +33,7 @@ type event struct {
 
 // history is the exposure of a group over time.
 type history struct {
+	c       *channels
 	results []*result // oldest first
 	events  []event   // oldest first
 	steps   []step    // oldest first; the first begins before all days
@@ -76,13 +76,14 @@ func (r *Registers) controlsOf(id, area string, asOf Date) []*record.Control {
 
 // resultsOf gathers the determinations of a group's exposure: its full-shift measurements and, where tasks
 // describe its day, the day worked out from them.
-func (c channels) resultsOf(r *Registers, group *record.Group, id string, asOf Date) []*result {
+func (c *channels) resultsOf(group *record.Group, id string) []*result {
 	var out []*result
+	r, asOf, at := c.registers, c.asOf, workplaceOf(id, group)
 	rows := r.measurementsOf(group, id)
 	for len(rows) > 0 {
 		n := sameMeasurement(rows)
 		if rows[0].Type != "task" && rows[0].Date <= asOf {
-			out = append(out, c.ofMeasurement(rows[:n:n]))
+			out = append(out, c.ofMeasurement(rows[:n:n], at))
 		}
 		rows = rows[n:]
 	}
@@ -93,7 +94,7 @@ func (c channels) resultsOf(r *Registers, group *record.Group, id string, asOf D
 			n++
 		}
 		if tasks[0].Date <= asOf {
-			out = append(out, c.ofTasks(tasks[:n], func(sample string) (float64, bool) { return r.levelOf(sample, asOf) }))
+			out = append(out, c.ofTasks(tasks[:n], at))
 		}
 		tasks = tasks[n:]
 	}
@@ -101,26 +102,16 @@ func (c channels) resultsOf(r *Registers, group *record.Group, id string, asOf D
 	return out
 }
 
-// levelOf gives the level that a task's sample names: a number in dBA, or the id of a measurement.
-func (r *Registers) levelOf(sample string, asOf Date) (float64, bool) {
-	for _, m := range r.Measurements {
-		if m.MeasurementID == sample && m.LAeqDBA.Known && m.Date <= asOf {
-			return m.LAeqDBA.Value, true
-		}
-	}
-	level, err := strconv.ParseFloat(strings.TrimSpace(sample), 64)
-	return level, err == nil && level >= 0 && level <= 150
-}
-
 // historyOf works out a group's exposure over time:
-//   - on a day, the highest of the results since the latest change counts;
+//   - on a day, the highest of the results since the latest change counts, or on a channel that is sampled, the
+//     samples since then together;
 //   - after a change that may have raised exposure and before the next result, the exposure is at least
 //     what it was;
 //   - after another change it stays what it was until measured again;
 //   - before the first result that result is taken backwards, unless a change that may have raised
 //     exposure lies between.
-func (c channels) historyOf(results []*result, events []event) *history {
-	h := &history{results: results, events: events}
+func (c *channels) historyOf(results []*result, events []event) *history {
+	h := &history{c: c, results: results, events: events}
 	days := []Date{0}
 	for _, r := range results {
 		days = append(days, r.day)
@@ -130,13 +121,13 @@ func (c channels) historyOf(results []*result, events []event) *history {
 	}
 	slices.Sort(days)
 	for _, day := range slices.Compact(days) {
-		h.steps = append(h.steps, h.step(c, day))
+		h.steps = append(h.steps, h.step(day))
 	}
 	return h
 }
 
-func (h *history) step(c channels, day Date) step {
-	s := step{from: day, on: make([]known, len(c.names))}
+func (h *history) step(day Date) step {
+	s := step{from: day, on: make([]known, len(h.c.names))}
 	for i := range s.on {
 		s.on[i] = h.knownOn(i, day)
 	}
@@ -154,73 +145,122 @@ func (h *history) lastEvent(day Date) event {
 	return last
 }
 
-// knownOn gives what is known of the dose on a channel on a day.
+// knownOn gives what is known of the exposure on a channel on a day.
 func (h *history) knownOn(channel int, day Date) known {
 	last := h.lastEvent(day)
-	if d, src := highest(h.results, channel, last.day, day); src != nil {
-		return known{dose: d, src: src}
+	if d, src := h.c.highest(h.results, channel, last.day, day); src != nil {
+		return known{bounds: d, src: src}
 	}
+	short := h.c.shortOf(h.results, channel, last.day, day)
 	if last.day.Known() {
 		if k := h.knownOn(channel, last.day-1); k.src != nil && k.src.day < last.day {
 			if last.raises {
-				k.high, k.note = unknownDose.high, "at least the value before the "+last.what
+				k.high, k.note = unknown.high, "at least the value before the "+last.what
 				k.reason = "not measured since the " + last.what + ", which may have raised exposure"
+				if short != "" {
+					k.reason = "since the " + last.what + ", which may have raised exposure: " + short
+				}
 				return k
 			}
 			k.note = "value before the " + last.what + "; not measured since"
+			if short != "" {
+				k.note = "value before the " + last.what + "; since then: " + short
+			}
 			return k
 		}
 	}
 	for _, r := range h.results {
-		if r.day <= day || !r.usable(channel) {
+		if r.day <= day {
+			continue
+		}
+		d, src := h.c.highest(h.results, channel, h.spanOf(channel, r.day), r.day)
+		if src == nil {
 			continue
 		}
 		for _, e := range h.events {
 			if e.day > day && e.day <= r.day && e.raises {
-				return known{dose: unknownDose, reason: fmt.Sprintf("the first measurement is of %s, and the %s, which may have raised exposure, lies between", r.day, e.what)}
+				return known{bounds: unknown, reason: fmt.Sprintf("the first measurement is of %s, and the %s, which may have raised exposure, lies between", r.day, e.what)}
 			}
 		}
-		d, src := highest(h.results, channel, r.day, r.day)
-		return known{dose: d, src: src, note: "taken backwards from the first measurement, of " + r.day.String()}
+		return known{bounds: d, src: src, note: "taken backwards from the first measurement, of " + r.day.String()}
 	}
-	return known{dose: unknownDose, reason: whyNone(h.results)}
+	return known{bounds: unknown, reason: h.c.whyNone(h.results, channel, short)}
 }
 
-// highest gives the highest dose among the usable results from one day to another.
-func highest(results []*result, channel int, from, to Date) (d dose, src *result) {
-	for _, r := range results {
-		if r.day < from || r.day > to || !r.usable(channel) {
-			continue
+// spanOf gives the first day whose results count together with those of a day, where that day is the first to
+// tell anything: the same day, or on a channel that is sampled, the latest change.
+func (h *history) spanOf(channel int, day Date) Date {
+	if h.c.sampled(channel) {
+		return h.lastEvent(day).day
+	}
+	return day
+}
+
+// highest gives the highest exposure among the usable results from one day to another; on a channel that is
+// sampled the samples together are one of them.
+func (c *channels) highest(results []*result, channel int, from, to Date) (d bounds, src *result) {
+	take := func(r *result) {
+		if !r.usable(channel) {
+			return
 		}
 		if src == nil {
-			d, src = r.doses[channel], r
-			continue
+			d, src = r.on[channel].bounds, r
+			return
 		}
-		if r.doses[channel].low > d.low {
+		if r.on[channel].low > d.low {
 			src = r
 		}
-		d = higher(d, r.doses[channel])
+		d = higher(d, r.on[channel].bounds)
+	}
+	for _, r := range results {
+		if r.day >= from && r.day <= to {
+			take(r)
+		}
+	}
+	if c.sampled(channel) {
+		if p := c.pooled(results, channel, from, to); p != nil {
+			take(p)
+		}
 	}
 	return d, src
 }
 
-// whyNone says why none of the results tells the exposure.
-func whyNone(results []*result) string {
+// whyNone says why none of the results tells the exposure on a channel. Short says what is missing of its
+// samples.
+func (c *channels) whyNone(results []*result, channel int, short string) string {
 	if len(results) == 0 {
 		return "there is no full-shift measurement"
 	}
 	var notes []string
 	for _, r := range results {
-		for _, n := range r.notes {
-			if !slices.Contains(notes, n) {
-				notes = append(notes, n)
+		notes = append(notes, r.on[channel].notes...)
+	}
+	notes = distinct(append(notes, short))
+	switch {
+	case len(notes) > 0:
+		return strings.Join(notes, "; ")
+	case c.isLevel(channel):
+		return "no measurement gives the level"
+	}
+	return "no measurement gives the dose"
+}
+
+// first gives the first result that tells the exposure on a channel, or the first samples that do so together.
+func (h *history) first(channel int) *result {
+	if !h.c.sampled(channel) {
+		for _, r := range h.results {
+			if r.usable(channel) {
+				return r
 			}
 		}
+		return nil
 	}
-	if len(notes) == 0 {
-		return "no measurement gives the dose"
+	for i := range h.steps {
+		if src := h.steps[i].on[channel].src; src != nil {
+			return src
+		}
 	}
-	return strings.Join(notes, "; ")
+	return nil
 }
 
 // on gives the step in force on a day.

@@ -2,6 +2,7 @@ package dossier_test
 
 import (
 	"maps"
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -230,7 +231,7 @@ func TestTasks(t *testing.T) {
 			assert.Equal(t, c.action, d.Now.Channels["action"].DosePct.String())
 			assert.Equal(t, c.limit, d.Now.Channels["limit"].DosePct.String())
 			assert.InDelta(t, mustFloat(t, c.three), d.Now.Channels["three"].DosePct.Value, 0.01)
-			assert.Contains(t, d.Now.Channels["action"].Working, "D = 100 · Σ C/T")
+			assert.Contains(t, strings.Join(d.Now.Channels["action"].Working, "\n"), "D = 100 · Σ C/T")
 		})
 	}
 }

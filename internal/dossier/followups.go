@@ -23,9 +23,10 @@ func (h *hearing) shifts(c *course, enrolledNow bool, had func(Date) bool) []Shi
 			HadProtector: had(t.rec.Date), Fitting: h.fitting(t), Retraining: h.retraining(t),
 			Referral: h.followLink(t, "referral"), CurrentEnrolled: enrolledNow,
 		}
-		for i := range cmp.verdict {
-			if cmp.verdict[i] == audiometry.Yes && cmp.change[i].AtLeast {
-				shift.AtLeast = true
+		shift.AtLeast = cmp.atLeast()
+		for _, first := range cmp.first {
+			if first != nil {
+				shift.Confirms = &Link{first.rec.Date, first.ref}
 			}
 		}
 		shift.NotWorkRelated, shift.OtherOpinion = h.opinion(t, "not_work_related", h.b.Measures.Hearing.Physicians)
@@ -113,6 +114,9 @@ func (h *hearing) recordables(c *course) []Recorded {
 		now := cmp
 		if base != cmp.base {
 			now = h.compare(t, base)
+			if m.Shift.Confirm {
+				h.confirm(now, func(*test) [2]*test { return base })
+			}
 		}
 		level, inForce := h.b.Law.Number(m.Recordable.AtLeast, s.rec.Date)
 		var hit [2]bool
@@ -124,7 +128,7 @@ func (h *hearing) recordables(c *course) []Recorded {
 		}
 		r := Recorded{
 			Link: Link{s.rec.Date, s.ref}, ID: s.rec.AudiogramID, Ears: earsText(hit[0], hit[1]), KnownOn: h.determined(t),
-			Entry: h.followLink(t, "log_entry"), Removal: h.followLink(t, "log_removal"), Hearing: h.figures(now),
+			Entry: h.followLink(t, "log_entry"), Removal: h.followLink(t, "log_removal"), Hearing: h.figures(now, h.levelWorking(s, hit)...),
 		}
 		for i := range hit {
 			if hit[i] {
@@ -170,7 +174,7 @@ func (h *hearing) revisions() []Revision {
 			continue
 		}
 		r.Audiogram = to.ref
-		cmp := h.compare(to.original(), h.baselinesFor(to.original()))
+		cmp := h.compare(to.original(), h.revised(to.original(), false))
 		r.Hearing = h.figures(cmp)
 		for i, ear := range []string{"left", "right"} {
 			if !slices.Contains(r.Ears, ear) {

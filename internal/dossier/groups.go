@@ -61,7 +61,7 @@ func (b *Builder) group(id string, u *Usage) *File {
 		refs.Of(reg)
 	}
 	file := &File{Kind: KindGroup, ID: d.ID, Site: b.Place.ID, Input: d, Series: map[string][]Link{}, Refs: refs}
-	d.Measurements = b.measurements(b.measurementsOf(u, id), refs)
+	d.Measurements = b.measurements(id, b.measurementsOf(u, id), refs)
 	for _, m := range d.Measurements {
 		file.Series["measurement.any"] = append(file.Series["measurement.any"], m.Link)
 	}
@@ -76,12 +76,10 @@ func (b *Builder) group(id string, u *Usage) *File {
 	if n := len(d.Exposures); n > 0 {
 		d.Now = &d.Exposures[n-1]
 	}
-	enrolling := b.channels.index(b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols].Channel)
-	for _, r := range h.results {
-		if r.usable(enrolling) {
-			d.FirstSurvey = link(refs, r.rec, r.day)
-			break
-		}
+	enrolling := b.channels.enrols
+	d.Statistics = b.channels.statistics(h, d.Workers)
+	if r := h.first(enrolling); r != nil {
+		d.FirstSurvey = link(refs, r.rec, r.day)
 	}
 	if len(u.loose[id]) > 0 && d.FirstSurvey == nil {
 		d.FirstSurvey = &d.Measurements[0].Link
@@ -112,10 +110,10 @@ func document(doc *record.Document, refs Refs) Document {
 }
 
 // measurements writes the measurements of a group, the dose channels of each taken together.
-func (b *Builder) measurements(rows []*record.Measurement, refs Refs) []Measurement {
+func (b *Builder) measurements(id string, rows []*record.Measurement, refs Refs) []Measurement {
 	out := []Measurement{}
 	level := b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols]
-	i := b.channels.index(level.Channel)
+	i, at := b.channels.index(level.Channel), workplaceOf(id, b.Registers.Groups[id])
 	for len(rows) > 0 {
 		n := sameMeasurement(rows)
 		first := rows[0]
@@ -124,9 +122,9 @@ func (b *Builder) measurements(rows []*record.Measurement, refs Refs) []Measurem
 			Instrument: first.InstrumentID, ObserversInvited: first.ObserversInvited,
 		}
 		for _, row := range rows[:n] {
-			b.takeRow(&m, row, b.channels.scales[i])
+			b.takeRow(&m, row, i)
 		}
-		m.Reaches = b.reachesEnrolling(i, rows[:n])
+		m.Reaches, m.Doubts = b.reachesEnrolling(i, rows[:n], at), doubts(rows[:n])
 		out = append(out, m)
 		rows = rows[n:]
 	}
@@ -134,8 +132,12 @@ func (b *Builder) measurements(rows []*record.Measurement, refs Refs) []Measurem
 }
 
 // takeRow takes one dose channel into a measurement. Of several doses with the law's criterion level and
-// exchange rate the one with the lowest threshold is shown.
-func (b *Builder) takeRow(m *Measurement, row *record.Measurement, asked acoustics.Scale) {
+// exchange rate, or for a level, taken by equal energy, the one with the lowest threshold is shown.
+func (b *Builder) takeRow(m *Measurement, row *record.Measurement, channel int) {
+	asked := b.channels.scales[channel]
+	if b.channels.isLevel(channel) {
+		asked = acoustics.Scale{Criterion: row.CriterionDB.Value, Exchange: equalEnergy}
+	}
 	dosed := row.DosePct.Known || row.TWADBA.Known
 	if dosed && row.CriterionDB == record.Num(asked.Criterion) && row.ExchangeDB == record.Num(asked.Exchange) {
 		if !m.Dosed || row.ThresholdDB.Known && (!m.Threshold.Known || row.ThresholdDB.Value < m.Threshold.Value) {
@@ -155,11 +157,11 @@ func (b *Builder) takeRow(m *Measurement, row *record.Measurement, asked acousti
 }
 
 // reachesEnrolling says whether one measurement reaches the level that enrols.
-func (b *Builder) reachesEnrolling(channel int, rows []*record.Measurement) record.Answer {
+func (b *Builder) reachesEnrolling(channel int, rows []*record.Measurement, at workplace) record.Answer {
 	if rows[0].Type == "task" {
 		return record.Unanswered
 	}
-	answer, _ := b.reaches(b.Measures.Exposure.Enrols, b.channels.ofMeasurement(rows).doses[channel], rows[0].Date)
+	answer, _ := b.reaches(b.Measures.Exposure.Enrols, b.channels.ofMeasurement(rows, at).on[channel].bounds, rows[0].Date)
 	return answer
 }
 
@@ -261,11 +263,11 @@ func (b *Builder) markCurrent(list []Measurement, h *history) {
 			}
 		}
 	}
-	channel := b.channels.index(b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols].Channel)
+	channel := b.channels.enrols
 	for i := range list {
 		list[i].Current = list[i].Date >= since
 		list[i].Repeated = slices.ContainsFunc(h.results, func(r *result) bool {
-			return r.day > list[i].Date && r.doses[channel].exact()
+			return r.day > list[i].Date && r.settles(channel)
 		})
 	}
 }

@@ -45,6 +45,7 @@ type asked struct {
 	site     string           // s1 where empty
 	choices  map[string]any   // over the defaults
 	measures dossier.Measures // the bundle's where empty
+	law      dossier.Law      // the bundle where nil
 }
 
 // judge makes all dossiers of site s1 from records.
@@ -71,9 +72,12 @@ func (a asked) ofStore(t require.TestingT, store *dossier.Store) *judged {
 	if a.measures.Exposure.Channels == nil {
 		a.measures = osha().Measures
 	}
+	if a.law == nil {
+		a.law = osha()
+	}
 	registers, err := store.Registers()
 	require.NoError(t, err)
-	b := dossier.NewGround(registers, a.measures, osha(), day(a.asOf)).Builder(dossier.Place{ID: a.site}, osha().ChoicesOf(a.choices))
+	b := dossier.NewGround(registers, a.measures, a.law, day(a.asOf)).Builder(dossier.Place{ID: a.site}, osha().ChoicesOf(a.choices))
 	out := &judged{t: t}
 	usage := dossier.NewUsage()
 	for i := range store.Shards() {

@@ -97,13 +97,17 @@ type Threshold struct {
 
 // HearingMeasures say how hearing tests are compared.
 type HearingMeasures struct {
-	Required      []int          `json:"required" doc:"frequencies that each test of each ear must hold, Hz"`
-	Shift         ShiftMeasure   `json:"shift" doc:"the threshold shift of the law"`
-	Recordable    *RecordMeasure `json:"recordable,omitempty" doc:"the hearing level of the recording rule"`
-	AgeCorrection *AgeMeasure    `json:"age_correction,omitempty" doc:"the age correction that the law allows"`
-	Professionals []string       `json:"professionals" doc:"professions that may review tests and revise baselines"`
-	Physicians    []string       `json:"physicians" doc:"professions whose finding lifts the follow-up of a shift"`
-	Licensed      []string       `json:"licensed" doc:"professions whose finding lifts the entry in the log"`
+	Required      []int               `json:"required" doc:"frequencies that each test of each ear must hold, Hz"`
+	Shift         ShiftMeasure        `json:"shift" doc:"the threshold shift of the law"`
+	Others        []audiometry.Scheme `json:"others,omitempty" doc:"further schemes by which each test is judged, such as an early warning; each has a name of its own"`
+	Recordable    *RecordMeasure      `json:"recordable,omitempty" doc:"the hearing level of the recording rule"`
+	AgeCorrection *AgeMeasure         `json:"age_correction,omitempty" doc:"the age correction that the law allows"`
+	Professionals []string            `json:"professionals" doc:"professions that may review tests and revise baselines"`
+	Physicians    []string            `json:"physicians" doc:"professions whose finding lifts the follow-up of a shift"`
+	Licensed      []string            `json:"licensed" doc:"professions whose finding lifts the entry in the log"`
+
+	// Sums says whether audiometric figures come with their sums, which take time to write. It is set where they are shown.
+	Sums bool `json:"-"`
 }
 
 // ShiftMeasure is the threshold shift of the law, and the time within which a retest may stand in for the

@@ -16,6 +16,7 @@ type Group struct {
 	FirstSurvey    *Link              `json:"first_survey" doc:"the first result that gives the group's exposure"`
 	Exposures      []Exposure         `json:"exposures" doc:"noise exposure, stretch by stretch"`
 	Now            *Exposure          `json:"now" doc:"exposure on the as-of day"`
+	Statistics     *Statistics        `json:"statistics" doc:"spread of the results that count now, for information; null if there are none"`
 	Exposed        map[string][]Spell `json:"exposed" doc:"stretches at or above each exposure level of the bundle"`
 	Unknown        map[string][]Open  `json:"exposure_unknown" doc:"stretches in which it is not known whether the level is reached, with the reason"`
 	Changes        []Change           `json:"changes" doc:"changes of production, process, equipment or controls, oldest first"`
@@ -38,6 +39,7 @@ type Measurement struct {
 	PeakWeighting    string        `json:"peak_weighting" doc:"C, or Z for unweighted"`
 	ObserversInvited record.Answer `json:"observers_invited" doc:"whether workers or their representatives could observe"`
 	Reaches          record.Answer `json:"reaches_enrolling" doc:"whether it reaches the level that enrols"`
+	Doubts           []string      `json:"doubts" doc:"figures on it that cannot all be right"`
 	Current          bool          `json:"current" doc:"whether it describes the group as it is: the group was not measured again since a later change or control"`
 	Repeated         bool          `json:"repeated" doc:"whether a later measurement gives the dose on the enrolling channel exactly"`
 }

@@ -1,11 +1,6 @@
 package dossier
 
-import (
-	"fmt"
-
-	"hearduty/internal/acoustics"
-	"hearduty/internal/record"
-)
+import "hearduty/internal/record"
 
 // atHand gives the protectors that a worker has on a day, in the order in which they were handed over.
 func atHand(issues []*record.ProtectorIssue, day Date) []*record.ProtectorIssue {
@@ -28,15 +23,17 @@ func (b *Builder) protection(w *WorkerRecords, now *stretch, h *hearing, refs Re
 	issue := held[len(held)-1]
 	p := &Protection{
 		Link: *link(refs, issue, issue.Date), Protector: issue.ProtectorID, Count: len(held),
-		ChoicesOffered: issue.ChoicesOffered, Required: issue.Required, Missing: []string{},
+		ChoicesOffered: issue.ChoicesOffered, Required: issue.Required, Rating: b.Measures.Protection.Rating, Missing: []string{},
 	}
-	b.fit(p, w, issue, h, refs)
-	b.attenuate(p, now)
+	test := b.fit(p, w, issue, h, refs)
+	noise := b.noiseOf(now)
+	b.attenuate(p, noise)
+	p.Information = b.information(p, noise, held, test)
 	return p
 }
 
-// fit finds the initial fitting and the latest fit test of the model.
-func (b *Builder) fit(p *Protection, w *WorkerRecords, issue *record.ProtectorIssue, h *hearing, refs Refs) {
+// fit finds the initial fitting and the latest fit test of the model since it was handed over.
+func (b *Builder) fit(p *Protection, w *WorkerRecords, issue *record.ProtectorIssue, h *hearing, refs Refs) (latest *record.FitTest) {
 	if issue.FittedBy != "" {
 		p.Fitted = &p.Link
 	}
@@ -49,7 +46,7 @@ func (b *Builder) fit(p *Protection, w *WorkerRecords, issue *record.ProtectorIs
 		if t.ProtectorID != issue.ProtectorID || t.Date < issue.Date {
 			continue
 		}
-		p.PAR, p.FitFailed = t.PARDB, nil
+		latest, p.PAR, p.FitFailed = t, t.PARDB, nil
 		switch t.Passed {
 		case record.Yes:
 			if p.Fitted == nil {
@@ -59,60 +56,7 @@ func (b *Builder) fit(p *Protection, w *WorkerRecords, issue *record.ProtectorIs
 			p.FitFailed = link(refs, t, t.Date)
 		}
 	}
-}
-
-// attenuate estimates the level under the protector from its noise reduction rating: the C-weighted average
-// less the rating, or the A-weighted average less the rating reduced by 7 dB (29 CFR 1910.95 App. B).
-func (b *Builder) attenuate(p *Protection, now *stretch) {
-	model := b.Registers.Protectors[p.Protector]
-	if model == nil || !model.NRR.Known {
-		p.Missing = append(p.Missing, "noise reduction rating of the protector "+p.Protector)
-	}
-	exposure, weighting, ok := b.unprotected(now)
-	if !ok {
-		p.Missing = append(p.Missing, "exposure without the protector")
-	} else {
-		p.Exposure = record.Num(exposure)
-	}
-	if len(p.Missing) > 0 {
-		return
-	}
-	nrr := model.NRR.Value
-	under, halved := acoustics.UnderNRR(exposure, weighting, nrr), acoustics.UnderHalvedNRR(exposure, weighting, nrr)
-	p.Under, p.Halved = record.Num(acoustics.RoundTenth(under.Level)), record.Num(acoustics.RoundTenth(halved.Level))
-	if weighting == acoustics.C {
-		p.Method = "C-weighted average less the noise reduction rating"
-		p.Working = fmt.Sprintf("%s dBC − %s dB = %s dBA", number(exposure), number(nrr), number(p.Under.Value))
-		return
-	}
-	p.Method = "A-weighted average less the noise reduction rating reduced by 7 dB"
-	p.Working = fmt.Sprintf("%s dBA − (%s − 7) dB = %s dBA", number(exposure), number(nrr), number(p.Under.Value))
-	if under.Clamped {
-		p.Working = fmt.Sprintf("%s dBA; a rating of %s dB less 7 dB credits nothing", number(exposure), number(nrr))
-	}
-}
-
-// unprotected gives the 8-hour average without protector: C-weighted where it was measured so, else the
-// A-weighted average of the dose to 0.1 dB, as tables of the law print it. Where the dose is known only as
-// at most a value, that value is taken.
-func (b *Builder) unprotected(now *stretch) (float64, acoustics.Weighting, bool) {
-	if now == nil {
-		return 0, "", false
-	}
-	i := b.channels.index(b.Measures.Protection.Channel)
-	k := now.on[i]
-	if k.src != nil && k.exact() {
-		for _, m := range k.src.rows {
-			if m.TWADBC.Known {
-				return m.TWADBC.Value, acoustics.C, true
-			}
-		}
-	}
-	twa, ok := b.channels.scales[i].TWAReported(k.high)
-	if !ok {
-		return 0, "", false
-	}
-	return twa, acoustics.A, true
+	return latest
 }
 
 // wear gives the latest check of whether the worker wore protectors: one of the worker's own, or one of the

@@ -38,4 +38,6 @@ type File struct {
 	Series map[string][]Link // none after the as-of day
 	Uses   []Tally           // days of use, oldest first: the series test.use with its counts
 	Refs   Refs
+
+	Observations []Observation // what somebody may want to look at; no verdicts
 }

@@ -1,152 +1,11 @@
 package dossier
 
 import (
-	"fmt"
 	"slices"
 
 	"hearduty/internal/audiometry"
 	"hearduty/internal/record"
 )
-
-// comparison is a test held against the baselines of both ears.
-type comparison struct {
-	test      *test    // the test, or the first test where a retest stands in
-	base      [2]*test // baseline of the left and right ear
-	change    [2]audiometry.Change
-	corrected [2]audiometry.Change
-	verdict   [2]audiometry.Verdict
-	applied   bool     // whether age correction decided
-	missing   []string // thresholds that the comparison lacks
-}
-
-func (c *comparison) shifted() bool {
-	return c.verdict[0] == audiometry.Yes || c.verdict[1] == audiometry.Yes
-}
-
-func (c *comparison) ears() string {
-	return earsText(c.verdict[0] == audiometry.Yes, c.verdict[1] == audiometry.Yes)
-}
-
-// compare holds a test against the given baselines, with and without age correction. The bundle's choice
-// says which of the two decides.
-func (h *hearing) compare(t *test, base [2]*test) *comparison {
-	m := h.b.Measures.Hearing
-	c := &comparison{test: t, base: base, missing: []string{}}
-	s := t.standing()
-	limit, inForce := h.b.Law.Number(m.Shift.AtLeast, s.rec.Date)
-	for i, side := range sides(s.rec) {
-		baseEar := sides(base[i].rec)[i].ear
-		c.change[i] = audiometry.Shift(baseEar, side.ear, m.Shift.Frequencies, nil)
-		c.corrected[i] = c.change[i]
-		aging, _ := h.aging(base[i].rec.Date, s.rec.Date)
-		if aging != nil {
-			c.corrected[i] = audiometry.Shift(baseEar, side.ear, m.Shift.Frequencies, aging)
-		}
-		decides := c.change[i]
-		if h.ageCorrection() && aging != nil {
-			decides, c.applied = c.corrected[i], true
-		}
-		if inForce {
-			c.verdict[i] = decides.Reaches(limit)
-		} else {
-			c.verdict[i] = audiometry.Undecided
-		}
-		if c.verdict[i] == audiometry.Undecided {
-			c.missing = append(c.missing, undecidedWords(side.name, c.change[i], inForce)...)
-		}
-	}
-	return c
-}
-
-// ageCorrection says whether the site has elected age correction.
-func (h *hearing) ageCorrection() bool {
-	a := h.b.Measures.Hearing.AgeCorrection
-	if a == nil {
-		return false
-	}
-	on, _ := h.b.Choices[a.Choice].(bool)
-	return on
-}
-
-// aging gives the part of a change that age explains, a frequency each, or why there is none.
-func (h *hearing) aging(baseline, now Date) ([]int, string) {
-	a := h.b.Measures.Hearing.AgeCorrection
-	if a == nil {
-		return nil, ""
-	}
-	before, ok1 := audiometry.AgeOn(h.birth, baseline)
-	after, ok2 := audiometry.AgeOn(h.birth, now)
-	if !ok1 || !ok2 {
-		return nil, "no age correction: the date of birth is not recorded"
-	}
-	aging, err := a.Aging(h.sex, before, after, h.b.Measures.Hearing.Shift.Frequencies)
-	if err != nil {
-		return nil, "no age correction: " + err.Error()
-	}
-	return aging, ""
-}
-
-func undecidedWords(ear string, c audiometry.Change, inForce bool) []string {
-	if !inForce {
-		return []string{"the law's figure for a shift on that day"}
-	}
-	if len(c.Missing) == 0 {
-		return []string{ear + " ear: no response in the baseline or not far enough"}
-	}
-	var out []string
-	for _, hz := range c.Missing {
-		out = append(out, fmt.Sprintf("%s %d Hz", ear, hz))
-	}
-	return out
-}
-
-// workingOf writes the sum of one ear's average change.
-func (h *hearing) workingOf(c *comparison, i int, s side) string {
-	baseline := c.base[i].rec
-	base := sides(baseline)[i].ear
-	aging, why := h.aging(baseline.Date, c.test.standing().rec.Date)
-	text := fmt.Sprintf("%s ear against the baseline of %s:", s.name, baseline.Date)
-	for n, hz := range h.b.Measures.Hearing.Shift.Frequencies {
-		sep := ","
-		if n == 0 {
-			sep = ""
-		}
-		text += fmt.Sprintf("%s %d Hz %s − %s", sep, hz, s.ear.At(hz), base.At(hz))
-		if aging != nil {
-			text += fmt.Sprintf(" (age %d)", aging[n])
-		}
-	}
-	if avg, ok := c.change[i].Average(); ok {
-		text += fmt.Sprintf("; average change %.1f dB", avg)
-		if avg, ok := c.corrected[i].Average(); ok && aging != nil {
-			text += fmt.Sprintf(", after age correction %.1f dB", avg)
-		}
-	} else {
-		text += "; no average"
-	}
-	if why != "" {
-		text += "; " + why
-	}
-	return text
-}
-
-// figures gives a comparison's audiometric figures.
-func (h *hearing) figures(c *comparison) Hearing {
-	s := c.test.standing().rec
-	freqs := h.b.Measures.Hearing.Shift.Frequencies
-	left, right := s.Left.Sum(freqs), s.Right.Sum(freqs)
-	var working []string
-	for i, side := range sides(s) {
-		working = append(working, h.workingOf(c, i, side))
-	}
-	return Hearing{
-		Left: average(c.change[0].Average()), Right: average(c.change[1].Average()),
-		LeftCorrected: average(c.corrected[0].Average()), RightCorrected: average(c.corrected[1].Average()),
-		LeftLevel: average(left.Average()), RightLevel: average(right.Average()), Working: working,
-	}
-}
-
-func average(v float64, ok bool) record.Number { return record.Number{Value: v, Known: ok} }
 
 // course follows both ears through the tests: the baseline in force, revisions, shifts, their return and
 // their lapse.
@@ -165,42 +24,79 @@ type mark struct {
 	on  bool
 }
 
-// course compares every test with the baseline of its day.
+// course compares every test with its baseline. A test that is not to be compared appears only where it
+// confirms the shift of one that is.
 func (h *hearing) course(limit func(Date) record.Answer) *course {
 	c := &course{compared: map[*test]*comparison{}}
+	shift := &h.b.Measures.Hearing.Shift
+	baselines := func(t *test) [2]*test { return h.baselines(shift.Baseline, t) }
 	for _, t := range h.effective {
 		s := t.standing()
-		if !s.compare {
+		if !s.compare && !shift.Confirm {
 			continue
 		}
-		cmp := h.compare(t, h.baselinesFor(t))
-		c.compared[s] = cmp
+		cmp := h.compare(t, baselines(t))
+		if shift.Confirm {
+			h.confirm(cmp, baselines)
+		}
+		if s.compare {
+			c.compared[s] = cmp
+		} else if !cmp.onlyConfirms() {
+			continue
+		}
 		c.list = append(c.list, cmp)
 		h.advance(c, cmp, limit)
 	}
 	return c
 }
 
-// baselinesFor gives the baseline of each ear that is in force when a test is made: the first one, or the
-// audiogram that a decision before the test has put in its place.
-func (h *hearing) baselinesFor(t *test) [2]*test {
-	base := [2]*test{h.baseline, h.baseline}
-	for _, f := range h.follow {
-		if f.Type != "baseline_revision" || f.Date > t.rec.Date {
-			continue
-		}
-		to := h.find(f.AudiogramID)
-		if to == nil || to.rec.Date >= t.rec.Date || to.invalidated {
-			continue
-		}
-		if f.Ear != "right" {
-			base[0] = to
-		}
-		if f.Ear != "left" {
-			base[1] = to
+// onlyConfirms keeps the shifts of a test that is not to be compared as far as they confirm those of a test
+// that is, and says whether there are any.
+func (c *comparison) onlyConfirms() bool {
+	for i, first := range c.first {
+		if first == nil || !first.compare {
+			c.verdict[i] = audiometry.Undecided
 		}
 	}
-	return base
+	return c.shifted()
+}
+
+// unconfirmed lists the tests that show a shift which no second test has confirmed or refuted yet.
+func (h *hearing) unconfirmed(c *course) []Unconfirmed {
+	out := []Unconfirmed{}
+	shift := &h.b.Measures.Hearing.Shift
+	if !shift.Confirm {
+		return out
+	}
+	for _, t := range h.effective {
+		s, next := t.standing(), h.testAfter(t)
+		cmp := c.compared[s]
+		if cmp == nil {
+			continue
+		}
+		var open [2]bool
+		for i := range open {
+			open[i] = cmp.pending(i) && (next == nil ||
+				audiometry.Confirmed(cmp.outcome[i], h.judgeEar(&shift.Scheme, i, cmp.base[i], next)) == audiometry.Undecided)
+		}
+		if !open[0] && !open[1] {
+			continue
+		}
+		u := Unconfirmed{Link: Link{s.rec.Date, s.ref}, ID: s.rec.AudiogramID, Ears: earsText(open[0], open[1]), Hearing: h.figures(cmp)}
+		if within, ok := h.b.Law.Interval(shift.Retest, t.rec.Date); ok {
+			u.RetestUntil, _ = within.After(t.rec.Date, nil)
+		}
+		if next != nil {
+			u.Again = &Link{next.rec.Date, next.ref}
+		}
+		out = append(out, u)
+	}
+	return out
+}
+
+// pending says whether an ear shows a shift in this test alone, which does not count yet.
+func (c *comparison) pending(i int) bool {
+	return c.outcome[i].Verdict == audiometry.Yes && c.verdict[i] != audiometry.Yes
 }
 
 func (h *hearing) find(id string) *test {
@@ -223,7 +119,7 @@ func (h *hearing) advance(c *course, now *comparison, limit func(Date) record.An
 			again[i] = true
 		case now.verdict[i] == audiometry.Yes:
 			c.since[i] = now
-		case now.verdict[i] == audiometry.No && was != nil && was.base[i] == now.base[i]:
+		case now.verdict[i] == audiometry.No && !now.pending(i) && was != nil && was.base[i] == now.base[i]:
 			lapsed[i] = true
 		}
 	}
@@ -291,7 +187,7 @@ func (h *hearing) lapse(c *course, now *comparison, first *test, ears [2]bool, o
 // persist notes that a shift is there again; of several tests in a row the latest is kept.
 func (h *hearing) persist(c *course, now *comparison, first *test, ears [2]bool) {
 	s := now.test.standing()
-	p := Persisted{Link: Link{s.rec.Date, s.ref}, Shift: Link{first.rec.Date, first.ref}, Ears: earsText(ears[0], ears[1])}
+	p := Persisted{Link: Link{s.rec.Date, s.ref}, Shift: Link{first.rec.Date, first.ref}, Ears: earsText(ears[0], ears[1]), Hearing: h.figures(now)}
 	for _, f := range h.follow {
 		if (f.Type == "persistence_opinion" || f.Type == "baseline_revision") && f.Date >= first.rec.Date && concerns(f.Ear, ears) &&
 			slices.Contains(h.b.Measures.Hearing.Professionals, h.b.Registers.professionOf(f.By)) {

@@ -16,6 +16,7 @@ type test struct {
 	invalidated bool
 	retestOf    *test // the test that this retest repeats in time
 	replacedBy  *test // the retest in time that stands in for this test
+	later       bool  // after the baseline, and valid
 	enrolled    bool
 	compare     bool // to be compared with the baseline
 	next        Date // day of the next test that counts; unknown for the latest
@@ -154,7 +155,7 @@ func (h *hearing) findEffective() {
 			after = true
 			continue
 		}
-		if !after || !t.counts() || t.retestOf != nil {
+		if t.later = after && t.counts(); !t.later || t.retestOf != nil {
 			continue
 		}
 		if n := len(h.effective); n > 0 {
@@ -226,7 +227,7 @@ func (h *hearing) audiograms(compared map[*test]*comparison, lacks func(*test) [
 			InProgram:   !t.invalidated && (t.enrolled || t == h.baseline && h.everEnrolled),
 			Invalidated: t.invalidated, ToCompare: t.compare, ComparedOn: h.past(t.rec.DeterminedOn), Mobile: t.rec.Mobile,
 			ReviewedOn: h.past(t.rec.ReviewedOn), ReviewerKnown: t.rec.Reviewer != "", ReviewerIs: h.b.Registers.professionOf(t.rec.Reviewer),
-			EarsWithResult: earsWithResult(t.rec), CannotCompare: []string{}, RecordLacks: lacks(t),
+			EarsWithResult: earsWithResult(t.rec), CannotCompare: []string{}, RecordLacks: lacks(t), Schemes: h.judged(t),
 		}
 		a.NotTested, a.NotRecorded = h.required(t.rec)
 		if t.retestOf != nil {
@@ -240,11 +241,14 @@ func (h *hearing) audiograms(compared map[*test]*comparison, lacks func(*test) [
 			a.ReplacedBy = t.replacedBy.ref
 		}
 		if c := compared[t]; c != nil {
-			a.CannotCompare = c.missing
+			figures := h.figures(c)
+			a.CannotCompare, a.Hearing = c.missing(), &figures
 			switch {
 			case c.shifted():
 				a.Problem = "a threshold shift"
-			case len(c.missing) > 0:
+			case c.pending(0) || c.pending(1):
+				a.Problem = "a threshold shift that no second test has confirmed"
+			case len(a.CannotCompare) > 0:
 				a.Problem = "thresholds that allow no comparison"
 			}
 		}

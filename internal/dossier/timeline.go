@@ -3,6 +3,7 @@ package dossier
 import (
 	"cmp"
 	"slices"
+	"strings"
 
 	"hearduty/internal/calendar"
 	"hearduty/internal/record"
@@ -69,8 +70,8 @@ func (b *Builder) timeline(w *WorkerRecords, employed []calendar.Spell) []stretc
 			}
 		}
 	}
-	for _, r := range own {
-		days = append(days, r.day)
+	for _, m := range own.rows {
+		days = append(days, m.Date)
 	}
 	slices.Sort(days)
 	days = slices.Compact(days)
@@ -128,7 +129,7 @@ func (s *stretch) add(group string, on []known) {
 		if a.src == nil || other.src != nil && other.low > a.low {
 			k, other = other, a
 		}
-		k.dose = higher(k.dose, other.dose)
+		k.bounds = higher(k.bounds, other.bounds)
 		switch {
 		case k.exact():
 			k.reason = ""
@@ -140,17 +141,17 @@ func (s *stretch) add(group string, on []known) {
 }
 
 // inNoGroup gives the exposure on a day in a gap between assignments: own results of that gap tell it.
-func (b *Builder) inNoGroup(gap calendar.Spell, own []*result, day Date) []known {
+func (b *Builder) inNoGroup(gap calendar.Spell, own *ownRows, day Date) []known {
 	const reason = "the worker is in no group and has no full-shift measurement"
-	return b.withOwn(b.channels.historyOf(nil, nil), reason, gap, own, day)
+	return b.withOwn(b.channels.historyOf(nil, nil), reason, gap, own.in(""), day)
 }
 
 // inGroup gives the exposure of a worker who is in a group on a day.
-func (b *Builder) inGroup(m membership, own []*result, day Date) []known {
+func (b *Builder) inGroup(m membership, own *ownRows, day Date) []known {
 	if h := b.histories[m.group]; h != nil {
-		return b.withOwn(h, "", m.Spell, own, day)
+		return b.withOwn(h, "", m.Spell, own.in(m.group), day)
 	}
-	return b.withOwn(b.channels.historyOf(nil, nil), "the group "+m.group+" has no record and no measurement", m.Spell, own, day)
+	return b.withOwn(b.channels.historyOf(nil, nil), "the group "+m.group+" has no record and no measurement", m.Spell, own.in(m.group), day)
 }
 
 // withOwn gives what is known on a day from a group's history and from the own results of the stretch in
@@ -170,35 +171,51 @@ func (b *Builder) withOwn(h *history, silent string, in calendar.Spell, own []*r
 // withOwn takes own results into what is known on a channel. They count from their day on until the group
 // is measured or changed again, the highest of several, and where the group tells nothing also backwards.
 // A result known only within bounds leaves the group's value in force as a lower bound, unless it lies
-// below that.
+// below that. On a channel that is sampled they count from the day on that there are enough of them since the
+// latest change.
 func (h *history) withOwn(channel int, k known, own []*result, day Date) known {
-	d, src := highest(own, channel, h.latest(channel, day), day)
+	from := h.latest(channel, day)
+	d, src := h.c.highest(own, channel, from, day)
 	if src == nil && k.src == nil {
 		for _, r := range own {
-			if r.usable(channel) && r.day > day && !h.raisedBetween(day, r.day) {
-				d, src = highest(own, channel, r.day, r.day)
+			if r.day <= day || h.raisedBetween(day, r.day) {
+				continue
+			}
+			if d, src = h.c.highest(own, channel, h.spanOf(channel, r.day), r.day); src != nil {
 				break
 			}
 		}
 	}
 	if src == nil {
-		unusable := !slices.ContainsFunc(own, func(r *result) bool { return r.usable(channel) })
-		if k.src == nil && len(own) > 0 && unusable {
-			k.reason = whyNone(slices.Concat(h.results, own))
+		if k.src == nil && len(own) > 0 && !slices.ContainsFunc(own, func(r *result) bool { return r.usable(channel) }) {
+			k.reason = h.whyNoOwn(channel, k.reason, own, from, day)
 		}
 		return k
 	}
-	mine := known{dose: d, src: src, own: true, note: "the worker's own measurement"}
-	if !d.exact() && k.low > d.low && k.low <= d.high {
+	mine := known{bounds: d, src: src, own: true, note: "the worker's own measurement"}
+	if !d.exact() && !src.on[channel].expanded.Known && k.low > d.low && k.low <= d.high {
 		mine.low, mine.src, mine.own = k.low, k.src, false
 		mine.note = "at least the group's value; the worker's own measurement gives only bounds"
 	}
 	return mine
 }
 
-// latest gives the day of the group's latest change, or latest result on a channel, up to a day.
+// whyNoOwn says why neither the group nor any of the worker's own results tells the exposure on a channel.
+func (h *history) whyNoOwn(channel int, reason string, own []*result, from, to Date) string {
+	if !h.c.sampled(channel) {
+		return h.c.whyNone(slices.Concat(h.results, own), channel, "")
+	}
+	mine := h.c.whyNone(own, channel, h.c.shortOf(own, channel, from, to))
+	return strings.Join(distinct([]string{reason, "of the worker's own measurements: " + mine}), "; ")
+}
+
+// latest gives the day of the group's latest change, or latest result on a channel, up to a day. On a channel
+// that is sampled, results add up, so that only a change counts.
 func (h *history) latest(channel int, day Date) Date {
 	last := h.lastEvent(day).day
+	if h.c.sampled(channel) {
+		return last
+	}
 	for _, r := range h.results {
 		if r.day <= day && r.usable(channel) {
 			last = max(last, r.day)
@@ -211,17 +228,44 @@ func (h *history) raisedBetween(after, until Date) bool {
 	return slices.ContainsFunc(h.events, func(e event) bool { return e.raises && e.day > after && e.day <= until })
 }
 
-// ownResults gives the results of the worker's own measurements.
-func (b *Builder) ownResults(w *WorkerRecords) []*result {
-	rows := slices.Clone(w.Measurements)
-	slices.SortStableFunc(rows, compareMeasurements)
-	var out []*result
-	for len(rows) > 0 {
+// ownRows are the worker's own measurements. What a level says depends on the shifts and days of the group in
+// which it was taken.
+type ownRows struct {
+	b    *Builder
+	rows []*record.Measurement // by day; rows of one measurement follow each other
+	made map[string][]*result  // by group
+}
+
+func (b *Builder) ownResults(w *WorkerRecords) *ownRows {
+	o := &ownRows{b: b, rows: slices.Clone(w.Measurements)}
+	slices.SortStableFunc(o.rows, compareMeasurements)
+	return o
+}
+
+// in gives the results of the own personal measurements as taken in a group.
+func (o *ownRows) in(group string) []*result {
+	if len(o.rows) == 0 {
+		return nil
+	}
+	c := &o.b.channels
+	if !c.levels {
+		group = "" // a dose does not depend on it
+	}
+	out, ok := o.made[group]
+	if ok {
+		return out
+	}
+	at := workplaceOf(group, o.b.Registers.Groups[group])
+	for rows := o.rows; len(rows) > 0; {
 		n := sameMeasurement(rows)
 		if rows[0].Type == "personal" {
-			out = append(out, b.channels.ofMeasurement(rows[:n:n]))
+			out = append(out, c.ofMeasurement(rows[:n:n], at))
 		}
 		rows = rows[n:]
 	}
+	if o.made == nil {
+		o.made = map[string][]*result{}
+	}
+	o.made[group] = out
 	return out
 }

@@ -26,6 +26,7 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 	}
 	pieces := b.timeline(w, employed)
 	d.Exposures = b.exposures(pieces, refs)
+	d.ExposureWorking = b.workings(d.Exposures)
 	var plain map[string][]calendar.Spell
 	d.Exposed, d.ExposureUnknown, plain = b.levelSpells(pieces)
 	enrolled := b.perEmployment(plain[b.Measures.Exposure.Enrols], employed)
@@ -37,6 +38,7 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 	d.Baseline = h.baselineFacts(len(enrolled) > 0)
 	d.Audiograms = h.audiograms(course.compared, func(t *test) []string { return b.recordLacks(t, h, d.JobTitle, pieces) })
 	d.Shifts = h.shifts(course, enrolledNow, func(day Date) bool { return len(atHand(w.Issues, day)) > 0 })
+	d.Unconfirmed = h.unconfirmed(course)
 	d.AfterShift = b.spells(calendar.Intersect(course.afterShift(), enrolled))
 	d.Lapsed, d.Persistent = emptyNotNil(course.lapsed), emptyNotNil(course.persisted)
 	d.Recordables, d.Revisions, d.MarkedLater, d.Dangling = h.recordables(course), h.revisions(), h.markedLater(), h.dangling()
@@ -47,7 +49,7 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 	d.Protection = b.protection(w, now, h, refs)
 	d.Wear = b.wear(w, now, refs)
 	d.Training, d.ProtectorTraining = b.training(w, refs)
-	return &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, enrolled, refs), Refs: refs}
+	return &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, enrolled, refs), Refs: refs, Observations: h.observations()}
 }
 
 func emptyNotNil[T any](list []T) []T {
@@ -90,7 +92,7 @@ func (b *Builder) limitOn(pieces []stretch, day Date) record.Answer {
 	if p == nil {
 		return record.Unanswered
 	}
-	answer, _ := b.reaches(level, p.on[b.channels.index(b.Measures.Exposure.Levels[level].Channel)].dose, day)
+	answer, _ := b.reaches(level, p.on[b.channels.index(b.Measures.Exposure.Levels[level].Channel)].bounds, day)
 	return answer
 }
 
@@ -127,14 +129,13 @@ func (b *Builder) results(w *WorkerRecords, pieces []stretch, refs Refs) []Resul
 		if src == nil || seen[src] || p.From > b.AsOf {
 			continue
 		}
-		if answer, _ := b.reaches(level, k.dose, max(p.From, 1)); answer != record.Yes {
+		if answer, _ := b.reaches(level, k.bounds, max(p.From, 1)); answer != record.Yes {
 			continue
 		}
 		seen[src] = true
 		r := Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: max(src.day, p.From)}
-		if k.exact() {
-			r.Dose = record.Num(k.low)
-		}
+		shown := b.channels.level(channel, &k)
+		r.Dose, r.LevelDBA = shown.DosePct, shown.LevelDBA
 		for _, n := range w.Notices {
 			if n.About == "exposure" && n.Date >= src.day && (n.MeasurementID != "" && n.MeasurementID == src.id || n.MeasurementID == "" && n.Date >= r.Since) {
 				r.Notice = link(refs, n, n.Date)

@@ -19,7 +19,31 @@ type Report struct {
 	Totals   map[Status]int `json:"totals" doc:"number of findings by status, also of those not listed"`
 	Counts   []Count        `json:"counts" doc:"number of findings by site, bundle, topic and status"`
 	Listed   string         `json:"listed" doc:"which findings are listed"`
-	Findings []Finding      `json:"findings"`
+
+	ObservationCounts []ObservationCount `json:"observation_counts" doc:"number of observations by site and kind, also of those not listed"`
+	Observations      []Observation      `json:"observations" doc:"what somebody may want to look at, listed with --all only; never a verdict"`
+	Findings          []Finding          `json:"findings"`
+}
+
+// Observation is something about a record that somebody may want to look at. It is no finding and changes
+// none, and it gives no threshold and no number.
+type Observation struct {
+	Site    string  `json:"site"`
+	Subject Subject `json:"subject"`
+	Kind    string  `json:"kind" doc:"what was observed, in a word"`
+	Record  string  `json:"record" doc:"reference of the record"`
+	File    string  `json:"file" doc:"file that holds it"`
+	Sheet   string  `json:"sheet,omitempty" doc:"sheet of a workbook"`
+	Row     int     `json:"row" doc:"line of the file, row of the sheet, or place in the list"`
+	Ear     string  `json:"ear,omitempty" enum:"left|right|both" doc:"ear concerned, if it is about one"`
+	Text    string  `json:"text" doc:"the observation in a sentence, without figures"`
+}
+
+// ObservationCount is the number of observations of one kind at a site.
+type ObservationCount struct {
+	Site   string `json:"site"`
+	Kind   string `json:"kind"`
+	Number int    `json:"number"`
 }
 
 // Tool names the program that made the report.

@@ -191,6 +191,7 @@ func (c *check) report() *finding.Report {
 		Tool: finding.Tool{Name: "hearduty", Version: c.Version}, Program: c.Program.Title, AsOf: c.AsOf, Cautions: cautions,
 		Sites: []finding.Site{}, Bundles: []finding.Bundle{}, Inputs: c.ledger.Inputs, Rejects: c.rejects(), Remarks: []string{},
 		Totals: map[finding.Status]int{}, Counts: []finding.Count{}, Listed: c.listedWords(), Findings: []finding.Finding{},
+		Observations: []finding.Observation{}, ObservationCounts: []finding.ObservationCount{},
 	}
 	for _, d := range c.ledger.Remarks {
 		r.Remarks = append(r.Remarks, d.String())
@@ -213,6 +214,7 @@ func (c *check) report() *finding.Report {
 		r.Sites = append(r.Sites, site)
 	}
 	r.Remarks = append(r.Remarks, c.unplaced()...)
+	c.seen.report(c, r)
 	slices.SortFunc(r.Findings, func(x, y finding.Finding) int { return finding.Compare(&x, &y) })
 	return r
 }
@@ -253,7 +255,7 @@ func (c *check) rejects() []finding.Reject {
 
 func (c *check) listedWords() string {
 	if c.All {
-		return "all findings"
+		return "all findings and observations"
 	}
 	return fmt.Sprintf("all findings but those that are met or lifted, and those due in more than %s", days(c.AheadDays))
 }

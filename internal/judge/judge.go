@@ -73,6 +73,7 @@ type check struct {
 	wanted    string              // beginning of the id of the one finding to be explained
 	foundMu   sync.Mutex
 	found     []explained
+	seen      seen
 }
 
 // bench is one site under one bundle.
@@ -172,7 +173,9 @@ func (c *check) prepare(ctx context.Context) error {
 				if err != nil {
 					return fmt.Errorf("the bundle %s cannot be prepared: %w", id, err)
 				}
-				engines[id], grounds[id] = engine, dossier.NewGround(registers, b.Measures, b, c.AsOf)
+				measures := b.Measures
+				measures.Hearing.Sums = c.HealthDetail
+				engines[id], grounds[id] = engine, dossier.NewGround(registers, measures, b, c.AsOf)
 				c.used = append(c.used, b)
 			}
 			place := dossier.Place{ID: s.ID, Country: s.Country, Region: s.Region}
@@ -239,6 +242,7 @@ func (c *check) judgeWorker(ctx context.Context, w *dossier.WorkerRecords) error
 		}
 	}
 	for _, site := range sites {
+		var observed observed
 		for _, b := range c.benches[site] {
 			file := b.builder.Worker(w)
 			if file == nil {
@@ -250,10 +254,12 @@ func (c *check) judgeWorker(ctx context.Context, w *dossier.WorkerRecords) error
 				}
 			}
 			b.usage.Add(b.builder, w, file.Input.(*dossier.Worker))
+			observed.add(file)
 			if err := c.judgeFile(ctx, b, file); err != nil {
 				return err
 			}
 		}
+		c.seen.keep(c, site, &observed)
 	}
 	return nil
 }

@@ -16,7 +16,8 @@ import (
 //	number     signed varint of the tenths, shifted left by one; or 1 and the eight bytes of the float
 //	answer     one byte
 //	list       count, texts
-//	thresholds bits of the entries that are not empty, then signed varint of tenths times four plus state
+//	threshold  signed varint of the tenths times four plus state
+//	thresholds bits of the entries that are not empty, then each of them
 //	bands      bits of the known numbers, then the numbers
 
 // Append appends the compact form of r, with its origin, to b.
@@ -69,6 +70,10 @@ func appendValue(b []byte, pointer any) []byte {
 		}
 	case *audiometry.Ear:
 		b = appendEar(b, p)
+	case *Threshold:
+		if *p != (Threshold{}) {
+			b = appendThresholdValue(b, *p)
+		}
 	case *Octaves:
 		if p.Known() {
 			b = appendNumbers(b, p[:])
@@ -128,8 +133,12 @@ func appendEar(b []byte, ear *audiometry.Ear) []byte {
 	b = binary.AppendUvarint(b, present)
 	for _, t := range ear {
 		if t != (audiometry.Threshold{}) {
-			b = binary.AppendVarint(b, int64(t.Tenths)<<2|int64(t.State&3))
+			b = appendThresholdValue(b, t)
 		}
 	}
 	return b
+}
+
+func appendThresholdValue(b []byte, t Threshold) []byte {
+	return binary.AppendVarint(b, int64(t.Tenths)<<2|int64(t.State&3))
 }

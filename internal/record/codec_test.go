@@ -55,6 +55,8 @@ func drawValue(t *rapid.T, pointer any) {
 		for i := range p {
 			p[i] = audiometry.Threshold{Tenths: rapid.Int16().Draw(t, "tenths"), State: audiometry.State(rapid.IntRange(0, 3).Draw(t, "state"))}
 		}
+	case *Threshold:
+		*p = Threshold{Tenths: rapid.Int16().Draw(t, "tenths"), State: audiometry.State(rapid.IntRange(0, 3).Draw(t, "state"))}
 	case *Octaves:
 		drawNumbers(t, p[:])
 	case **Octaves:
@@ -124,6 +126,8 @@ func FuzzDecoder(f *testing.F) {
 func sampleAudiogram() *Audiogram {
 	a := &Audiogram{
 		AudiogramID: "A-000412", WorkerID: "000123", Date: mustDate("2025-03-05"), Purpose: "periodic", AudiometerID: "AM-1", RoomID: "R-1",
+		LeftRepeat: Threshold{Tenths: 150, State: audiometry.Measured}, RightRepeat: Threshold{State: audiometry.NotTested},
+		Masked: Yes, Earphones: "insert", FineSteps: No,
 		TesterID: "T-2", QuietHours: Num(14), QuietByProtectors: No, Mobile: No, DeterminedOn: mustDate("2025-03-12"), Reviewer: "AUD-1", ReviewedOn: mustDate("2025-03-12"),
 	}
 	for i := range a.Left {

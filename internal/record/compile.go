@@ -113,6 +113,8 @@ func expand(f Field, goType reflect.Type) []Field {
 	case audiometry.Ear:
 		f.Type = Hearing
 		return atEach(f, audiometry.Frequencies[:])
+	case Threshold:
+		f.Type = Hearing
 	case Octaves, *Octaves:
 		f.Type = Decimal
 		return atEach(f, OctaveBands[:])

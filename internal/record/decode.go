@@ -84,6 +84,8 @@ func (c *cursor) value(pointer any) {
 		*p = c.list()
 	case *audiometry.Ear:
 		c.ear(p)
+	case *Threshold:
+		*p = c.threshold()
 	case *Octaves:
 		c.numbers(p[:])
 	case **Octaves:
@@ -205,14 +207,18 @@ func (c *cursor) ear(ear *audiometry.Ear) {
 		if present&(1<<i) == 0 {
 			continue
 		}
-		v := c.varint()
-		tenths := v >> 2
-		if tenths != int64(int16(tenths)) {
-			c.fail(errValue)
-			return
-		}
-		ear[i] = audiometry.Threshold{Tenths: int16(tenths), State: audiometry.State(v & 3)}
+		ear[i] = c.threshold()
 	}
+}
+
+func (c *cursor) threshold() Threshold {
+	v := c.varint()
+	tenths := v >> 2
+	if tenths != int64(int16(tenths)) {
+		c.fail(errValue)
+		return Threshold{}
+	}
+	return Threshold{Tenths: int16(tenths), State: audiometry.State(v & 3)}
 }
 
 // bits reads the presence bits of n entries.

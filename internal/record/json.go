@@ -83,10 +83,9 @@ func (f *Field) appendJSONValue(b []byte, pointer any) []byte {
 		}
 		return append(b, ']')
 	case *audiometry.Ear:
-		if t := p[f.element]; t.State == audiometry.Measured {
-			return append(b, t.String()...)
-		}
-		return appendPresent(b, p[f.element].String())
+		return appendThreshold(b, p[f.element])
+	case *Threshold:
+		return appendThreshold(b, *p)
 	case *Octaves:
 		return appendJSONNumber(b, p[f.element])
 	case **Octaves:
@@ -99,6 +98,13 @@ func (f *Field) appendJSONValue(b []byte, pointer any) []byte {
 		}
 	}
 	return b
+}
+
+func appendThreshold(b []byte, t Threshold) []byte {
+	if t.State == audiometry.Measured {
+		return append(b, t.String()...)
+	}
+	return appendPresent(b, t.String())
 }
 
 func appendPresent(b []byte, s string) []byte {

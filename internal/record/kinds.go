@@ -2,6 +2,9 @@ package record
 
 import "hearduty/internal/audiometry"
 
+// Threshold is one hearing threshold level.
+type Threshold = audiometry.Threshold
+
 // The field tag reads: name, then any of
 //
 //	required   an empty field rejects the row
@@ -62,6 +65,7 @@ type Measurement struct {
 	RunMinutes       Number   `field:"run_minutes,min=0,max=1440" doc:"time sampled, minutes"`
 	ShiftMinutes     Number   `field:"shift_minutes,min=1,max=1440" doc:"length of the shift sampled, minutes"`
 	FullShift        Answer   `field:"full_shift" doc:"whether the sample stands for the full shift"`
+	Representative   Answer   `field:"representative" doc:"whether a sample shorter than the shift is like all of it, so that it may be projected to the length of the shift"`
 	Method           string   `field:"method,one=slow|fast|integrating" doc:"time weighting or integrating instrument"`
 	CriterionDB      Number   `field:"criterion_db,min=60,max=120" doc:"criterion level of the dose, dBA for 8 h"`
 	ExchangeDB       Number   `field:"exchange_db,min=1,max=6" doc:"exchange rate of the dose, dB"`
@@ -123,7 +127,12 @@ type Audiogram struct {
 	Date              Date           `field:"date,required" doc:"day of the test"`
 	Purpose           string         `field:"purpose,one=baseline|periodic|retest|exit|other" doc:"why the test was made"`
 	Left              audiometry.Ear `field:"left" doc:"left ear's hearing threshold level, dB HL; NR>100 for no response up to 100 dB, NT for not tested"`
+	LeftRepeat        Threshold      `field:"left.repeat_1000" doc:"left ear's hearing threshold level at 1000 Hz when it was repeated in the same test, dB HL"`
 	Right             audiometry.Ear `field:"right" doc:"right ear's hearing threshold level, dB HL; NR>100 for no response up to 100 dB, NT for not tested"`
+	RightRepeat       Threshold      `field:"right.repeat_1000" doc:"right ear's hearing threshold level at 1000 Hz when it was repeated in the same test, dB HL"`
+	Masked            Answer         `field:"masked" doc:"whether the other ear was masked where it might have heard the tone"`
+	Earphones         string         `field:"earphones,one=supra_aural|circumaural|insert" doc:"earphones used"`
+	FineSteps         Answer         `field:"fine_steps" doc:"whether the audiometer works in steps finer than 5 dB, as self-recording ones do"`
 	AudiometerID      string         `field:"audiometer_id" doc:"audiometer used"`
 	RoomID            string         `field:"room_id" doc:"test room used"`
 	TesterID          string         `field:"tester_id" doc:"person who made the test"`
@@ -196,7 +205,7 @@ type FitTest struct {
 	LeftPARDB     Number `field:"left.par_db,min=-10,max=60" doc:"left ear's personal attenuation rating, dB"`
 	RightPARDB    Number `field:"right.par_db,min=-10,max=60" doc:"right ear's personal attenuation rating, dB"`
 	Percent       Number `field:"percent,min=0,max=100" doc:"percentage of fittings that reach the rating"`
-	UncertaintyDB Number `field:"uncertainty_db,min=0,max=30" doc:"uncertainty of the rating, dB"`
+	UncertaintyDB Number `field:"uncertainty_db,min=0,max=30" doc:"standard uncertainty of the rating, dB"`
 	Passed        Answer `field:"passed" doc:"whether the fit was found good enough"`
 }
 

@@ -56,6 +56,8 @@ func (t *Table) Set(r Record, i int, text string) *Problem {
 		return f.setList(p, text)
 	case *audiometry.Ear:
 		return f.setThreshold(&p[f.element], text)
+	case *Threshold:
+		return f.setThreshold(p, text)
 	case *Octaves:
 		return f.setNumber(&p[f.element], text)
 	case **Octaves:

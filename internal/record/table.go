@@ -116,5 +116,5 @@ func (t *Table) Names() []string {
 }
 
 // pointer gives a pointer to a Go field of r, which must be of the table's kind. Its type is one of
-// *string, *Date, *Number, *Answer, *List, *audiometry.Ear, *Octaves, **Octaves and **Deviation.
+// *string, *Date, *Number, *Answer, *List, *audiometry.Ear, *Threshold, *Octaves, **Octaves and **Deviation.
 func pointer(r reflect.Value, slot int) any { return r.Field(slot).Addr().Interface() }

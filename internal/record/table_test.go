@@ -224,8 +224,9 @@ func TestAppendJSON(t *testing.T) {
 	a.Left[1] = audiometry.Threshold{Tenths: 125, State: audiometry.Measured}
 	a.Left[9] = audiometry.Threshold{Tenths: 1000, State: audiometry.NoResponse}
 	a.Right[0] = audiometry.Threshold{State: audiometry.NotTested}
+	a.LeftRepeat = audiometry.Threshold{Tenths: 150, State: audiometry.Measured}
 	a.SetAt(Origin{Source: 1, Row: 7})
-	require.Equal(t, `{"record":"audiogram","audiogram_id":"A\"1","worker_id":"007","date":"2025-03-04","left":{"500":12.5,"8000":"NR>100"},"right":{"250":"NT"},"quiet_hours":14,"mobile":"no","origin":{"file":"audiograms.csv","row":7}}`,
+	require.Equal(t, `{"record":"audiogram","audiogram_id":"A\"1","worker_id":"007","date":"2025-03-04","left":{"500":12.5,"8000":"NR>100","repeat_1000":15},"right":{"250":"NT"},"quiet_hours":14,"mobile":"no","origin":{"file":"audiograms.csv","row":7}}`,
 		string(AppendJSON(nil, a, "audiograms.csv", "")))
 	m := &Measurement{MeasurementID: "M", Type: "area", Octave: &Octaves{0: Num(70.5), 7: Num(60)}}
 	require.Equal(t, `{"record":"measurement","measurement_id":"M","kind":"area","octave":{"63":70.5,"8000":60},"origin":{"file":"m.xlsx","sheet":"S","row":0}}`,

@@ -23,6 +23,8 @@ func (t *Table) Text(r Record, i int) string {
 		return p.String()
 	case *audiometry.Ear:
 		return p[f.element].String()
+	case *Threshold:
+		return p.String()
 	case *Octaves:
 		return p[f.element].String()
 	case **Octaves:

@@ -73,6 +73,9 @@ func sample() *finding.Report {
 			{Site: "kiln-hill", Bundle: us, Topic: "training", Status: finding.Late, Number: 1}, {Site: "kiln-hill", Bundle: us, Topic: "follow-up", Status: finding.Lifted, Number: 1},
 			{Site: "kiln-hill", Bundle: us, Topic: "information", Status: finding.Met, Number: 91},
 		},
+		ObservationCounts: []finding.ObservationCount{
+			{Site: "kiln-hill", Kind: "identical_ears", Number: 1}, {Site: "kiln-hill", Kind: "notch", Number: 41}, {Site: "larch-street", Kind: "same_day", Number: 1},
+		},
 		Listed:   "gap, unproven, opinion, late, and due within 90 days; all with --all",
 		Findings: []finding.Finding{first, second, choice, quiet, recorded, notice, late, lifted, met},
 	}
@@ -96,6 +99,11 @@ func long() *finding.Report {
 	r.Counts = append(r.Counts, finding.Count{Site: r.Sites[0].ID, Bundle: "company-quiet", Topic: "a-topic-with-a-very-long-name", Status: finding.Gap, Number: 1})
 	r.Bundles = append(r.Bundles, finding.Bundle{ID: "company-quiet", Title: "Quieter than the law", Revision: "3", Kind: "company", CheckedOn: "2026-01-01"})
 	r.Inputs[0].File = "records/" + strings.Repeat("folder/", 20) + "audiograms.csv"
+	r.ObservationCounts = []finding.ObservationCount{{Site: r.Sites[0].ID, Kind: "a_kind_nobody_knows", Number: 1234567}}
+	r.Observations = []finding.Observation{
+		{Site: r.Sites[0].ID, Subject: finding.Subject{Kind: "worker", ID: "作業者"}, Kind: "notch", Record: "audiogram/x", File: r.Inputs[0].File, Row: 7, Ear: "left", Text: "The ear has a notch at high frequencies."},
+		{Site: "larch-street", Subject: finding.Subject{Kind: "worker", ID: "2"}, Kind: "same_day", Record: "audiogram/y", File: "a.xlsx", Sheet: "Tests", Row: 9, Text: "Another test was made on the same day."},
+	}
 	r.Findings = r.Findings[:3]
 	r.Findings[0].Site, r.Findings[0].Subject.ID = r.Sites[0].ID, "作業者"+strings.Repeat("０", 50)
 	r.Findings[0].Message = strings.Repeat("one sentence that goes on and on, ", 12) + "and ends"

@@ -8,6 +8,7 @@ type Names struct {
 	Levels   []string // exposure levels: keys of exposed and exposure_unknown
 	Channels []string // dose channels: keys of channels
 	Choices  []string // keys of choices
+	Schemes  []string // names of further hearing schemes: keys of schemes
 }
 
 // subjects holds an empty dossier of each subject kind.
@@ -40,6 +41,7 @@ func dossierObject(kind string, names Names) object {
 	keys := map[string][]string{}
 	for name, list := range map[string][]string{
 		"exposed": names.Levels, "exposure_unknown": names.Levels, "channels": names.Channels, "choices": names.Choices,
+		"schemes": names.Schemes,
 	} {
 		if list != nil {
 			keys[name] = list

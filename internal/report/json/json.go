@@ -18,32 +18,41 @@ type Format struct{}
 func (Format) Name() string { return "json" }
 
 // Write writes the report. Empty lists are [], never null, and keys have always the same order. The
-// findings are written one by one, so that a large report needs little memory.
+// observations and findings are written one by one, so that a large report needs little memory.
 func (Format) Write(w io.Writer, r *finding.Report) error {
 	out := bufio.NewWriter(w)
 	head, err := marshal(withoutFindings(r), "")
 	if err != nil {
 		return err
 	}
-	end := []byte("[]\n}") // the findings are the last key
-	if !bytes.HasSuffix(head, end) {
-		return fmt.Errorf("the findings are not the last key of a report")
+	const last = "[],\n  \"findings\": []\n}" // the observations and the findings are the last keys
+	if !bytes.HasSuffix(head, []byte(last)) {
+		return fmt.Errorf("the observations and findings are not the last keys of a report")
 	}
-	out.Write(bytes.TrimSuffix(head, end))
-	for i := range r.Findings {
-		f, err := marshal(complete(r.Findings[i]), "    ")
+	out.Write(head[:len(head)-len(last)])
+	if err := each(out, r.Observations, func(o finding.Observation) any { return o }); err != nil {
+		return err
+	}
+	out.WriteString(",\n  \"findings\": ")
+	if err := each(out, r.Findings, func(f finding.Finding) any { return complete(f) }); err != nil {
+		return err
+	}
+	out.WriteString("\n}\n")
+	return out.Flush()
+}
+
+// each writes a list, an element at a time.
+func each[T any](out *bufio.Writer, list []T, shown func(T) any) error {
+	for i := range list {
+		text, err := marshal(shown(list[i]), "    ")
 		if err != nil {
 			return err
 		}
 		out.WriteString([]string{"[\n    ", ",\n    "}[min(i, 1)])
-		out.Write(f)
+		out.Write(text)
 	}
-	if len(r.Findings) == 0 {
-		out.WriteString("[]\n}\n")
-	} else {
-		out.WriteString("\n  ]\n}\n")
-	}
-	return out.Flush()
+	out.WriteString([]string{"[]", "\n  ]"}[min(len(list), 1)])
+	return nil
 }
 
 func marshal(v any, prefix string) ([]byte, error) {
@@ -58,7 +67,7 @@ func marshal(v any, prefix string) ([]byte, error) {
 // withoutFindings copies the report with no list null and no finding.
 func withoutFindings(r *finding.Report) *finding.Report {
 	c := *r
-	c.Findings = []finding.Finding{}
+	c.Findings, c.Observations, c.ObservationCounts = []finding.Finding{}, []finding.Observation{}, list(c.ObservationCounts)
 	c.Cautions, c.Remarks = list(c.Cautions), list(c.Remarks)
 	c.Inputs, c.Rejects, c.Counts = list(c.Inputs), list(c.Rejects), list(c.Counts)
 	if c.Totals == nil {

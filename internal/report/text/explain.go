@@ -110,6 +110,13 @@ func factLines(p *page, facts map[string]any) {
 			continue
 		}
 		name, value := named(key, facts[key])
+		if list, ok := facts[key].([]any); ok && key == "for_information" && len(list) > 0 {
+			p.para(2, 4, name+", which decides nothing:")
+			for _, line := range list {
+				p.para(4, 6, words(line))
+			}
+			continue
+		}
 		p.para(2, 4, name+": "+value)
 	}
 }

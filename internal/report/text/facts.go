@@ -118,7 +118,7 @@ func named(key string, value any) (name, text string) {
 		if !ok || base == "" {
 			continue
 		}
-		if _, isText := value.(string); value != nil && !isText {
+		if _, isText := value.(string); value != nil && !isText && text != "none" {
 			text += " " + u.unit
 		}
 		return strings.ReplaceAll(base, "_", " "), text

@@ -34,6 +34,7 @@ func (f Format) Write(w io.Writer, r *finding.Report) error {
 		section(p, r, s, names)
 	}
 	fromMemory(p, r)
+	observations(p, r)
 	if len(r.Remarks) > 0 {
 		p.heading(bold, "Remarks")
 		for _, remark := range r.Remarks {

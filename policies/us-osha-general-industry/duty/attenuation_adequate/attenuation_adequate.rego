@@ -3,7 +3,8 @@
 # description: >-
 #   The attenuation of protectors is evaluated for the noise in which they are worn, by a method of Appendix B. Under the
 #   protector the 8-hour average is 90 dBA or less where paragraph (b) requires protectors, and 85 dBA or less for an
-#   employee who has had a standard threshold shift. Half the attenuation is shown for information and decides nothing.
+#   employee who has had a standard threshold shift. Half the attenuation, deratings, fit tests, two protectors worn
+#   together and a part of the time without them are shown for information and decide nothing.
 # custom:
 #   cite: 29 CFR 1910.95(j)(1)-(3), Appendix B
 #   subject: worker
@@ -53,8 +54,14 @@ estimate := {
 		"working": input.protection.working,
 		"with_half_the_attenuation_dba": input.protection.halved_db,
 		"personal_attenuation_rating_db": input.protection.par_db,
+		"for_information": [in_words(other) | some other in input.protection.information],
 	},
 }
+
+# An estimate by another method, which decides nothing, with how its formula was seen.
+in_words(other) := sprintf("%s: %s", [other.method, other.working]) if {
+	other.mark == null
+} else := sprintf("%s: %s (%s)", [other.method, other.working, other.mark])
 
 said := "the level under the protector cannot be estimated" if {
 	input.protection.under_db == null

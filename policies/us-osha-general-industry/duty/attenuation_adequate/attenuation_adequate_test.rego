@@ -9,7 +9,10 @@ formerly := [{"from": "2022-01-01", "to": "2023-01-01", "current": false}]
 
 protection := {
 	"date": "2024-01-10", "ref": "protector_issue/P1", "protector": "P1", "exposure_dba": 100, "under_db": 88,
-	"halved_db": 94, "par_db": null, "method": "Appendix B(ii)", "missing": [], "working": "100 - (19 - 7) = 88 dBA",
+	"halved_db": 94, "par_db": null, "method": "Appendix B(ii)", "missing": [], "working": "100 - (19 - 7) = 88 dBA", "information": [
+		{"method": "half the attenuation", "level_db": 94, "working": "100 - 6 = 94 dB", "mark": null},
+		{"method": "worn for 50 % of the time", "level_db": 97.3, "working": "97.3 dBA", "mark": "from memory"},
+	],
 }
 
 worker(limit, shift) := {
@@ -35,6 +38,16 @@ test_after_a_shift_the_lower_target_counts_alone if {
 test_half_the_attenuation_is_only_shown if {
 	obligation(worker(now, [])).facts.with_half_the_attenuation_dba == 94
 	{o.value | some o in attenuation_adequate.obligations} == {88} with input as worker(now, [])
+}
+
+test_other_methods_are_only_shown if {
+	every shift in [[], now] {
+		obligation(worker(now, shift)).value == 88
+		obligation(worker(now, shift)).facts.for_information == [
+			"half the attenuation: 100 - 6 = 94 dB",
+			"worn for 50 % of the time: 97.3 dBA (from memory)",
+		]
+	}
 }
 
 test_no_estimate if {

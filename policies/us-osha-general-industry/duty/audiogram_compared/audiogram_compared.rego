@@ -21,6 +21,7 @@ obligations contains {
 	"key": test.id,
 	"on": test.date,
 	"because": [test.ref, baseline],
+	"health": test.hearing,
 	"holds": true,
 	"note": sprintf("the audiogram of %s was compared with the baseline", [test.date]),
 	"facts": {"compared_on": test.compared_on},
@@ -35,6 +36,7 @@ obligations contains {
 	"key": test.id,
 	"on": test.date,
 	"because": [test.ref, baseline],
+	"health": test.hearing,
 	"holds": false,
 	"note": sprintf("no comparison of the audiogram of %s with the baseline is on record", [test.date]),
 } if {
@@ -48,6 +50,7 @@ obligations contains {
 	"key": test.id,
 	"on": test.date,
 	"because": [test.ref, baseline],
+	"health": test.hearing,
 	"holds": null,
 	"missing": test.cannot_compare,
 	"note": sprintf("the audiogram of %s cannot be compared with the baseline", [test.date]),

@@ -13,6 +13,7 @@ worker(change) := {
 			"to_compare": true,
 			"compared_on": null,
 			"cannot_compare": [],
+			"hearing": {"left_db": 5},
 		},
 		change,
 	)],
@@ -29,6 +30,7 @@ test_compared if {
 	found.holds == true
 	found.key == "a2"
 	found.facts.compared_on == "2024-02-09"
+	found.health == {"left_db": 5}
 	found.because == ["audiogram/a2", "audiogram/a1"]
 }
 

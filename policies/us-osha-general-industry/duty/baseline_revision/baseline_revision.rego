@@ -38,6 +38,7 @@ obligations contains {
 	"on": again.date,
 	"note": "the next test shows the shift again",
 	"facts": {"ears": again.ears},
+	"health": again.hearing,
 	"because": [link.ref | some link in [again.shift, again, again.opinion]; link != null],
 } if {
 	some again in input.persistent

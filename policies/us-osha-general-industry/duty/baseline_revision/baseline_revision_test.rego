@@ -26,6 +26,7 @@ shown_again(opinion) := object.union(nobody, {"persistent": [{
 	"shift": {"date": "2024-03-01", "ref": "audiogram/a2"},
 	"ears": "left",
 	"opinion": opinion,
+	"hearing": {"left_db": 12},
 }]})
 
 obligation(w) := only if {
@@ -81,6 +82,7 @@ test_shift_shown_again_asks_for_a_judgement if {
 	found.key == "persistence/2025-03-01/left"
 	found.by == null
 	found.of == "physician, otolaryngologist or audiologist"
+	found.health == {"left_db": 12}
 }
 
 test_judgement_on_record if {

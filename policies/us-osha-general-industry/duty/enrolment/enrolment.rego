@@ -21,7 +21,10 @@ import rego.v2
 obligations contains {
 	"holds": false,
 	"note": "exposure is at or above the action level, but the employer's roll leaves the worker out of the program",
-	"facts": {"exposed_since": min([stretch.from | some stretch in input.enrolled; stretch.current])},
+	"facts": {
+		"exposed_since": min([stretch.from | some stretch in input.enrolled; stretch.current]),
+		"working": input.exposure_working,
+	},
 	"because": array.concat([sprintf("worker/%s", [input.id])], deciding),
 } if {
 	left_out
@@ -31,7 +34,10 @@ obligations contains {
 	"holds": null,
 	"missing": ["an exposure that can be held against the action level"],
 	"note": sprintf("it is not known whether exposure reaches the action level: %s", [concat("; ", reasons)]),
-	"facts": {"not_known": [{"from": stretch.from, "to": stretch.to} | some stretch in unknown]},
+	"facts": {
+		"not_known": [{"from": stretch.from, "to": stretch.to} | some stretch in unknown],
+		"working": input.exposure_working,
+	},
 	"because": deciding,
 } if {
 	not left_out
@@ -41,7 +47,7 @@ obligations contains {
 obligations contains {
 	"holds": true,
 	"note": "the records show for the whole time whether exposure reaches the action level",
-	"facts": {"stretches_in_program": count(input.enrolled)},
+	"facts": {"stretches_in_program": count(input.enrolled), "working": input.exposure_working},
 	"because": deciding,
 } if {
 	not left_out

@@ -13,6 +13,7 @@ known := {
 	"enrolled": [today],
 	"exposure_unknown": {"action": [], "limit": []},
 	"exposures": [{"ref": "measurement/m1"}, {"ref": null}, {"ref": "measurement/m1"}],
+	"exposure_working": ["from 2020-01-01 on; measurement/m1", "dose 75 % measured"],
 }
 
 unknown := object.union(known, {
@@ -30,6 +31,12 @@ test_exposure_is_known if {
 	finding := the_finding(known)
 	finding.holds == true
 	finding.because == ["measurement/m1"]
+}
+
+test_working_is_shown if {
+	every worker in [known, unknown, object.union(known, {"on_roll": false})] {
+		the_finding(worker).facts.working == ["from 2020-01-01 on; measurement/m1", "dose 75 % measured"]
+	}
 }
 
 test_exposure_is_known_and_low if the_finding(object.union(known, {"enrolled": []})).holds == true

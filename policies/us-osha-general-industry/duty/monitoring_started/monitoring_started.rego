@@ -18,6 +18,7 @@ obligations contains {
 	"holds": true,
 	"on": input.first_survey.date,
 	"because": [input.first_survey.ref],
+	"facts": object.union(spread, {"doubts": doubts}),
 } if {
 	surveyed
 }
@@ -59,5 +60,20 @@ not_owed contains "nothing suggests noise at the action level" if {
 }
 
 surveyed if input.first_survey != null
+
+# For information: the statistics of the results that count now, and figures that cannot all be right.
+default spread := {}
+
+spread := object.union(
+	object.remove(input.statistics, ["warnings"]),
+	{"working": array.concat(input.statistics.working, input.statistics.warnings)},
+) if {
+	input.statistics != null
+}
+
+doubts := [sprintf("%s: %s", [measurement.id, doubt]) |
+	some measurement in input.measurements
+	some doubt in measurement.doubts
+]
 
 measured if count(input.measurements) > 0

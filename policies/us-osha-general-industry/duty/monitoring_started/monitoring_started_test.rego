@@ -3,7 +3,7 @@ package duty.monitoring_started_test
 import data.duty.monitoring_started
 import rego.v2
 
-group := {"suspected_noisy": true, "first_survey": null, "measurements": [], "workers": 12}
+group := {"suspected_noisy": true, "first_survey": null, "measurements": [], "workers": 12, "statistics": null}
 
 survey := {"date": "2024-03-05", "ref": "measurement/m1"}
 
@@ -15,6 +15,21 @@ test_suspected_and_never_measured if {
 }
 
 test_surveyed if holds(object.union(group, {"first_survey": survey})) == {true}
+
+test_statistics_and_doubts_are_shown if {
+	dossier := object.union(group, {
+		"first_survey": survey,
+		"statistics": {"n": 3, "mean_dba": 86.2, "working": ["n = 3"], "warnings": ["fewer than 6"]},
+		"measurements": [{"id": "m1", "doubts": ["cannot be"]}, {"id": "m2", "doubts": []}],
+	})
+	some o in monitoring_started.obligations with input as dossier
+	o.facts == {"n": 3, "mean_dba": 86.2, "working": ["n = 3", "fewer than 6"], "doubts": ["m1: cannot be"]}
+}
+
+test_without_statistics if {
+	some o in monitoring_started.obligations with input as object.union(group, {"first_survey": survey})
+	o.facts == {"doubts": []}
+}
 
 test_survey_counts_whatever_was_suspected if {
 	every suspicion in [true, false, null] {
