@@ -123,6 +123,7 @@ func (b *Builder) results(w *WorkerRecords, pieces []stretch, refs Refs) []Resul
 	channel := b.channels.index(b.Measures.Exposure.Levels[level].Channel)
 	out := []Result{}
 	seen := map[*result]bool{}
+	days := map[Date]bool{}
 	for _, p := range pieces {
 		k := p.on[channel]
 		src := k.src
@@ -132,19 +133,73 @@ func (b *Builder) results(w *WorkerRecords, pieces []stretch, refs Refs) []Resul
 		if answer, _ := b.reaches(level, k.bounds, max(p.From, 1)); answer != record.Yes {
 			continue
 		}
-		seen[src] = true
+		seen[src], days[src.day] = true, true
 		r := Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: max(src.day, p.From)}
 		shown := b.channels.level(channel, &k)
 		r.Dose, r.LevelDBA = shown.DosePct, shown.LevelDBA
-		for _, n := range w.Notices {
-			if n.About == "exposure" && n.Date >= src.day && (n.MeasurementID != "" && n.MeasurementID == src.id || n.MeasurementID == "" && n.Date >= r.Since) {
-				r.Notice = link(refs, n, n.Date)
-				break
-			}
-		}
 		out = append(out, r)
 	}
+	if b.Measures.Exposure.Several == "highest" {
+		out = b.otherResults(out, w, pieces, days, refs)
+	}
+	for i := range out {
+		out[i].Notice = b.resultNotice(w, &out[i], refs)
+	}
 	return out
+}
+
+// otherResults adds the results of the worker's groups that reach the enrolling level but decide no stretch,
+// since a higher one stands: the worker is to be told of them, too. Of a day's results the highest is taken.
+func (b *Builder) otherResults(out []Result, w *WorkerRecords, pieces []stretch, days map[Date]bool, refs Refs) []Result {
+	level := b.Measures.Exposure.Enrols
+	channel := b.channels.index(b.Measures.Exposure.Levels[level].Channel)
+	for _, a := range w.Assignments {
+		h := b.histories[a.Group]
+		if h == nil {
+			continue
+		}
+		for _, r := range h.results {
+			if !r.day.Known() || days[r.day] || !inclusive(a.From, a.To).Contains(r.day) || stretchOn(pieces, r.day) == nil {
+				continue
+			}
+			best, src := b.channels.highest(h.results, channel, r.day, r.day)
+			if src == nil {
+				continue
+			}
+			if answer, _ := b.reaches(level, best, r.day); answer != record.Yes {
+				continue
+			}
+			days[r.day] = true
+			shown := b.channels.level(channel, &known{bounds: best, src: src})
+			out = append(out, Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: src.day, Dose: shown.DosePct, LevelDBA: shown.LevelDBA})
+		}
+	}
+	slices.SortStableFunc(out, func(x, y Result) int { return int(x.Since) - int(y.Since) })
+	return out
+}
+
+// resultNotice finds the notice of a result: one that names a measurement of that day, or names none and
+// was given since the result concerns the worker.
+func (b *Builder) resultNotice(w *WorkerRecords, r *Result, refs Refs) *Link {
+	ids := []string{r.ID}
+	for _, a := range w.Assignments {
+		if h := b.histories[a.Group]; h != nil {
+			for _, other := range h.results {
+				if other.day == r.Date {
+					ids = append(ids, other.id)
+				}
+			}
+		}
+	}
+	for _, n := range w.Notices {
+		if n.About != "exposure" || n.Date < r.Date {
+			continue
+		}
+		if n.MeasurementID != "" && slices.Contains(ids, n.MeasurementID) || n.MeasurementID == "" && n.Date >= r.Since {
+			return link(refs, n, n.Date)
+		}
+	}
+	return nil
 }
 
 // recordLacks lists what the audiometric record of a test lacks of the contents that a law may ask for.
