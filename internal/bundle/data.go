@@ -77,6 +77,9 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 			problems.Errorf(at, "Correct the channel", "the channel %s %v", name, err)
 		}
 	}
+	if m.Exposure.Several == "sampled" && m.Exposure.Strategy == "" {
+		problems.Errorf(at, "Give exposure.strategy: job or full_day", "exposure takes several results by sampling and names no strategy")
+	}
 	for _, p := range checkSchemes(&m.Hearing) {
 		problems.Errorf(at, "Correct hearing in the measures", "%s", p)
 	}

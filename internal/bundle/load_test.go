@@ -44,6 +44,7 @@ func TestLoaderRefuses(t *testing.T) {
 		"a paragraph without account":              {"small/paragraphs/data.yaml", ", checked: [posting]", "", "is not accounted for"},
 		"a paragraph with an unknown duty":         {"small/paragraphs/data.yaml", "[posting]", "[posting, poster]", `checked by "poster"`},
 		"a level with an unknown parameter":        {"small/measures/data.yaml", "at_least: dose", "at_least: doze", `names the parameter "doze"`},
+		"samples without a strategy":               {"small/measures/data.yaml", "several: highest", "several: sampled", "names no strategy"},
 		"a shift without amount":                   {"small/measures/data.yaml", "at_least: shift, ", "", "hearing.shift needs either at_least or above"},
 		"a shift of a level":                       {"small/measures/data.yaml", "shift: {rule", "shift: {of: level, rule", "but a shift is a change"},
 		"another scheme with an unknown parameter": {"small/measures/data.yaml", "professionals: []", "others: [{name: warning, rule: any, frequencies: [2000], at_least: shifty}], professionals: []", `hearing.others.warning names the parameter "shifty"`},

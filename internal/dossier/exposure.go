@@ -184,7 +184,7 @@ func (h *history) knownOn(channel int, day Date) known {
 		}
 		return known{bounds: d, src: src, note: "taken backwards from the first measurement, of " + r.day.String()}
 	}
-	return known{bounds: unknown, reason: h.c.whyNone(h.results, channel, short)}
+	return known{bounds: unknown, reason: h.c.whyNone(h.results, channel, h.c.shortOf(h.results, channel, last.day, h.c.asOf))}
 }
 
 // spanOf gives the first day whose results count together with those of a day, where that day is the first to

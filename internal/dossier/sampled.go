@@ -54,9 +54,12 @@ func (c *channels) takeSample(r *reading, m *record.Measurement, at workplace) {
 		note = "the length of the shift is not recorded"
 	}
 	if note != "" {
-		r.notes = append(r.notes, note)
+		if r.sample == nil {
+			r.notes = append(r.notes, note)
+		}
 		return
 	}
+	r.notes = nil // another row of the measurement may lack what this one has
 	if r.sample == nil || m.LAeqDBA.Value > r.sample.level {
 		r.sample = &sample{m.LAeqDBA.Value, shift.Value, m.RunMinutes.Value, m, at}
 	}

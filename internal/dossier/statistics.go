@@ -159,7 +159,7 @@ func (s *Statistics) exceed(g acoustics.Group) {
 	s.Exceedance = record.Num(100 * share)
 	line := fmt.Sprintf("share above %.1f dBA = 1 − Φ((%.1f − %.2f) / %.2f) = %.1f %%", s.Limit.Value, s.Limit.Value, g.Mean, g.SD, 100*share)
 	if g.SD == 0 {
-		line = fmt.Sprintf("share above %.1f dBA = %.0f %%, as all levels are the same", s.Limit.Value, 100*share)
+		line = fmt.Sprintf("share above %.1f dBA = %.0f %%", s.Limit.Value, 100*share)
 	}
 	if most, err := g.ExceedanceLimit(s.Limit.Value, confidence); err == nil {
 		s.ExceedanceLimit = record.Num(100 * most)

@@ -188,7 +188,7 @@ func (h *history) withOwn(channel int, k known, own []*result, day Date) known {
 	}
 	if src == nil {
 		if k.src == nil && len(own) > 0 && !slices.ContainsFunc(own, func(r *result) bool { return r.usable(channel) }) {
-			k.reason = h.whyNoOwn(channel, k.reason, own, from, day)
+			k.reason = h.whyNoOwn(channel, k.reason, own, from)
 		}
 		return k
 	}
@@ -201,11 +201,11 @@ func (h *history) withOwn(channel int, k known, own []*result, day Date) known {
 }
 
 // whyNoOwn says why neither the group nor any of the worker's own results tells the exposure on a channel.
-func (h *history) whyNoOwn(channel int, reason string, own []*result, from, to Date) string {
+func (h *history) whyNoOwn(channel int, reason string, own []*result, from Date) string {
 	if !h.c.sampled(channel) {
 		return h.c.whyNone(slices.Concat(h.results, own), channel, "")
 	}
-	mine := h.c.whyNone(own, channel, h.c.shortOf(own, channel, from, to))
+	mine := h.c.whyNone(own, channel, h.c.shortOf(own, channel, from, h.c.asOf))
 	return strings.Join(distinct([]string{reason, "of the worker's own measurements: " + mine}), "; ")
 }
 
