@@ -14,6 +14,7 @@ func levelMeasures(several string) dossier.Measures {
 	m := osha().Measures
 	channel := dossier.Channel{Kind: dossier.LevelChannel}
 	m.Exposure.Channels = map[string]dossier.Channel{"action": channel, "limit": channel}
+	m.Exposure.Levels = map[string]dossier.Threshold{"action": m.Exposure.Levels["action"]} // the law has one level
 	m.Exposure.Several, m.Exposure.Strategy, m.Exposure.Decision = several, "full_day", "best"
 	return m
 }

@@ -156,7 +156,7 @@ type Protection struct {
 	Missing        []string      `json:"missing" doc:"what the estimate lacks"`
 	Working        string        `json:"working" doc:"the sum, with its numbers"`
 	Mark           string        `json:"mark" enum:"from memory|secondary source" doc:"how the formula was seen; null where it was read in the law"`
-	Information    []Estimate    `json:"information" doc:"estimates by other methods; they decide nothing"`
+	Information    []Estimate    `json:"information" doc:"estimates by other methods, which decide nothing; given where the law may ask how much the protector leaves"`
 }
 
 // Estimate is a figure beside the one that decides.

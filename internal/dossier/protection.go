@@ -1,6 +1,11 @@
 package dossier
 
-import "hearduty/internal/record"
+import (
+	"slices"
+
+	"hearduty/internal/calendar"
+	"hearduty/internal/record"
+)
 
 // atHand gives the protectors that a worker has on a day, in the order in which they were handed over.
 func atHand(issues []*record.ProtectorIssue, day Date) []*record.ProtectorIssue {
@@ -14,8 +19,8 @@ func atHand(issues []*record.ProtectorIssue, day Date) []*record.ProtectorIssue 
 }
 
 // protection gives the protector at hand on the as-of day, the latest one handed over, and what it leaves
-// of the noise.
-func (b *Builder) protection(w *WorkerRecords, now *stretch, h *hearing, refs Refs) *Protection {
+// of the noise. Estimates by other methods are added if inform is set.
+func (b *Builder) protection(w *WorkerRecords, now *stretch, h *hearing, inform bool, refs Refs) *Protection {
 	held := atHand(w.Issues, b.AsOf)
 	if len(held) == 0 {
 		return nil
@@ -28,8 +33,33 @@ func (b *Builder) protection(w *WorkerRecords, now *stretch, h *hearing, refs Re
 	test := b.fit(p, w, issue, h, refs)
 	noise := b.noiseOf(now)
 	b.attenuate(p, noise)
-	p.Information = b.information(p, noise, held, test)
+	p.Information = []Estimate{}
+	if inform {
+		p.Information = b.information(p, noise, held, test)
+	}
 	return p
+}
+
+// attenuationMatters says whether a law may ask how much a protector leaves of the noise: on the as-of day the
+// worker is, or may be, at an exposure level beyond the one that enrols, or a shift stands. Where the law has
+// but one level, being at that level is enough.
+func (b *Builder) attenuationMatters(d *Worker) bool {
+	for _, level := range b.levels {
+		if level == b.Measures.Exposure.Enrols && len(b.levels) > 1 {
+			continue
+		}
+		for _, s := range d.Exposed[level] {
+			if s.Current {
+				return true
+			}
+		}
+		for _, o := range d.ExposureUnknown[level] {
+			if (calendar.Spell{From: o.From, To: o.To}).Contains(b.AsOf) {
+				return true
+			}
+		}
+	}
+	return slices.ContainsFunc(d.AfterShift, func(s Spell) bool { return s.Current })
 }
 
 // fit finds the initial fitting and the latest fit test of the model since it was handed over.

@@ -46,7 +46,7 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 	d.Enrolled = b.enrolled(w, h, enrolled, refs)
 	d.Results = b.results(w, pieces, refs)
 	now := stretchOn(pieces, b.AsOf)
-	d.Protection = b.protection(w, now, h, refs)
+	d.Protection = b.protection(w, now, h, b.attenuationMatters(d), refs)
 	d.Wear = b.wear(w, now, refs)
 	d.Training, d.ProtectorTraining = b.training(w, refs)
 	return &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, enrolled, refs), Refs: refs, Observations: h.observations()}
