@@ -23,6 +23,9 @@ type Ground struct {
 	Measures  Measures
 	Law       Law
 	AsOf      Date
+	// KeepRecords says whether the dossiers of instruments, rooms and testers hold the whole records of tests,
+	// to be shown in an explanation. Without it they hold id, day and origin only, which saves memory.
+	KeepRecords bool
 
 	channels  channels
 	levels    []string // names of the exposure levels, in order

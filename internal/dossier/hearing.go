@@ -39,7 +39,7 @@ type Audiogram struct {
 	EarsWithResult int           `json:"ears_with_result" doc:"number of ears with any result"`
 	// Schemes has one entry for each of the other schemes of the bundle's measures.
 	Schemes map[string]Judged `json:"schemes" doc:"what the other schemes of the bundle say of the test"`
-	Hearing *Hearing          `json:"hearing" doc:"the audiometric figures of the comparison; null if the test is not to be compared"`
+	Hearing *Hearing          `json:"hearing" doc:"the audiometric figures of the comparison; null if the test is not to be compared, or figures are not shown"`
 }
 
 // Judged says what a scheme finds in the ears of one test.

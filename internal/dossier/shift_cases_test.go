@@ -24,6 +24,8 @@ func TestShiftCasesThroughTheDossier(t *testing.T) {
 	defer f.Close()
 	lines, err := csv.NewReader(f).ReadAll()
 	require.NoError(t, err)
+	shown := osha().Measures
+	shown.Hearing.Sums = true // figures stand with every test only where they are shown
 	for _, line := range lines[1:] {
 		r := map[string]string{}
 		for i, column := range lines[0] {
@@ -40,7 +42,7 @@ func TestShiftCasesThroughTheDossier(t *testing.T) {
 		w := hired("2003-01-01")
 		w.Sex, w.BirthDate = r["sex"], day("1980-01-01")
 		for _, corrected := range []bool{false, true} {
-			d := asked{asOf: "2040-01-01", choices: map[string]any{"age_correction": corrected}}.judge(t,
+			d := asked{asOf: "2040-01-01", measures: shown, choices: map[string]any{"age_correction": corrected}}.judge(t,
 				w, assigned("g1", "2003-01-01"), group("g1"), measured("m1", "g1", "2003-01-01", 75),
 				audiogram("a0", on("age_baseline", 20), "baseline", levels("baseline_2k3k4k"), ear(10)),
 				audiogram("a1", on("age_current", 40), "periodic", levels("current_2k3k4k"), ear(10))).worker()
@@ -57,7 +59,7 @@ func TestShiftCasesThroughTheDossier(t *testing.T) {
 			assert.InDelta(t, mustFloat(t, r["shift_avg"]), h.Left.Value, 5.1e-5, r["id"])
 			assert.InDelta(t, mustFloat(t, r["shift_adjusted"]), h.LeftCorrected.Value, 5.1e-5, r["id"])
 			assert.InDelta(t, mustFloat(t, r["current_avg"]), h.LeftLevel.Value, 5.1e-5, r["id"])
-			assert.Empty(t, h.Working, "sums only where they are asked for")
+			assert.NotEmpty(t, h.Working)
 		}
 	}
 }

@@ -241,8 +241,11 @@ func (h *hearing) audiograms(compared map[*test]*comparison, lacks func(*test) [
 			a.ReplacedBy = t.replacedBy.ref
 		}
 		if c := compared[t]; c != nil {
-			figures := h.figures(c)
-			a.CannotCompare, a.Hearing = c.missing(), &figures
+			a.CannotCompare = c.missing()
+			if h.b.Measures.Hearing.Sums {
+				figures := h.figures(c)
+				a.Hearing = &figures
+			}
 			switch {
 			case c.shifted():
 				a.Problem = "a threshold shift"

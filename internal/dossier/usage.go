@@ -34,10 +34,25 @@ type used struct {
 	days           map[Date]*useDay
 }
 
-// useDay is one day of use.
+// useDay is one day of use. Of its tests the first by id is remembered: all of its record where the builder
+// keeps records, else its id and origin.
 type useDay struct {
 	tests, workers int
-	first          *record.Audiogram // the first by id
+	id             string
+	at             record.Origin
+	rec            *record.Audiogram
+}
+
+// take remembers a test of the day if its id comes first.
+func (d *useDay) take(a *record.Audiogram, keep bool) {
+	d.tests++
+	if d.id != "" && a.AudiogramID >= d.id {
+		return
+	}
+	d.id, d.at = a.AudiogramID, a.Origin
+	if keep {
+		d.rec = a
+	}
 }
 
 type logYear struct {
@@ -112,14 +127,11 @@ func (u *Usage) addTests(b *Builder, w *WorkerRecords) {
 			}
 			day := use.days[a.Date]
 			if day == nil {
-				day = &useDay{first: a}
+				day = &useDay{}
 				use.days[a.Date] = day
 			}
 			use.tests++
-			day.tests++
-			if a.AudiogramID < day.first.AudiogramID {
-				day.first = a
-			}
+			day.take(a, b.KeepRecords)
 			if seen[use] == nil {
 				seen[use] = map[Date]bool{}
 				use.workers++
@@ -196,7 +208,15 @@ func (u *used) sortedDays() []Date {
 
 // link points to the first test of a day.
 func (u *used) link(refs Refs, day Date) Link {
-	return Link{Date: day, Ref: refs.Of(u.days[day].first)}
+	d := u.days[day]
+	if _, ok := refs.Record("audiogram/" + d.id); ok {
+		return Link{Date: day, Ref: "audiogram/" + d.id}
+	}
+	rec := d.rec
+	if rec == nil {
+		rec = &record.Audiogram{Meta: record.Meta{Origin: d.at}, AudiogramID: d.id, Date: day}
+	}
+	return Link{Date: day, Ref: refs.Of(rec)}
 }
 
 // Tally counts what happened on a day: hearing tests, and workers tested.

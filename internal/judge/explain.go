@@ -47,7 +47,7 @@ type explained struct {
 // Explain judges the program again and shows how one finding came about. The id may be shortened to its
 // beginning, as long as one finding alone has it. It returns ErrNoFinding if none has.
 func Explain(ctx context.Context, o Options, id string) (*Explanation, error) {
-	o.All = true
+	o.All, o.keepRecords = true, true
 	c, err := newCheck(ctx, o)
 	if err != nil {
 		return nil, err

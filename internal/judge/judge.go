@@ -33,6 +33,8 @@ type Options struct {
 	Parallel     int           // number of subjects judged at a time; 0 for one a processor
 	Version      string        // of the tool, for the report
 
+	// keepRecords is set where whole records are to be shown.
+	keepRecords bool
 	// read, where set, takes the place of reading the program's files.
 	read func(ctx context.Context, emit func(record.Record) error) (*intake.Ledger, error)
 }
@@ -176,6 +178,7 @@ func (c *check) prepare(ctx context.Context) error {
 				measures := b.Measures
 				measures.Hearing.Sums = c.HealthDetail
 				engines[id], grounds[id] = engine, dossier.NewGround(registers, measures, b, c.AsOf)
+				grounds[id].KeepRecords = c.keepRecords
 				c.used = append(c.used, b)
 			}
 			place := dossier.Place{ID: s.ID, Country: s.Country, Region: s.Region}
