@@ -73,8 +73,8 @@ func Main(args []string, stdin io.Reader, stdout, stderr io.Writer, env Env) int
 // Memory that a run aims to stay below, and how much garbage may gather before that, in percent of what is
 // in use. Judging makes much garbage and keeps little.
 const (
-	memoryLimit    = 330 << 20
-	garbagePercent = 200
+	memoryLimit    = 345 << 20
+	garbagePercent = 300
 )
 
 // tuneMemory sets both, unless whoever runs the program has set them for Go in the environment.

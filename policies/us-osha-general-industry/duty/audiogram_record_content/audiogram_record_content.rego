@@ -35,16 +35,9 @@ obligations contains {
 }
 
 # Tests under the program: those made while in it, and the baseline.
-program_tests := [test | some test in input.audiograms; under_the_program(test)]
+program_tests := [test | some test in input.audiograms; test.in_program]
 
-under_the_program(test) if test.enrolled
-
-under_the_program(test) if {
-	input.baseline.in_program
-	test.ref == input.baseline.ref
-}
-
-incomplete := [test | some test in program_tests; count(test.record_lacks) > 0]
+incomplete := [test | some test in program_tests; test.record_lacks != []]
 
 lacking := sort({lack | some test in incomplete; some lack in test.record_lacks})
 

@@ -3,14 +3,14 @@ package duty.audiogram_record_content_test
 import data.duty.audiogram_record_content as duty
 import rego.v2
 
-record_of(id, enrolled, lacks) := {
+record_of(id, in_program, lacks) := {
 	"id": id,
 	"ref": sprintf("audiogram/%s", [id]),
-	"enrolled": enrolled,
+	"in_program": in_program,
 	"record_lacks": lacks,
 }
 
-worker(tests) := {"baseline": {"ref": "audiogram/a1", "in_program": true}, "audiograms": tests}
+worker(tests) := {"audiograms": tests}
 
 obligation(w) := only if {
 	all := duty.obligations with input as w
@@ -19,14 +19,14 @@ obligation(w) := only if {
 }
 
 test_complete if {
-	found := obligation(worker([record_of("a1", false, []), record_of("a2", true, [])]))
+	found := obligation(worker([record_of("a1", true, []), record_of("a2", true, [])]))
 	found.holds == true
 	found.facts.audiograms == 2
 }
 
 test_contents_missing if {
 	found := obligation(worker([
-		record_of("a1", false, ["examiner"]),
+		record_of("a1", true, ["examiner"]),
 		record_of("a2", true, ["noise exposure assessment", "examiner"]),
 		record_of("a3", true, []),
 	]))
