@@ -19,11 +19,23 @@ func benchAudiograms() string {
 	var b strings.Builder
 	b.WriteString(strings.Join(table.Names(), ",") + "\n")
 	for i := range benchRows {
-		fmt.Fprintf(&b, "A-%06d,%06d,20%02d-03-%02d,periodic", i, i%1000, 10+i%15, 1+i%28)
-		for f := range 20 {
-			fmt.Fprintf(&b, ",%d", (i+f)%13*5)
+		known := map[string]string{
+			"audiogram_id": fmt.Sprintf("A-%06d", i), "worker_id": fmt.Sprintf("%06d", i%1000),
+			"date": fmt.Sprintf("20%02d-03-%02d", 10+i%15, 1+i%28), "purpose": "periodic", "audiometer_id": "AM-1", "room_id": "R-1",
+			"tester_id": "T-2", "quiet_hours": "14", "quiet_by_protectors": "no", "mobile": "no",
+			"determined_on": "2025-03-12", "reviewer": "AUD-1", "reviewed_on": "2025-03-12",
 		}
-		b.WriteString(",AM-1,R-1,T-2,14,no,no,2025-03-12,AUD-1,2025-03-12\n")
+		for f := range table.Fields {
+			if f > 0 {
+				b.WriteByte(',')
+			}
+			if table.Fields[f].Type == record.Hearing {
+				fmt.Fprintf(&b, "%d", (i+f)%13*5)
+				continue
+			}
+			b.WriteString(known[table.Fields[f].Name])
+		}
+		b.WriteByte('\n')
 	}
 	return b.String()
 }
