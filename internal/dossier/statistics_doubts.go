@@ -41,6 +41,17 @@ func listed(levels []float64) string {
 func doubts(rows []*record.Measurement) []string {
 	out := []string{}
 	var readings []acoustics.Reading
+	var peaks []acoustics.Peak
+	for _, m := range rows {
+		if m.PeakDB.Known && m.PeakWeighting != "" {
+			peaks = append(peaks, acoustics.Peak{Level: m.PeakDB.Value, Weighting: acoustics.Weighting(m.PeakWeighting)})
+		}
+	}
+	if len(peaks) > 1 {
+		if _, err := acoustics.HighestPeak(peaks); err != nil {
+			out = append(out, err.Error())
+		}
+	}
 	for _, m := range rows {
 		if !m.CriterionDB.Known || !m.ExchangeDB.Known || !m.DosePct.Known {
 			continue
