@@ -40,6 +40,7 @@ func TestLoaderRefuses(t *testing.T) {
 		"the environment":                          {rule, obligation, `{"holds": opa.runtime() == {}}`, "undefined function opa.runtime"},
 		"chance":                                   {rule, obligation, `{"holds": rand.intn("x", 2) == 0}`, "undefined function rand.intn"},
 		"an unused variable":                       {rule, obligation, "{\"holds\": true} if x := 1", "assigned var x unused"},
+		"unconfirmed shifts that no duty reads":    {"small/measures/data.yaml", "shift: {rule: mean,", "shift: {confirm: true, rule: mean,", "no duty looks at shifts that wait for one"},
 		"a syntax error":                           {rule, "obligations contains", "obligations contain", "posting.rego:1"},
 		"a paragraph without account":              {"small/paragraphs/data.yaml", ", checked: [posting]", "", "is not accounted for"},
 		"a paragraph with an unknown duty":         {"small/paragraphs/data.yaml", "[posting]", "[posting, poster]", `checked by "poster"`},

@@ -39,6 +39,7 @@ func (b *Bundle) readRules(all files, dir string, problems *diag.List) {
 			b.readDuty(module, file, string(all[file]), dir, problems)
 		}
 	}
+	b.checkConfirmation(dir, problems)
 	if len(b.Duties) == 0 {
 		problems.Errorf(diag.Position{File: dir}, "Add a folder under duty", "the bundle has no duties")
 	}
@@ -69,6 +70,16 @@ func (b *Bundle) readRules(all files, dir string, problems *diag.List) {
 	b.Compiler.Compile(modules)
 	if b.Compiler.Failed() {
 		addRegoErrors(problems, dir, b.Compiler.Errors)
+	}
+}
+
+// checkConfirmation asks a bundle whose shifts need a second test to look at those still without one, which
+// are no shifts yet and would pass in silence.
+func (b *Bundle) checkConfirmation(dir string, problems *diag.List) {
+	reads := func(d *Duty) bool { return strings.Contains(d.Text, "input.unconfirmed") }
+	if b.Measures.Hearing.Shift.Confirm && !slices.ContainsFunc(b.Duties, reads) {
+		problems.Errorf(diag.Position{File: path.Join(dir, "measures", "data.yaml")}, "Let a duty read input.unconfirmed, and ask for the second test",
+			"a shift of this bundle needs a second test, but no duty looks at shifts that wait for one")
 	}
 }
 

@@ -28,7 +28,22 @@ obligations contains {
 	some measurement in noisy
 }
 
-not_owed contains "no highest level on record, and no measurement at the action level, of how the group is now" if count(noisy) == 0
+obligations contains {
+	"value": null,
+	"at_most": "continuous_ceiling",
+	"note": "a highest continuous level is on record from before a change or control, and none since",
+	"missing": ["the highest continuous level as it is now"],
+	"because": [measurement.ref | some measurement in measured_before],
+	"facts": {"workers": input.workers},
+} if {
+	count(noisy) == 0
+	count(measured_before) > 0
+}
+
+not_owed contains "no highest level on record, and no measurement at the action level" if {
+	count(noisy) == 0
+	count(measured_before) == 0
+}
 
 said(measurement) := sprintf("the measurement of %s reaches the action level and does not give its highest continuous level", [measurement.date]) if {
 	measurement.max_dba == null
@@ -36,7 +51,9 @@ said(measurement) := sprintf("the measurement of %s reaches the action level and
 
 noisy := [measurement | some measurement in input.measurements; may_matter(measurement)]
 
-# A measurement of how it was before a change or control, after which the group was measured again, decides nothing now.
+# A level from before a change or control, after which the group was measured again, tells nothing of the group now.
+measured_before := [measurement | some measurement in input.measurements; not measurement.current; measurement.max_dba != null]
+
 may_matter(measurement) if {
 	measurement.current
 	measurement.max_dba != null

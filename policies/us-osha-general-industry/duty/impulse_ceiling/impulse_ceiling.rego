@@ -29,7 +29,7 @@ obligations contains {
 obligations contains {
 	"value": null,
 	"at_most": "impulse_ceiling",
-	"note": "impulses may matter in this group and no measurement has a peak level",
+	"note": "impulses may matter in this group and no measurement of how it is now has a peak level",
 	"missing": ["a peak level"],
 	"facts": {"workers": input.workers},
 } if {
@@ -41,10 +41,17 @@ not_owed contains "no impulse noise on record" if {
 	not peak_wanted
 }
 
-# A measurement of how it was before a change or control, after which the group was measured again, decides nothing now.
+# A peak from before a change or control, after which the group was measured again, tells nothing of the group now.
 with_peak := [measurement | some measurement in input.measurements; measurement.current; measurement.peak_db != null]
 
 peak_wanted if {
 	count(with_peak) == 0
-	input.varied == true
+	impulses_may_matter
+}
+
+impulses_may_matter if input.varied == true
+
+impulses_may_matter if {
+	some measurement in input.measurements
+	measurement.peak_db != null
 }
