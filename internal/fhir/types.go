@@ -1,0 +1,35 @@
+package fhir
+
+import "strings"
+
+// resourceTypes are the resource types of FHIR R4 (https://hl7.org/fhir/R4/codesystem-resource-types.html, by way of
+// public sources that list them; Parameters is among them though no reference can name it).
+var resourceTypes = wordSet(`Account ActivityDefinition AdverseEvent AllergyIntolerance Appointment AppointmentResponse
+AuditEvent Basic Binary BiologicallyDerivedProduct BodyStructure Bundle CapabilityStatement CarePlan CareTeam
+CatalogEntry ChargeItem ChargeItemDefinition Claim ClaimResponse ClinicalImpression CodeSystem Communication
+CommunicationRequest CompartmentDefinition Composition ConceptMap Condition Consent Contract Coverage
+CoverageEligibilityRequest CoverageEligibilityResponse DetectedIssue Device DeviceDefinition DeviceMetric DeviceRequest
+DeviceUseStatement DiagnosticReport DocumentManifest DocumentReference EffectEvidenceSynthesis Encounter Endpoint
+EnrollmentRequest EnrollmentResponse EpisodeOfCare EventDefinition Evidence EvidenceVariable ExampleScenario
+ExplanationOfBenefit FamilyMemberHistory Flag Goal GraphDefinition Group GuidanceResponse HealthcareService ImagingStudy
+Immunization ImmunizationEvaluation ImmunizationRecommendation ImplementationGuide InsurancePlan Invoice Library Linkage
+List Location Measure MeasureReport Media Medication MedicationAdministration MedicationDispense MedicationKnowledge
+MedicationRequest MedicationStatement MedicinalProduct MedicinalProductAuthorization MedicinalProductContraindication
+MedicinalProductIndication MedicinalProductIngredient MedicinalProductInteraction MedicinalProductManufactured
+MedicinalProductPackaged MedicinalProductPharmaceutical MedicinalProductUndesirableEffect MessageDefinition
+MessageHeader MolecularSequence NamingSystem NutritionOrder Observation ObservationDefinition OperationDefinition
+OperationOutcome Organization OrganizationAffiliation Parameters Patient PaymentNotice PaymentReconciliation Person
+PlanDefinition Practitioner PractitionerRole Procedure Provenance Questionnaire QuestionnaireResponse RelatedPerson
+RequestGroup ResearchDefinition ResearchElementDefinition ResearchStudy ResearchSubject RiskAssessment
+RiskEvidenceSynthesis Schedule SearchParameter ServiceRequest Slot Specimen SpecimenDefinition StructureDefinition
+StructureMap Subscription Substance SubstanceNucleicAcid SubstancePolymer SubstanceProtein SubstanceReferenceInformation
+SubstanceSourceMaterial SubstanceSpecification SupplyDelivery SupplyRequest Task TerminologyCapabilities TestReport
+TestScript ValueSet VerificationResult VisionPrescription`)
+
+func wordSet(words string) map[string]bool {
+	set := map[string]bool{}
+	for _, w := range strings.Fields(words) {
+		set[w] = true
+	}
+	return set
+}
