@@ -128,6 +128,7 @@ type NoResponse struct {
 
 // FHIR says how FHIR resources become audiograms.
 type FHIR struct {
+	WorkerFrom   string            `json:"worker_id_from,omitempty" enum:"identifier|patient_id" doc:"where the worker's id stands: an identifier of the patient, which is meant if left out, or the id of the Patient resource itself, as references hold it"`
 	WorkerSystem string            `json:"worker_id_system,omitempty" doc:"system of the patient's identifier that is the worker's id; may be left out if patients have one identifier"`
 	Purposes     []Coding          `json:"purposes,omitempty" doc:"codes that tell the purpose of the test"`
 	Ignore       []string          `json:"ignore_resources,omitempty" doc:"resource types that may stand in the file and are not wanted"`

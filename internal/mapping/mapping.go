@@ -1,9 +1,6 @@
 package mapping
 
 import (
-	"errors"
-
-	"hearduty/internal/diag"
 	"hearduty/internal/grid"
 	"hearduty/internal/record"
 )
@@ -13,18 +10,24 @@ type Map struct {
 	File  File
 	Shown string      // path relative to the program's folder
 	Kind  record.Kind // empty if the map leaves it to the program file
+
+	places *places // of the file's keys and values; nil for a map that comes from no file
 }
 
-// Load reads the map at path and checks it. Positions name it as shown. The map is nil if the list holds
-// an error.
-func Load(path, shown string) (*Map, diag.List) {
-	var l diag.List
-	l.Errorf(diag.Position{File: shown}, "Wait", "maps are not read yet")
-	return nil, l
+// Options gives the options with which the map wants its file opened. Quotes within cells are text.
+func (m *Map) Options() grid.Options {
+	o := grid.Options{Encoding: m.File.Encoding, Sheet: m.File.Sheet, Lenient: true}
+	switch m.File.Delimiter {
+	case "":
+	case "tab":
+		o.Delimiter = '\t'
+	case "pipe":
+		o.Delimiter = '|'
+	default:
+		o.Delimiter = m.File.Delimiter[0]
+	}
+	return o
 }
-
-// Options gives the options with which the map wants its file opened.
-func (m *Map) Options() grid.Options { return grid.Options{} }
 
 // Source gives rows of an export that were turned into cells of records.
 type Source interface {
@@ -33,13 +36,14 @@ type Source interface {
 	Next(*Out) error
 }
 
-// Out is what became of one row or, where records are gathered from several rows, of one record.
+// Out is what became of one row or, where records are gathered from several rows, of one record. It is used
+// again for the next row.
 type Out struct {
 	Line    int
 	Lines   []int    // further rows that belong to the record, in order
 	NotData string   // not empty: the row is no data, and why: header, blank, comment, footer, skipped, hidden, or the like
 	Records []Entry  // records of the row, one or several
-	Fault   *Fault   // why the row cannot be read; Records is then empty
+	Fault   *Fault   // why the row, or one of its several records, cannot be read; Records then has the others only
 	Remarks []Remark // what somebody should look at
 }
 
@@ -58,14 +62,8 @@ type Value struct {
 type Fault struct {
 	Column                           int
 	Field, Header, Read, Why, Remedy string
+	Also                             []string // further fields of the row whose cells cannot be read
 }
 
 // Remark is something about a row that somebody should look at. Rows that share one are counted together.
 type Remark struct{ Field, Why, Remedy string }
-
-// Bind finds the header in the file, settles what the data must settle, and gives the rows. What it says
-// of the file as a whole, such as columns that the map does not know, comes as warnings. The error is a
-// *grid.Fault if the file and the map do not fit.
-func (m *Map) Bind(f *grid.File, kind record.Kind) (Source, diag.List, error) {
-	return nil, nil, errors.New("maps are not read yet")
-}
