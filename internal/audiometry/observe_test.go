@@ -148,3 +148,23 @@ func TestSwappedEarsGiveSwappedObservations(t *testing.T) {
 		}
 	})
 }
+
+// TestVaried: near-normal hearing, which many share, is not varied.
+func TestVaried(t *testing.T) {
+	at := func(entries ...string) *audiometry.Ear { return ear(t, testedFrequencies, entries) }
+	for _, c := range []struct {
+		left, right *audiometry.Ear
+		want        bool
+	}{
+		{at("0", "5", "10", "15", "", "", ""), at("0", "0", "0", "0", "", "", ""), true},
+		{at("0", "5", "10", "10", "", "", ""), at("0", "0", "0", "15", "", "", ""), true},
+		{at("0", "5", "10", "10", "5", "0", "5"), at("0", "5", "0", "10", "5", "0", "5"), false},
+		{at("0", "5", "10", "NT", "5", "", ""), at("0", "5", "0", "10", "5", "", ""), false},
+		{at("0", "5", "10", "NR>100", "5", "", ""), at("0", "5", "0", "10", "5", "", ""), true},
+		{at("0", "5", "10", "15", "20", "", ""), at("0", "5", "20", "NT", "", "", ""), false},
+		{new(audiometry.Ear), new(audiometry.Ear), false},
+	} {
+		assert.Equal(t, c.want, audiometry.Varied(c.left, c.right))
+		assert.Equal(t, c.want, audiometry.Varied(c.right, c.left))
+	}
+}

@@ -62,6 +62,13 @@ func parseTenths(s, number string) (int16, error) {
 // scanTenths reads digits, with a sign and one decimal if present. Numbers too long to be a level give a
 // value out of range.
 func scanTenths(number string) (int, bool) {
+	if number != "" && len(number) <= 3 && allDigits(number) { // as most are
+		n := 0
+		for i := range len(number) {
+			n = 10*n + int(number[i]-'0')
+		}
+		return 10 * n, true
+	}
 	number, minus := strings.CutPrefix(strings.Replace(number, "\u2212", "-", 1), "-")
 	whole, fraction, point := strings.Cut(number, ".")
 	fraction = strings.TrimRight(fraction, "0")

@@ -1,5 +1,7 @@
 package audiometry
 
+import "slices"
+
 // The figures of the plausibility checks, in tenths of dB unless marked. They decide nothing: see observe.go
 // for the source of each check.
 const (
@@ -8,6 +10,7 @@ const (
 	highestUsual8000 = 1100
 	step             = 50
 	fewestToCompare  = 4 // frequencies that make a sameness worth a remark
+	fewestLevels     = 4 // different levels that make thresholds varied
 	farBetter        = 200
 	fewestBetter     = 2 // frequencies
 	repeatSpread     = 50
@@ -121,6 +124,29 @@ func identicalEarlier(t *Tested) (bool, []int) {
 		}
 	}
 	return false, nil
+}
+
+// Varied says whether the thresholds of a test are so varied that two people hardly have the same by chance:
+// four or more in each ear, and four or more different levels in all. Near-normal hearing, which many share, is
+// not (ours).
+func Varied(left, right *Ear) bool {
+	if levels(left) < fewestToCompare || levels(right) < fewestToCompare {
+		return false
+	}
+	var seen [fewestLevels]int16
+	n := 0
+	for _, e := range [2]*Ear{left, right} {
+		for _, x := range e {
+			if !x.hasLevel() || slices.Contains(seen[:n], x.Tenths) {
+				continue
+			}
+			seen[n] = x.Tenths
+			if n++; n == fewestLevels {
+				return true
+			}
+		}
+	}
+	return false
 }
 
 func levels(e *Ear) (n int) {

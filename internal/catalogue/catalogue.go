@@ -18,8 +18,8 @@ type Entry struct {
 	Text []byte
 }
 
-// All makes all schemas: one a record kind, one a dossier, the program file, the data files of a bundle,
-// and the report.
+// All makes all schemas: one a record kind, one a dossier, the program file and those beside it, the report,
+// and the data files of a bundle.
 func All() []Entry {
 	var out []Entry
 	for _, kind := range record.Kinds() {
@@ -29,7 +29,9 @@ func All() []Entry {
 		out = append(out, Entry{"dossier-" + kind, schema.DossierText(kind)})
 	}
 	out = append(out, Entry{"program", schema.Of(program.File{}, programOptions())})
+	out = append(out, mapFile())
 	out = append(out, Entry{"report", schema.Of(finding.Report{}, reportOptions())})
+	out = append(out, intakeFiles()...)
 	return append(out, bundleFiles()...)
 }
 
@@ -58,6 +60,9 @@ func reportOptions() schema.Options {
 		Types:       map[string]map[string]any{"Status": {"enum": finding.Statuses}},
 		Fields: map[string]map[string]any{
 			"Finding.topic":    {"enum": finding.Topics},
+			"Rate.part":        {"type": []string{"integer", "null"}},
+			"Rate.of":          {"type": []string{"integer", "null"}},
+			"Rate.percent":     {"type": []string{"number", "null"}},
 			"Finding.severity": {"enum": []string{"major", "minor"}},
 			"Subject.kind":     {"enum": schema.Subjects()},
 		},

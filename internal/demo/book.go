@@ -76,7 +76,7 @@ func (b *book) put(r record.Record) {
 	}
 }
 
-// write writes the program file and the records, those of a day in the order of their days.
+// write writes the program file and the records, those of a day in the order of their days, and then the same as exports.
 func (b *book) write(dir string) error {
 	if err := writeProgram(dir, demoProgram); err != nil {
 		return err
@@ -105,7 +105,10 @@ func (b *book) write(dir string) error {
 	rows(t, b.testers, nil)
 	rows(t, b.documents, func(r *record.Document) Date { return r.Date })
 	rows(t, b.controls, func(r *record.Control) Date { return r.Date })
-	return t.close()
+	if err := t.close(); err != nil {
+		return err
+	}
+	return b.writeExports(dir)
 }
 
 // rows writes the records of one kind, sorted by date unless on is nil.

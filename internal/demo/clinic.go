@@ -107,8 +107,20 @@ func deviation(db float64) *record.Deviation {
 // writeFunctionalChecks writes the check of the audiometer before the first test of each test day.
 func (c *clinic) writeFunctionalChecks(put func(record.Record)) {
 	for _, d := range slices.Sorted(maps.Keys(c.used)) {
-		put(&record.Calibration{InstrumentID: c.audiometer, Date: d, Type: "functional", Deviation: deviation(0), Result: "pass", By: c.tester(d)})
+		put(&record.Calibration{InstrumentID: c.audiometer, Date: d, Type: "functional", Deviation: heard(c.audiometer, d), Result: "pass", By: c.tester(d)})
 	}
+}
+
+// heard gives the deviations that a person with known hearing finds on a day: a step of 5 dB now and then.
+func heard(audiometer string, d Date) *record.Deviation {
+	found := deviation(0)
+	rng := dice(audiometer, d.String())
+	for i := range found {
+		if found[i].Known {
+			found[i].Value = []float64{-5, 0, 0, 0, 0, 5}[rng.IntN(6)]
+		}
+	}
+	return found
 }
 
 // writeRoom writes a survey of a test room in each June from one year to another, all within Table D-1.

@@ -59,6 +59,32 @@ func TestEveryFaultTripsItsDuty(t *testing.T) {
 	}
 }
 
+// TestEveryOddityIsObserved: and in the program without faults none of these kinds occurs, but for thresholds that
+// agree with an earlier test by chance.
+func TestEveryOddityIsObserved(t *testing.T) {
+	_, report := judged(t, testdata)
+	number := map[string]int{}
+	for _, o := range report.Observations {
+		require.NotRegexp(t, `[0-9]|dB|Hz`, o.Text)
+		for _, odd := range oddities {
+			if o.Kind == odd.kind && o.Site == "kiln-hill" && o.Subject.ID == odd.about {
+				number[odd.kind]++
+			}
+		}
+	}
+	for _, odd := range oddities {
+		require.Positive(t, number[odd.kind], "%s of %s: %s", odd.kind, odd.about, odd.why)
+	}
+	dir := t.TempDir()
+	require.NoError(t, harrowAndSlate().write(dir))
+	_, report = judged(t, dir)
+	for _, o := range report.Observations {
+		for _, odd := range oddities {
+			require.False(t, o.Kind == odd.kind && o.Kind != "identical_earlier", "%s of %s without a fault", o.Kind, o.Subject.ID)
+		}
+	}
+}
+
 func TestLarchStreetDoesEverythingInTime(t *testing.T) {
 	_, report := judged(t, testdata)
 	for _, f := range report.Findings {

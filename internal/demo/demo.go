@@ -2,8 +2,9 @@
 // status a finding can have, and programs of any size for measuring speed.
 //
 // The demo program is first made without a fault (firm.go, roster.go, career.go, clinic.go, papers.go).
-// Then each fault of the table in faults.go is planted at Kiln Hill. No name of a person or brand occurs,
-// no clock is read, and every random number comes from a fixed seed, so that two runs write the same bytes.
+// Then each fault of the table in faults.go and each oddity of faults_integrity.go is planted at Kiln Hill. No
+// name of a person or brand occurs, no clock is read, and every random number comes from a fixed seed, so that
+// two runs write the same bytes.
 package demo
 
 import (
@@ -28,12 +29,22 @@ var asOf = day("2026-06-30")
 // folder is made if there is none; one that holds anything is refused and left as it is.
 func Write(dir string) error {
 	return publish(dir, func(temporary string) error {
-		b := harrowAndSlate()
-		for _, f := range faults {
-			f.plant(b)
-		}
-		return b.write(temporary)
+		return planted().write(temporary)
 	})
+}
+
+// planted makes the program with all faults and oddities.
+func planted() *book {
+	b := harrowAndSlate()
+	for _, f := range faults {
+		f.plant(b)
+	}
+	for _, o := range oddities {
+		if o.plant != nil { // some come with another
+			o.plant(b)
+		}
+	}
+	return b
 }
 
 const demoProgram = `# The demo program of hearduty: an invented firm, invented workers, invented numbers.

@@ -93,19 +93,15 @@ func TestNothingStaysBehindWhenWritingFails(t *testing.T) {
 
 func TestEveryRecordKindIsPresent(t *testing.T) {
 	files := read(t, testdata)
-	require.Len(t, files, len(record.Kinds())+1)
 	for _, k := range record.Kinds() {
 		text := files["records/"+csvName(k)]
 		require.Greater(t, len(regexp.MustCompile(`(?m)^.+$`).FindAllString(text, 3)), 1, "%s has no row", k)
-		require.Contains(t, files["program.yaml"], "  - records/"+csvName(k)+"\n")
+		require.True(t, strings.Contains(files["program.yaml"], "  - records/"+csvName(k)+"\n"), k)
 	}
 }
 
 func TestNobodyAndNoBrandIsNamed(t *testing.T) {
-	b := harrowAndSlate()
-	for _, f := range faults {
-		f.plant(b)
-	}
+	b := planted()
 	worker := regexp.MustCompile(`^([KL]\d{4}|\d{6})$`)
 	for _, w := range b.workers {
 		require.Regexp(t, worker, w.WorkerID)

@@ -6,7 +6,14 @@ import (
 	"io/fs"
 	"os"
 	"path/filepath"
+	"slices"
 )
+
+// parts are what a program's folder may hold, the program file last.
+var parts = []string{"records", "exports", "maps", "exports.yaml", "program.yaml"}
+
+// optional are the parts that programs for measuring speed do not have.
+var optional = []string{"exports", "maps", "exports.yaml"}
 
 // publish lets fill write into a temporary folder within dir and moves the result into place only when
 // all of it is written, program.yaml last. Whatever fails, nothing half-written stays behind.
@@ -22,7 +29,9 @@ func publish(dir string, fill func(temporary string) error) (err error) {
 	defer func() {
 		os.RemoveAll(temporary)
 		if err != nil {
-			os.RemoveAll(filepath.Join(dir, "records"))
+			for _, name := range parts {
+				os.RemoveAll(filepath.Join(dir, name))
+			}
 			if made {
 				os.Remove(dir)
 			}
@@ -31,7 +40,10 @@ func publish(dir string, fill func(temporary string) error) (err error) {
 	if err := fill(temporary); err != nil {
 		return fmt.Errorf("cannot write the program into %s: %w", dir, cause(err))
 	}
-	for _, name := range []string{"records", "program.yaml"} {
+	for _, name := range parts {
+		if _, err := os.Stat(filepath.Join(temporary, name)); errors.Is(err, fs.ErrNotExist) && slices.Contains(optional, name) {
+			continue
+		}
 		if err := os.Rename(filepath.Join(temporary, name), filepath.Join(dir, name)); err != nil {
 			return fmt.Errorf("cannot write the program into %s: %w", dir, cause(err))
 		}

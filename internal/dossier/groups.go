@@ -240,7 +240,9 @@ func (b *Builder) SiteDossier(u *Usage) *File {
 	for _, year := range slices.Sorted(maps.Keys(u.logs)) {
 		d.LogYears = append(d.LogYears, b.logYear(year, u.logs[year], d.Documents, refs))
 	}
-	return &File{Kind: KindSite, ID: d.ID, Site: d.ID, Input: d, Series: map[string][]Link{}, Refs: refs}
+	file := &File{Kind: KindSite, ID: d.ID, Site: d.ID, Input: d, Series: map[string][]Link{}, Refs: refs}
+	u.observeSite(file)
+	return file
 }
 
 func (b *Builder) logYear(year int, y *logYear, documents []Document, refs Refs) LogYear {

@@ -36,8 +36,11 @@ func (b *Builder) Instruments(u *Usage) []*File {
 		}
 	}
 	var out []*File
+	siteAlike := oneDay(u.audiometers)
 	for _, id := range slices.Sorted(maps.Keys(ids)) {
-		out = append(out, b.instrument(id, u.audiometers[id], noise[id]))
+		file := b.instrument(id, u.audiometers[id], noise[id])
+		b.observeInstrument(file, id, u, siteAlike)
+		out = append(out, file)
 	}
 	return out
 }
@@ -265,6 +268,7 @@ func (b *Builder) Rooms(u *Usage) []*File {
 // Testers makes the dossiers of the people who made hearing tests at the site.
 func (b *Builder) Testers(u *Usage) []*File {
 	var out []*File
+	siteAlike := oneDay(u.audiometers)
 	for _, id := range slices.Sorted(maps.Keys(u.testers)) {
 		refs := NewRefs()
 		use := u.testers[id]
@@ -287,6 +291,9 @@ func (b *Builder) Testers(u *Usage) []*File {
 			d.Qualification, d.Certificate, d.CompetenceShown = reg.Qualification, reg.Certificate, reg.CompetenceShown
 			d.Supervisor, d.SupervisorIs = reg.Supervisor, b.Registers.professionOf(reg.Supervisor)
 			refs.Of(reg)
+		}
+		if !siteAlike {
+			use.observeDays(file, id)
 		}
 		out = append(out, file)
 	}

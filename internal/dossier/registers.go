@@ -27,6 +27,7 @@ type Registers struct {
 	byArea        map[string][]*record.Measurement
 	tasksOf       map[string][]*record.Task
 	calibrations  map[string][]*record.Calibration
+	functional    map[string][]Date // days of the functional checks of an audiometer, in order
 	wearOf        map[string][]*record.WearCheck
 	firstMeasured map[string]Date // by id
 }
@@ -90,6 +91,12 @@ func (r *Registers) index() {
 	}
 	r.tasksOf = groupBy(r.Tasks, func(t *record.Task) string { return t.Group })
 	r.calibrations = groupBy(r.Calibrations, func(c *record.Calibration) string { return c.InstrumentID })
+	r.functional = map[string][]Date{}
+	for _, c := range r.Calibrations {
+		if c.Type == "functional" {
+			r.functional[c.InstrumentID] = append(r.functional[c.InstrumentID], c.Date)
+		}
+	}
 	r.wearOf = groupBy(r.WearChecks, func(c *record.WearCheck) string { return c.Area })
 }
 

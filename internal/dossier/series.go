@@ -40,4 +40,5 @@ type File struct {
 	Refs   Refs
 
 	Observations []Observation // what somebody may want to look at; no verdicts
+	Agreed       []Observation // what another bundle may observe of a shift stated by the source, but this one finds stated rightly
 }

@@ -88,9 +88,7 @@ func (b *Builder) hearing(w *WorkerRecords, refs Refs, enrolled []calendar.Spell
 }
 
 func (h *hearing) invalidated(a *record.Audiogram) bool {
-	return slices.ContainsFunc(h.follow, func(f *record.FollowUp) bool {
-		return f.Type == "invalidated" && f.AudiogramID == a.AudiogramID
-	})
+	return invalidated(h.follow, a)
 }
 
 // findBaseline takes the first valid test marked baseline, else the first valid test.

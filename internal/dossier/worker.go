@@ -49,7 +49,10 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 	d.Protection = b.protection(w, now, h, b.attenuationMatters(d), refs)
 	d.Wear = b.wear(w, now, refs)
 	d.Training, d.ProtectorTraining = b.training(w, refs)
-	return &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, enrolled, refs), Refs: refs, Observations: h.observations()}
+	file := &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, enrolled, refs), Refs: refs}
+	h.observe(file)
+	b.observeEmployment(file, w)
+	return file
 }
 
 func emptyNotNil[T any](list []T) []T {

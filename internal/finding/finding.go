@@ -69,6 +69,7 @@ type Finding struct {
 	Facts    map[string]any `json:"facts" doc:"numbers and words that decide, and the parameters used"`
 	Health   map[string]any `json:"health,omitempty" doc:"audiometric figures; only on request"`
 	Evidence []Evidence     `json:"evidence" doc:"records it rests on"`
+	Accepted *Acceptance    `json:"accepted,omitempty" doc:"the employer has accepted it for a time; it is shown apart and never counted as met"`
 }
 
 // Fingerprint gives the id of a finding: "f-" and 16 hexadecimal digits of the SHA-256 of its parts.

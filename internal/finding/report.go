@@ -7,18 +7,24 @@ import (
 
 // Report is the neutral result of one check. Every output format is written from it and from nothing else.
 type Report struct {
-	Tool     Tool           `json:"tool"`
-	Program  string         `json:"program" doc:"title of the program"`
-	AsOf     calendar.Date  `json:"as_of" doc:"the day on which the program is judged"`
-	Cautions []string       `json:"cautions" doc:"what every reader must know"`
-	Sites    []Site         `json:"sites" doc:"the sites judged, with the bundles and choices in force"`
-	Bundles  []Bundle       `json:"bundles" doc:"the bundles judged by"`
-	Inputs   []Input        `json:"inputs" doc:"the files read, with a ledger of their rows"`
-	Rejects  []Reject       `json:"rejects" doc:"rows that could not become records"`
-	Remarks  []string       `json:"remarks" doc:"what somebody should look at, such as an expired parameter"`
-	Totals   map[Status]int `json:"totals" doc:"number of findings by status, also of those not listed"`
-	Counts   []Count        `json:"counts" doc:"number of findings by site, bundle, topic and status"`
-	Listed   string         `json:"listed" doc:"which findings are listed"`
+	Tool           Tool           `json:"tool"`
+	Program        string         `json:"program" doc:"title of the program"`
+	AsOf           calendar.Date  `json:"as_of" doc:"the day on which the program is judged"`
+	Cautions       []string       `json:"cautions" doc:"what every reader must know"`
+	Sites          []Site         `json:"sites" doc:"the sites judged, with the bundles and choices in force"`
+	Bundles        []Bundle       `json:"bundles" doc:"the bundles judged by"`
+	Inputs         []Input        `json:"inputs" doc:"the files read, with a ledger of their rows"`
+	Rejects        []Reject       `json:"rejects" doc:"rows that could not become records"`
+	Remarks        []string       `json:"remarks" doc:"what somebody should look at, such as an expired parameter"`
+	Totals         map[Status]int `json:"totals" doc:"number of findings by status, also of those not listed"`
+	AcceptedTotals map[Status]int `json:"accepted_totals" doc:"of the findings that the employer has accepted, the number by status; totals and counts do not hold them"`
+	Counts         []Count        `json:"counts" doc:"number of findings by site, bundle, topic and status"`
+	Listed         string         `json:"listed" doc:"which findings are listed"`
+
+	Duties     []Duty      `json:"duties" doc:"the duties of the bundles judged by"`
+	Parameters []Parameter `json:"parameters" doc:"every dated value of those bundles"`
+	Rates      []Rate      `json:"rates" doc:"measures with their denominators, by site and year"`
+	Portraits  []Portrait  `json:"portraits,omitempty" doc:"the subjects with listed findings, for formats that draw them"`
 
 	ObservationCounts []ObservationCount `json:"observation_counts" doc:"number of observations by site and kind, also of those not listed"`
 	Observations      []Observation      `json:"observations" doc:"what somebody may want to look at, listed with --all only; never a verdict"`
@@ -37,6 +43,8 @@ type Observation struct {
 	Row     int     `json:"row" doc:"line of the file, row of the sheet, or place in the list"`
 	Ear     string  `json:"ear,omitempty" enum:"left|right|both" doc:"ear concerned, if it is about one"`
 	Text    string  `json:"text" doc:"the observation in a sentence, without figures"`
+
+	More []Evidence `json:"more,omitempty" doc:"further records that it is about"`
 }
 
 // ObservationCount is the number of observations of one kind at a site.
@@ -72,7 +80,7 @@ type Bundle struct {
 	Cautions  []string `json:"cautions"`
 }
 
-// Input is one file of the ledger: rows read = accepted + rejected.
+// Input is one file of the ledger: rows read = accepted + rejected + not data.
 type Input = intake.Input
 
 // Reject is a row that could not become a record.

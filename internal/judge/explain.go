@@ -100,7 +100,9 @@ func (k *keeper) explain(d *bundle.Duty, x outcome, o *obligation, key string) {
 }
 
 // private says whether a field holds what only those may see who asked for audiometric figures.
-func private(f *record.Field) bool { return f.Type == record.Hearing || f.Name == "birth_date" }
+func private(f *record.Field) bool {
+	return f.Type == record.Hearing || f.Name == "birth_date" || strings.HasSuffix(f.Name, ".stated_shift")
+}
 
 // fieldsOf lists the fields of a record that are present.
 func fieldsOf(rec record.Record, health bool) [][2]string {

@@ -5,7 +5,6 @@ import (
 	"fmt"
 	"maps"
 	"slices"
-	"strconv"
 	"strings"
 
 	"hearduty/internal/bundle"
@@ -14,11 +13,11 @@ import (
 	"hearduty/internal/record"
 )
 
-// judgeFile judges one dossier and keeps its findings.
-func (c *check) judgeFile(ctx context.Context, b *bench, f *dossier.File) error {
+// judgeFile judges one dossier and keeps its findings. It gives the number of those that are listed.
+func (c *check) judgeFile(ctx context.Context, b *bench, f *dossier.File) (listed int, err error) {
 	answers, err := b.engine.Evaluate(ctx, f.Kind, Input(f.Input))
 	if err != nil {
-		return err
+		return 0, err
 	}
 	kept := &keeper{check: c, bench: b, file: f, keys: map[string]bool{}}
 	s := &settler{bundle: b.bundle, file: f, asOf: c.AsOf, brief: c.brief}
@@ -29,7 +28,7 @@ func (c *check) judgeFile(ctx context.Context, b *bench, f *dossier.File) error 
 		}
 	}
 	kept.done()
-	return nil
+	return len(kept.findings), nil
 }
 
 // settled is an outcome with the obligation that it comes from, if any.
@@ -78,11 +77,17 @@ type keeper struct {
 	keys     map[string]bool // keys seen of the duty at hand
 	findings []finding.Finding
 	counts   []countKey
+	tallies  []tally
 }
 
 // keep counts an outcome and, if it is to be listed, writes it as a finding.
 func (k *keeper) keep(d *bundle.Duty, x outcome, o *obligation) {
 	k.counts = append(k.counts, countKey{d.Topic, x.status})
+	if k.file.Kind == dossier.KindWorker {
+		if t, ok := rateOf(d, &x, o); ok {
+			k.tallies = append(k.tallies, t)
+		}
+	}
 	key := x.key
 	for n := 2; k.keys[key]; n++ {
 		key = fmt.Sprintf("%s-%d", x.key, n)
@@ -177,6 +182,7 @@ func (c *check) origin(ref string, rec record.Record) finding.Evidence {
 
 // done hands the findings of the dossier over.
 func (k *keeper) done() {
+	k.bench.rates.take(k.tallies)
 	k.bench.mu.Lock()
 	defer k.bench.mu.Unlock()
 	k.bench.findings = append(k.bench.findings, k.findings...)
@@ -190,11 +196,14 @@ func (c *check) report() *finding.Report {
 	r := &finding.Report{
 		Tool: finding.Tool{Name: "hearduty", Version: c.Version}, Program: c.Program.Title, AsOf: c.AsOf, Cautions: cautions,
 		Sites: []finding.Site{}, Bundles: []finding.Bundle{}, Inputs: c.ledger.Inputs, Rejects: c.rejects(), Remarks: []string{},
-		Totals: map[finding.Status]int{}, Counts: []finding.Count{}, Listed: c.listedWords(), Findings: []finding.Finding{},
+		Totals: map[finding.Status]int{}, AcceptedTotals: map[finding.Status]int{}, Counts: []finding.Count{}, Listed: c.listedWords(), Findings: []finding.Finding{},
 		Observations: []finding.Observation{}, ObservationCounts: []finding.ObservationCount{},
 	}
 	for _, d := range c.ledger.Remarks {
 		r.Remarks = append(r.Remarks, d.String())
+	}
+	if counts := c.ledger.ObservationCounts(); counts != nil {
+		r.Remarks = append(r.Remarks, "hearduty intake lists rows that contradict each other or themselves: "+strings.Join(counts, ", "))
 	}
 	for _, b := range c.used {
 		r.Bundles = append(r.Bundles, finding.Bundle{
@@ -216,6 +225,9 @@ func (c *check) report() *finding.Report {
 	r.Remarks = append(r.Remarks, c.unplaced()...)
 	c.seen.report(c, r)
 	slices.SortFunc(r.Findings, func(x, y finding.Finding) int { return finding.Compare(&x, &y) })
+	c.lawOf(r)
+	r.Rates = c.ratesOf()
+	r.Portraits = c.gallery.sorted()
 	return r
 }
 
@@ -236,21 +248,10 @@ func (b *bench) sortedCounts(totals map[finding.Status]int) []finding.Count {
 // rejects gives the rejected rows. What stands in a cell of a threshold or a birth date is medical or personal and is left
 // out unless audiometric figures were asked for; file, row and column tell where to look.
 func (c *check) rejects() []finding.Reject {
-	kinds := map[[2]string]record.Kind{}
-	for _, in := range c.ledger.Inputs {
-		kinds[[2]string{in.File, in.Sheet}] = in.Kind
+	if c.HealthDetail {
+		return c.ledger.Rejects
 	}
-	out := make([]finding.Reject, len(c.ledger.Rejects))
-	for i, r := range c.ledger.Rejects {
-		if t, ok := record.TableOf(kinds[[2]string{r.File, r.Sheet}]); ok && !c.HealthDetail {
-			if f := t.Index(r.Field); f >= 0 && private(&t.Fields[f]) {
-				r.Why = strings.ReplaceAll(r.Why, strconv.Quote(r.Read), "what stands there")
-				r.Read = ""
-			}
-		}
-		out[i] = r
-	}
-	return out
+	return c.ledger.Shown()
 }
 
 func (c *check) listedWords() string {

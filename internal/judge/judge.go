@@ -30,6 +30,7 @@ type Options struct {
 	AheadDays    int           // how many days ahead a due finding is listed
 	All          bool          // list met and lifted findings and those due later, too
 	HealthDetail bool          // show audiometric figures
+	Portraits    bool          // draw each subject that has a listed finding
 	Parallel     int           // number of subjects judged at a time; 0 for one a processor
 	Version      string        // of the tool, for the report
 
@@ -76,6 +77,7 @@ type check struct {
 	foundMu   sync.Mutex
 	found     []explained
 	seen      seen
+	gallery   gallery
 }
 
 // bench is one site under one bundle.
@@ -89,6 +91,9 @@ type bench struct {
 	mu       sync.Mutex
 	findings []finding.Finding
 	counts   map[countKey]int
+	copies   dossier.Copies // kept at the first bench of a site
+	ears     ears
+	rates    rates
 }
 
 type countKey struct {
@@ -216,6 +221,9 @@ func (c *check) judgeAll(ctx context.Context) error {
 		}
 		return nil
 	})
+	if err == nil {
+		err = c.observeCopies(ctx)
+	}
 	if err != nil {
 		return err
 	}
@@ -228,8 +236,13 @@ func (c *check) judgeAll(ctx context.Context) error {
 		files := slices.Concat(b.builder.Groups(b.usage), b.builder.Instruments(b.usage), b.builder.Rooms(b.usage), b.builder.Testers(b.usage))
 		files = append(files, b.builder.SiteDossier(b.usage))
 		for _, f := range files {
-			if err := c.judgeFile(ctx, b, f); err != nil {
+			c.observeFile(b, f)
+			listed, err := c.judgeFile(ctx, b, f)
+			if err != nil {
 				return err
+			}
+			if c.wants(f, listed) {
+				c.gallery.hang(c.portraitOf(b, f))
 			}
 		}
 		return nil
@@ -238,13 +251,7 @@ func (c *check) judgeAll(ctx context.Context) error {
 
 // judgeWorker judges one worker at every site of employment, under every bundle of the site.
 func (c *check) judgeWorker(ctx context.Context, w *dossier.WorkerRecords) error {
-	var sites []string
-	for _, e := range w.Employments {
-		if !slices.Contains(sites, e.Site) {
-			sites = append(sites, e.Site)
-		}
-	}
-	for _, site := range sites {
+	for _, site := range sitesOf(w) {
 		var observed observed
 		for _, b := range c.benches[site] {
 			file := b.builder.Worker(w)
@@ -258,13 +265,32 @@ func (c *check) judgeWorker(ctx context.Context, w *dossier.WorkerRecords) error
 			}
 			b.usage.Add(b.builder, w, file.Input.(*dossier.Worker))
 			observed.add(file)
-			if err := c.judgeFile(ctx, b, file); err != nil {
+			listed, err := c.judgeFile(ctx, b, file)
+			if err != nil {
 				return err
 			}
+			b.rates.hearing(file.Input.(*dossier.Worker))
+			if c.Portraits {
+				b.ears.add(file.Input.(*dossier.Worker))
+			}
+			if c.wants(file, listed) {
+				c.gallery.hang(c.portraitOfWorker(b, file, w))
+			}
 		}
-		c.seen.keep(c, site, &observed)
+		c.observeWorker(site, &observed, w)
 	}
 	return nil
+}
+
+// sitesOf gives the sites of employment.
+func sitesOf(w *dossier.WorkerRecords) []string {
+	var sites []string
+	for _, e := range w.Employments {
+		if !slices.Contains(sites, e.Site) {
+			sites = append(sites, e.Site)
+		}
+	}
+	return sites
 }
 
 // parallel calls do for 0 to n-1, several at a time, and stops at the first error.

@@ -127,6 +127,7 @@ func sampleAudiogram() *Audiogram {
 	a := &Audiogram{
 		AudiogramID: "A-000412", WorkerID: "000123", Date: mustDate("2025-03-05"), Purpose: "periodic", AudiometerID: "AM-1", RoomID: "R-1",
 		LeftRepeat: Threshold{Tenths: 150, State: audiometry.Measured}, RightRepeat: Threshold{State: audiometry.NotTested},
+		LeftStatedShift: Yes, RightStatedShift: No,
 		Masked: Yes, Earphones: "insert", FineSteps: No,
 		TesterID: "T-2", QuietHours: Num(14), QuietByProtectors: No, Mobile: No, DeterminedOn: mustDate("2025-03-12"), Reviewer: "AUD-1", ReviewedOn: mustDate("2025-03-12"),
 	}

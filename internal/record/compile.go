@@ -59,6 +59,7 @@ func compile(r Record) *Table {
 			panic(fmt.Sprintf("record: %s has two fields %s", t.goType.Name(), f.Name))
 		}
 		t.index[f.Name] = i
+		t.leads = append(t.leads, jsonLeadOf(f.Name))
 		if f.Required {
 			t.needed = append(t.needed, i)
 		}

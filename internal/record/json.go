@@ -29,33 +29,46 @@ func AppendJSON(b []byte, r Record, file, sheet string) []byte {
 	return append(b, '}', '}')
 }
 
+// jsonLead is what stands before the value of a field: first before the first field of a nested object, next
+// before any other.
+type jsonLead struct{ outer, first, next string }
+
+func jsonLeadOf(name string) jsonLead {
+	outer, inner, nested := strings.Cut(name, ".")
+	if !nested {
+		lead := string(append(appendJSONText([]byte{','}, name), ':'))
+		return jsonLead{"", lead, lead}
+	}
+	inner = string(append(appendJSONText(nil, inner), ':'))
+	return jsonLead{outer, string(appendJSONText([]byte{','}, outer)) + ":{" + inner, "," + inner}
+}
+
 // appendFields appends ,"name":value for each field that is present. Fields with the same first part of
 // a dotted name stand next to each other in a table.
 func (t *Table) appendFields(b []byte, r reflect.Value) []byte {
-	open := ""
+	open, slot := "", -1
+	var at any
 	for i := range t.Fields {
-		f := &t.Fields[i]
-		mark := len(b)
-		outer, inner, nested := strings.Cut(f.Name, ".")
-		if !nested {
-			outer, inner = "", f.Name
+		f, lead := &t.Fields[i], &t.leads[i]
+		if f.slot != slot {
+			at, slot = pointer(r, f.slot), f.slot
 		}
-		if open != "" && open != outer {
+		mark := len(b)
+		if open != "" && open != lead.outer {
 			b = append(b, '}')
 		}
-		if outer != "" && open != outer {
-			b = append(append(appendJSONText(append(b, ','), outer), ':'), '{')
+		if open == lead.outer {
+			b = append(b, lead.next...)
 		} else {
-			b = append(b, ',')
+			b = append(b, lead.first...)
 		}
-		b = append(appendJSONText(b, inner), ':')
 		before := len(b)
-		b = f.appendJSONValue(b, pointer(r, f.slot))
+		b = f.appendJSONValue(b, at)
 		if len(b) == before {
 			b = b[:mark]
 			continue
 		}
-		open = outer
+		open = lead.outer
 	}
 	if open != "" {
 		b = append(b, '}')
@@ -101,7 +114,10 @@ func (f *Field) appendJSONValue(b []byte, pointer any) []byte {
 }
 
 func appendThreshold(b []byte, t Threshold) []byte {
-	if t.State == audiometry.Measured {
+	switch {
+	case t.State == audiometry.Measured && t.Tenths%10 == 0:
+		return strconv.AppendInt(b, int64(t.Tenths/10), 10)
+	case t.State == audiometry.Measured:
 		return append(b, t.String()...)
 	}
 	return appendPresent(b, t.String())

@@ -128,8 +128,10 @@ type Audiogram struct {
 	Purpose           string         `field:"purpose,one=baseline|periodic|retest|exit|other" doc:"why the test was made"`
 	Left              audiometry.Ear `field:"left" doc:"left ear's hearing threshold level, dB HL; NR>100 for no response up to 100 dB, NT for not tested"`
 	LeftRepeat        Threshold      `field:"left.repeat_1000" doc:"left ear's hearing threshold level at 1000 Hz when it was repeated in the same test, dB HL"`
+	LeftStatedShift   Answer         `field:"left.stated_shift" doc:"whether the source itself calls the left ear's result a standard threshold shift; never used for a verdict"`
 	Right             audiometry.Ear `field:"right" doc:"right ear's hearing threshold level, dB HL; NR>100 for no response up to 100 dB, NT for not tested"`
 	RightRepeat       Threshold      `field:"right.repeat_1000" doc:"right ear's hearing threshold level at 1000 Hz when it was repeated in the same test, dB HL"`
+	RightStatedShift  Answer         `field:"right.stated_shift" doc:"whether the source itself calls the right ear's result a standard threshold shift; never used for a verdict"`
 	Masked            Answer         `field:"masked" doc:"whether the other ear was masked where it might have heard the tone"`
 	Earphones         string         `field:"earphones,one=supra_aural|circumaural|insert" doc:"earphones used"`
 	FineSteps         Answer         `field:"fine_steps" doc:"whether the audiometer works in steps finer than 5 dB, as self-recording ones do"`

@@ -41,9 +41,31 @@ const (
 // text, no-break spaces too, do not count; an empty text clears the field. A Problem of severity warning
 // means that the field was set nevertheless.
 func (t *Table) Set(r Record, i int, text string) *Problem {
-	f := &t.Fields[i]
+	s := t.Setter(r)
+	return s.Set(i, text)
+}
+
+// Setter sets fields of one record. Setting many is faster than by Table.Set.
+type Setter struct {
+	table  *Table
+	record reflect.Value
+	slot   int // of the field set last
+	at     any // pointer to it
+}
+
+// Setter gives a setter for the fields of r, which must be of the table's kind.
+func (t *Table) Setter(r Record) Setter {
+	return Setter{table: t, record: reflect.ValueOf(r).Elem(), slot: -1}
+}
+
+// Set reads text into the field at index i, as Table.Set does.
+func (s *Setter) Set(i int, text string) *Problem {
+	f := &s.table.Fields[i]
 	text = strings.TrimSpace(text)
-	switch p := pointer(reflect.ValueOf(r).Elem(), f.slot).(type) {
+	if f.slot != s.slot {
+		s.at, s.slot = pointer(s.record, f.slot), f.slot
+	}
+	switch p := s.at.(type) {
 	case *string:
 		return f.setText(p, text)
 	case *Date:
@@ -146,6 +168,11 @@ func (f *Field) setDay(p *Date, text string) *Problem {
 		return f.problem(text, "Write the right date, and leave the cell empty if the day is not known or has not come", "the year of %q is outside %d to %d", text, firstYear, lastYear)
 	}
 	*p = d
+	if d.Year() == firstYear {
+		problem := f.problem(text, "Leave the cell empty, or name it under blank in the map, if the day is not known", "the day lies in %d, as systems write it where no day is known", firstYear)
+		problem.Severity = diag.Warning
+		return problem
+	}
 	return nil
 }
 

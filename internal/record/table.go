@@ -3,6 +3,7 @@ package record
 import (
 	"path"
 	"reflect"
+	"slices"
 	"strings"
 )
 
@@ -45,6 +46,7 @@ type Table struct {
 	slots  []int          // indexes of the Go fields that hold values
 	index  map[string]int // field name to index in Fields
 	needed []int          // indexes of the required fields
+	leads  []jsonLead     // what stands before each field in JSON
 }
 
 // fileNames are the canonical file names, without extension.
@@ -71,14 +73,15 @@ func TableOf(k Kind) (*Table, bool) {
 	return t, ok
 }
 
+// Endings are the endings of the files that records can be read from.
+var Endings = []string{".csv", ".tsv", ".txt", ".xlsx", ".xlsm", ".json", ".ndjson", ".yaml", ".yml"}
+
 // KindOfFile tells the kind of a canonical file, such as records/audiograms.csv, from its name. It
-// returns false if the name is not canonical or the extension is none of .csv, .json and .ndjson.
+// returns false if the name is not canonical or its ending is none of Endings.
 func KindOfFile(name string) (Kind, bool) {
 	base := strings.ToLower(path.Base(name))
 	extension := path.Ext(base)
-	switch extension {
-	case ".csv", ".json", ".ndjson":
-	default:
+	if !slices.Contains(Endings, extension) {
 		return "", false
 	}
 	k, ok := fileNames[strings.TrimSuffix(base, extension)]

@@ -48,7 +48,7 @@ func TestExpandedNames(t *testing.T) {
 
 func TestKindOfFile(t *testing.T) {
 	for name, want := range map[string]Kind{
-		"audiograms.csv": "audiogram", "a/b/Follow_Ups.NDJSON": "follow_up", "tasks.json": "task", "audiograms.xlsx": "", "audiogram.csv": "", "audiograms": "", "": "",
+		"audiograms.csv": "audiogram", "a/b/Follow_Ups.NDJSON": "follow_up", "tasks.json": "task", "audiograms.xlsx": "audiogram", "x/Audiograms.YML": "audiogram", "audiograms.xls": "", "audiograms.pdf": "", "audiogram.csv": "", "audiograms": "", "": "",
 	} {
 		got, ok := KindOfFile(name)
 		require.Equal(t, want, got, name)

@@ -6,7 +6,13 @@ import (
 	"io"
 
 	"hearduty/internal/finding"
+	"hearduty/internal/report/csv"
+	"hearduty/internal/report/html"
+	"hearduty/internal/report/ics"
 	"hearduty/internal/report/json"
+	"hearduty/internal/report/junit"
+	"hearduty/internal/report/ndjson"
+	"hearduty/internal/report/sarif"
 	"hearduty/internal/report/text"
 )
 
@@ -26,7 +32,8 @@ type Options struct {
 
 // Formats lists all forms, the default first.
 func Formats(o Options) []Format {
-	return []Format{text.Format{Width: o.Width, Colour: o.Colour}, json.Format{}}
+	return []Format{text.Format{Width: o.Width, Colour: o.Colour}, json.Format{}, html.Format{},
+		csv.Format{}, sarif.Format{}, junit.Format{}, ics.Format{}, ndjson.Format{}}
 }
 
 // Named gives a form by its name. It returns false if there is no such form.
@@ -46,4 +53,21 @@ func Names() []string {
 		names = append(names, f.Name())
 	}
 	return names
+}
+
+// Draws says whether a form draws subjects, and so needs their portraits.
+func Draws(f Format) bool {
+	_, ok := f.(html.Format)
+	return ok
+}
+
+// Part is one file of a report that is too large for one.
+type Part = html.Part
+
+// Split gives the parts of a report that is too large for one file of the form, one a site, and nothing otherwise.
+func Split(f Format, r *finding.Report) []Part {
+	if page, ok := f.(html.Format); ok {
+		return page.Split(r)
+	}
+	return nil
 }

@@ -1,6 +1,7 @@
 package report
 
 import (
+	"slices"
 	"strings"
 
 	"hearduty/internal/calendar"
@@ -60,8 +61,8 @@ func sample() *finding.Report {
 			Kind: "law", CheckedOn: "2026-12-01", Cautions: []string{"About 22 States and territories enforce their own rule, which may ask for more."},
 		}},
 		Inputs: []finding.Input{
-			{File: "records/audiograms.csv", Kind: "audiogram", SHA256: strings.Repeat("cd", 32), Rows: 412, Accepted: 411, Rejected: 1},
-			{File: "records/issues.xlsx", Sheet: "2026", Kind: "protector_issue", SHA256: strings.Repeat("ef", 32), Rows: 52, Accepted: 52},
+			{File: "records/audiograms.csv", Kind: "audiogram", SHA256: strings.Repeat("cd", 32), Rows: 413, Accepted: 411, Rejected: 1, NotData: 1, Declared: map[string]int{"header": 1}, Records: 411},
+			{File: "records/issues.xlsx", Sheet: "2026", Kind: "protector_issue", SHA256: strings.Repeat("ef", 32), Rows: 53, Accepted: 52, NotData: 1, Declared: map[string]int{"header": 1}, Records: 52},
 		},
 		Rejects: []finding.Reject{{File: "records/audiograms.csv", Row: 77, Column: 5, Field: "left.500", Read: "1O", Why: `"1O" is not a number`, Remedy: "Write the digit 0 where the letter O stands", Also: []string{"date"}}},
 		Remarks: []string{"worker W-9 has no group on the as-of day"},
@@ -74,7 +75,7 @@ func sample() *finding.Report {
 			{Site: "kiln-hill", Bundle: us, Topic: "information", Status: finding.Met, Number: 91},
 		},
 		ObservationCounts: []finding.ObservationCount{
-			{Site: "kiln-hill", Kind: "identical_ears", Number: 1}, {Site: "kiln-hill", Kind: "notch", Number: 41}, {Site: "larch-street", Kind: "same_day", Number: 1},
+			{Site: "kiln-hill", Kind: "identical_ears", Number: 1}, {Site: "kiln-hill", Kind: "notch", Number: 41}, {Site: "kiln-hill", Kind: "calibration_after_tests", Number: 1}, {Site: "larch-street", Kind: "same_day", Number: 1},
 		},
 		Listed:   "gap, unproven, opinion, late, and due within 90 days; all with --all",
 		Findings: []finding.Finding{first, second, choice, quiet, recorded, notice, late, lifted, met},
@@ -103,6 +104,8 @@ func long() *finding.Report {
 	r.Observations = []finding.Observation{
 		{Site: r.Sites[0].ID, Subject: finding.Subject{Kind: "worker", ID: "作業者"}, Kind: "notch", Record: "audiogram/x", File: r.Inputs[0].File, Row: 7, Ear: "left", Text: "The ear has a notch at high frequencies."},
 		{Site: "larch-street", Subject: finding.Subject{Kind: "worker", ID: "2"}, Kind: "same_day", Record: "audiogram/y", File: "a.xlsx", Sheet: "Tests", Row: 9, Text: "Another test was made on the same day."},
+		{Site: "larch-street", Subject: finding.Subject{Kind: "tester", ID: "T-9"}, Kind: "results_identical_across_workers", Record: "audiogram/z", File: "a.xlsx", Sheet: "Tests", Row: 3,
+			Text: "Several workers have the same varied thresholds at every frequency.", More: slices.Repeat([]finding.Evidence{{Record: "audiogram/y", File: "a.xlsx", Sheet: "Tests", Row: 9}}, 7)},
 	}
 	r.Findings = r.Findings[:3]
 	r.Findings[0].Site, r.Findings[0].Subject.ID = r.Sites[0].ID, "作業者"+strings.Repeat("０", 50)

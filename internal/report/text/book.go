@@ -9,6 +9,7 @@ import (
 
 	"hearduty/internal/bundle"
 	"hearduty/internal/calendar"
+	"hearduty/internal/finding"
 )
 
 // Book writes a bundle as a rule book: its duties in words, its parameters on a day, what is left to the
@@ -84,7 +85,7 @@ func inForce(p *page, b *bundle.Bundle, asOf calendar.Date) {
 			p.para(2, 4, name+": no value is in force on that day; what rests on it is unproven")
 			continue
 		}
-		p.para(2, 4, fmt.Sprintf("%s = %s, from %s, %s", name, strings.TrimSpace(words(v.Plain())+" "+parameter.Unit), v.From, v.Cite))
+		p.para(2, 4, fmt.Sprintf("%s = %s, from %s, %s", name, strings.TrimSpace(finding.Words(v.Plain())+" "+parameter.Unit), v.From, v.Cite))
 		note := sentence(parameter.About)
 		if v.Seen != "text" {
 			note += " " + sentence(upper(seenWords(v.Seen)))

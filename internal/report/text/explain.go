@@ -83,7 +83,7 @@ func seenWords(seen string) string {
 func numbers(p *page, f *finding.Finding) {
 	facts := map[string]any{}
 	for name, fact := range f.Facts {
-		if _, ok := asParameter(fact); !ok {
+		if _, ok := finding.AsParameter(fact); !ok {
 			facts[name] = fact
 		}
 	}
@@ -105,15 +105,15 @@ func factLines(p *page, facts map[string]any) {
 				sums = []any{facts[key]}
 			}
 			for _, sum := range sums {
-				p.para(2, 6, words(sum))
+				p.para(2, 6, finding.Words(sum))
 			}
 			continue
 		}
-		name, value := named(key, facts[key])
+		name, value := finding.Named(key, facts[key])
 		if list, ok := facts[key].([]any); ok && key == "for_information" && len(list) > 0 {
 			p.para(2, 4, name+", which decides nothing:")
 			for _, line := range list {
-				p.para(4, 6, words(line))
+				p.para(4, 6, finding.Words(line))
 			}
 			continue
 		}

@@ -27,6 +27,15 @@ var observedAs = map[string]string{
 	"before_hire":            "made before the hire",
 	"after_leaving":          "made after the worker left",
 	"same_day":               "made on the day of another test, not as a retest",
+	"no_functional_check":    "made on a day without a functional check of the audiometer",
+	"stated_shift_differs":   "stated to shift or not to shift otherwise than the thresholds show",
+
+	"training_outside_employment":         "of training outside employment",
+	"protector_issued_outside_employment": "of protectors handed over outside employment",
+	"calibration_after_tests":             "of calibrations dated after the tests that they should cover",
+	"checks_all_same_result":              "of functional checks that all found the same",
+	"one_day_of_month":                    "of tests all dated on one day of the month",
+	"results_identical_across_workers":    "of thresholds that several workers share",
 }
 
 // observations writes what somebody may want to look at: the numbers by kind, and each one if they are listed.
@@ -43,7 +52,7 @@ func observations(p *page, r *finding.Report) {
 	if len(r.Observations) == 0 {
 		more = " --all lists each of them."
 	}
-	p.para(0, 0, "Hearing tests, or single ears of them, that a professional may want to look at. Each has harmless causes, and none changes a finding."+more)
+	p.para(0, 0, "Hearing tests, single ears of them, and other records that a professional or an auditor may want to look at. Each has harmless causes, and none changes a finding."+more)
 	for i, c := range r.ObservationCounts {
 		if i > 0 && r.ObservationCounts[i-1].Site == c.Site {
 			continue
@@ -64,9 +73,24 @@ func observations(p *page, r *finding.Report) {
 		if o.Ear != "" {
 			ear = earWords[o.Ear] + ": "
 		}
-		p.item(2, "- ", fmt.Sprintf("%s: %s %s: %s%s %s", o.Site, o.Subject.Kind, o.Subject.ID, ear, sentence(o.Text),
-			place(finding.Evidence{Record: o.Record, File: o.File, Sheet: o.Sheet, Row: o.Row})))
+		p.item(2, "- ", fmt.Sprintf("%s: %s %s: %s%s %s", o.Site, o.Subject.Kind, o.Subject.ID, ear, sentence(o.Text), places(&o)))
 	}
+}
+
+// fewPlaces is the number of further records whose places are written.
+const fewPlaces = 5
+
+// places says where the records of an observation stand: the first, some more, and how many there are beside.
+func places(o *finding.Observation) string {
+	list := []string{place(finding.Evidence{Record: o.Record, File: o.File, Sheet: o.Sheet, Row: o.Row})}
+	for i, e := range o.More {
+		if i == fewPlaces {
+			list = append(list, fmt.Sprintf("and %d more", len(o.More)-i))
+			break
+		}
+		list = append(list, place(e))
+	}
+	return strings.Join(list, ", ")
 }
 
 var earWords = map[string]string{"left": "left ear", "right": "right ear", "both": "both ears"}

@@ -142,7 +142,7 @@ func told(f *finding.Finding, asOf calendar.Date) string {
 	if d := dates(f, asOf); d != "" && !(f.Due.Known() && strings.Contains(f.Message, f.Due.String())) {
 		parts = append(parts, sentence(upper(d)))
 	}
-	if h := pairs(f.Health); h != "" {
+	if h := finding.Pairs(f.Health); h != "" {
 		parts = append(parts, "Hearing: "+sentence(h))
 	}
 	if len(parts) == 0 {
