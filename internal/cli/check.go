@@ -3,6 +3,7 @@ package cli
 import (
 	"fmt"
 	"io"
+	"path/filepath"
 	"slices"
 	"strings"
 
@@ -21,15 +22,16 @@ func (r *run) checkCommand() *cli.Command {
 		ArgsUsage: "[PROGRAM]",
 		Description: examples(
 			"PROGRAM is a program file or the folder that holds program.yaml; the current folder, if it is left out.\n"+
-				"The exit code is 0 if nothing is found of what --fail-on names, 1 if something is, 2 if the check was not possible.",
+				"The exit code is 0 if nothing is found of what --fail-on names, 1 if something is, 2 if the check was not possible\n"+
+				"or, with --strict, if any row was rejected.",
 			"hearduty check",
 			"hearduty check plants/program.yaml --site kiln-hill --as-of 2026-06-30",
 			"hearduty check --format json --out report.json --fail-on gap,unproven,reject",
 		),
 		Flags: []cli.Flag{
 			asOfFlag(), siteFlag(), bundleFlag(),
-			&cli.StringFlag{Name: "format", Value: report.Names()[0], Usage: "write the report as `NAME`: " + strings.Join(report.Names(), " or ")},
-			outFlag(),
+			&cli.StringFlag{Name: "format", Value: report.Names()[0], Usage: "write the report as `NAME`: " + strings.Join(report.Names(), ", ")},
+			outFlag(), rejectsFlag(), strictFlag(),
 			&cli.StringFlag{Name: "ahead", Value: "90d", Usage: "list what is due within `DAYS`"},
 			&cli.BoolFlag{Name: "all", Usage: "list what is met, lifted or due later, and each observation", DisableDefaultText: true},
 			&cli.StringFlag{Name: "fail-on", Value: "gap,unproven", Usage: "end with exit code 1 if there is any of these `STATUSES`, or a rejected row (reject), or never (none)"},
@@ -64,12 +66,15 @@ func (r *run) check(c *cli.Context) error {
 	if err != nil {
 		return err
 	}
-	options.AheadDays, options.All = days, c.Bool("all")
-	result, err := judge.Check(c.Context, options)
+	options.AheadDays, options.All, options.Portraits = days, c.Bool("all"), report.Draws(format)
+	result, err := judge.Check(r.progress(c.Context, false), options)
 	if err != nil {
 		return err
 	}
-	if err := r.output(c, func(w io.Writer) error { return format.Write(w, result) }); err != nil {
+	if err := r.rejects(c, result.Rejects); err != nil {
+		return err
+	}
+	if err := r.write(c, format, result); err != nil {
 		return err
 	}
 	if path := c.String("out"); path != "" {
@@ -78,7 +83,28 @@ func (r *run) check(c *cli.Context) error {
 	if found(result, fails) || reject && len(result.Rejects) > 0 {
 		r.code = exitFound
 	}
+	if c.Bool("strict") && len(result.Rejects) > 0 {
+		r.code = exitFailed
+	}
 	return nil
+}
+
+// write writes the report, and beside it one file a site if the form holds no more.
+func (r *run) write(c *cli.Context, format report.Format, result *finding.Report) error {
+	path := c.String("out")
+	parts := report.Split(format, result)
+	if len(parts) == 0 || path == "" {
+		return r.output(c, func(w io.Writer) error { return format.Write(w, result) })
+	}
+	for _, part := range parts {
+		ending := filepath.Ext(path)
+		name := strings.TrimSuffix(path, ending) + "-" + part.Site + ending
+		if err := writeFile(name, func(w io.Writer) error { return format.Write(w, part.Report) }); err != nil {
+			return fmt.Errorf("%s cannot be written: %w", name, err)
+		}
+		fmt.Fprintf(r.stderr, "Wrote %s: the findings of site %s, since one page holds no more than it can show quickly.\n", name, part.Site)
+	}
+	return r.output(c, func(w io.Writer) error { return format.Write(w, result) })
 }
 
 // options reads the program and the flags that check and explain share.

@@ -31,18 +31,23 @@ const (
 type Env struct {
 	Context  context.Context      // ends the run when it is done; nil for never
 	Today    func() calendar.Date // read once, when no other day is given
+	Now      func() time.Time     // for the progress of reading; nil for none
 	Getenv   func(string) string
 	Terminal func(io.Writer) (columns int, ok bool) // whether w is a terminal, and how wide
+	Memory   func(limit int64)                      // aims to stay below so many bytes; nil for no aim
 }
 
 // OS is the Env of a real run. An interrupt ends it.
 func OS() Env {
-	tuneMemory(os.Getenv)
+	limit := memoryTuner(os.Getenv)
+	limit(memoryLimit)
 	ctx, _ := signal.NotifyContext(context.Background(), os.Interrupt)
 	return Env{
 		Context: ctx,
 		Today:   func() calendar.Date { return calendar.OfTime(time.Now()) },
+		Now:     time.Now,
 		Getenv:  os.Getenv,
+		Memory:  limit,
 		Terminal: func(w io.Writer) (int, bool) {
 			f, ok := w.(*os.File)
 			if !ok || !term.IsTerminal(int(f.Fd())) {
@@ -71,20 +76,23 @@ func Main(args []string, stdin io.Reader, stdout, stderr io.Writer, env Env) int
 }
 
 // Memory that a run aims to stay below, and how much garbage may gather before that, in percent of what is
-// in use. Judging makes much garbage and keeps little.
+// in use. Judging makes much garbage and keeps little; reading alone needs less.
 const (
 	memoryLimit    = 345 << 20
+	readingLimit   = 230 << 20
 	garbagePercent = 300
 )
 
-// tuneMemory sets both, unless whoever runs the program has set them for Go in the environment.
-func tuneMemory(getenv func(string) string) {
+// memoryTuner sets how much garbage may gather, and gives a function that sets the limit, unless whoever runs the
+// program has set them for Go in the environment.
+func memoryTuner(getenv func(string) string) func(limit int64) {
 	if getenv("GOGC") == "" {
 		debug.SetGCPercent(garbagePercent)
 	}
-	if getenv("GOMEMLIMIT") == "" {
-		debug.SetMemoryLimit(memoryLimit)
+	if getenv("GOMEMLIMIT") != "" {
+		return func(int64) {}
 	}
+	return func(limit int64) { debug.SetMemoryLimit(limit) }
 }
 
 // run is one run of the program.

@@ -71,6 +71,25 @@ var audiometric = regexp.MustCompile(`dB HL|average change|audiometric zero|agai
 var decibels = regexp.MustCompile(`\d dB|_db"`)
 
 // TestOutputHoldsNoAudiometricFigures looks through everything that is written without --health-detail.
+// withoutLaw takes the text of the law out of a report, which speaks of decibels and of age.
+func withoutLaw(t *testing.T, out string) string {
+	t.Helper()
+	if !strings.HasPrefix(out, "{") {
+		return out
+	}
+	var report map[string]json.RawMessage
+	if err := json.Unmarshal([]byte(out), &report); err != nil {
+		t.Fatal(err)
+	}
+	delete(report, "duties")
+	delete(report, "parameters")
+	rest, err := json.Marshal(report)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return string(rest)
+}
+
 func TestOutputHoldsNoAudiometricFigures(t *testing.T) {
 	t.Parallel()
 	dir := writeDemo(t)
@@ -78,7 +97,7 @@ func TestOutputHoldsNoAudiometricFigures(t *testing.T) {
 	outputs := map[string]string{}
 	for _, args := range [][]string{{"check"}, {"check", "--all"}, {"check", "--format", "json"}, {"check", "--all", "--format", "json"}} {
 		_, out, _ := call(append(args, dir, "--width", "1000")...)
-		outputs[strings.Join(args, " ")] = out
+		outputs[strings.Join(args, " ")] = withoutLaw(t, out)
 	}
 	duties := map[string]bool{}
 	for _, f := range listed(t, dir) {

@@ -38,6 +38,9 @@ func (d *Dates) Read(c grid.Cell) (string, *Problem) {
 	if !d.Buddhist && c.Kind <= grid.Day && isDay(c.Text) {
 		return c.Text, nil
 	}
+	if p := noDayOfBook(c); p != nil {
+		return "", p
+	}
 	if p := unusable(c); p != nil {
 		return "", p
 	}

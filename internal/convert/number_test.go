@@ -110,7 +110,9 @@ func TestNumbersRefused(t *testing.T) {
 		{point, text("5-"), "minus stands behind"},
 		{point, text("(5)"), "brackets"},
 		{point, text("1.5E-3"), "scientific notation"},
-		{point, text("85 dB"), "a unit or a remark"},
+		{point, text("85 dB"), "a unit or weighting that is not that of the field"},
+		{point, text("85 dBC"), "a unit or weighting that is not that of the field"},
+		{point, text("85 min"), "a unit or a remark"},
 		{point, text("5²"), "a unit or a remark"}, // never 52
 		{point, text("½"), "not a number"},
 		{point, text("1e"), "a unit or a remark"},

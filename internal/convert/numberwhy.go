@@ -39,6 +39,9 @@ func (n *Numbers) why(s string) *Problem {
 		return problem("the number is in scientific notation, so digits of it may be lost", "Export the column again as plain numbers")
 	}
 	if at := strings.LastIndexAny(s, "0123456789"); at >= 0 && n.reads(strings.TrimSpace(s[:at+1])) {
+		if rest := strings.TrimSpace(s[at+1:]); len(rest) >= 2 && strings.EqualFold(rest[:2], "dB") {
+			return problem("a unit or weighting that is not that of the field stands behind the number", "Look up how it was measured, and map the column to the field of that weighting, or correct the cell")
+		}
 		return problem("a unit or a remark stands behind the number", "Take it away, or name another column in the map")
 	}
 	return problem("the cell is not a number", look)

@@ -30,9 +30,9 @@ type Position struct {
 func (p Position) String() string {
 	s := p.File
 	if p.Sheet != "" {
-		s += " " + p.Sheet + "!"
+		s += " " + p.Sheet
 		if p.Line > 0 {
-			s += fmt.Sprint(p.Line)
+			s += fmt.Sprintf("!%d", p.Line)
 		}
 		return s
 	}

@@ -12,6 +12,7 @@ func TestDiagnosticText(t *testing.T) {
 		"a.csv:3: the row is odd.":             {Error, Position{File: "a.csv", Line: 3}, "the row is odd", ""},
 		"a.csv: the file is odd.":              {Warning, Position{File: "a.csv", Column: 7}, "the file is odd", ""},
 		"b.xlsx Tests!12: the row is odd.":     {Warning, Position{File: "b.xlsx", Sheet: "Tests", Line: 12}, "the row is odd", ""},
+		"b.xlsx Tests: the sheet is odd.":      {Warning, Position{File: "b.xlsx", Sheet: "Tests"}, "the sheet is odd", ""},
 		"something is odd.":                    {Warning, Position{}, "something is odd", ""},
 	} {
 		require.Equal(t, want, d.String())

@@ -142,16 +142,29 @@ func (a *analysis) assignNear(c *column) {
 		return
 	}
 	near := diag.Near(key, alike(key))
-	if near == "" {
+	if near == "" || distant(key, near) {
 		return
 	}
-	if field := a.fieldOf(known.names[near]); field != "" {
+	if field := a.fieldOf(known.names[near]); field != "" && a.of(field) == nil {
 		c.field, c.sure, c.off = field, unsure, true
 		c.why = fmt.Sprintf("its name is spelled like %q", near)
 		n := a.ask("Is %s the field %s? Its name is only spelled like one that is known", c.shown(), field)
 		c.notes = append(c.notes, fmt.Sprintf("question %d", n))
 		a.checkNames(c)
 	}
+}
+
+// distant says whether two names share too few letters in their places to be one with a slip.
+func distant(a, b string) bool {
+	x, y := []rune(a), []rune(b)
+	front, back := 0, 0
+	for front < min(len(x), len(y)) && x[front] == y[front] {
+		front++
+	}
+	for back < min(len(x), len(y))-front && x[len(x)-1-back] == y[len(y)-1-back] {
+		back++
+	}
+	return max(len(x), len(y))-front-back > 2
 }
 
 // alike gives the known names that begin like a name and are about as long.

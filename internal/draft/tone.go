@@ -28,7 +28,7 @@ var (
 	earLetters = words("r l d g s i e h v p") // which ear they mean, the pair tells
 	fillers    = words("ear ohr oreille oido orecchio ouvido orelha ucho oor ora ore thr threshold thresholds htl hl db dbhl hearing level levels seuil umbral soglia limiar prog schwelle horschwelle drempel ac air lc lluft luft conduction freq frequency frequenz frequence frecuencia frequenza f at of x the aux auxu audio audiogram tone pure result ht")
 	boneWords  = words("bc bone kl knochen knochenleitung oss osseuse osea ossea bot")
-	secondly   = words("retest repeat rpt repeated second 2nd wdh wiederholung rep zweite deuxieme")
+	secondly   = words("retest again repeat rpt repeated second 2nd wdh wiederholung rep zweite nochmals deuxieme")
 	partWords  = map[string]string{
 		"bl": "baseline", "base": "baseline", "baseline": "baseline", "basis": "baseline", "ref": "baseline", "reference": "baseline", "referenz": "baseline", "initial": "baseline",
 		"cur": "current", "curr": "current", "current": "current", "akt": "current", "aktuell": "current", "actual": "current", "latest": "current", "actuel": "current",

@@ -102,6 +102,7 @@ type About struct {
 	Merged       []Range  // merged cells of a workbook, known from the beginning; the value stands in the first one
 	Replaced     int      // bytes that the encoding does not know, read as U+FFFD
 	FirstReplace int      // line of the first of them
+	UTF8         int      // line that holds UTF-8 text, although the file was read in a page of single bytes; 0 if there is none
 }
 
 // Range is a rectangle of cells, its ends included, all counted from 1.

@@ -17,6 +17,7 @@ type Decoded struct {
 	mark     int // bytes of U+FFFD seen at the end of what was read
 	replaced int
 	first    int
+	utf8     int
 }
 
 // Text gives the text of the file from its beginning. A byte order mark tells the encoding; without one, UTF-16
@@ -53,6 +54,9 @@ func (f *File) Text(encoding string) (*Decoded, error) {
 		}
 	default:
 		decoder, t.encoding = stated.decoder(), stated.name
+		if stated.single {
+			t.utf8 = s.high
+		}
 	}
 	if _, err := f.r.Seek(skip, io.SeekStart); err != nil {
 		return nil, cannotRead(err)
@@ -66,7 +70,7 @@ func (f *File) Text(encoding string) (*Decoded, error) {
 
 // About tells the encoding, and what of it could not be read so far.
 func (t *Decoded) About() About {
-	return About{Encoding: t.encoding, Replaced: t.replaced, FirstReplace: t.first}
+	return About{Encoding: t.encoding, Replaced: t.replaced, FirstReplace: t.first, UTF8: t.utf8}
 }
 
 // Lossy says whether anything could not be read so far.

@@ -47,7 +47,11 @@ func TestHostileFiles(t *testing.T) {
 func describe(records []record.Record, l *Ledger) string {
 	var b strings.Builder
 	in := l.Inputs[0]
-	fmt.Fprintf(&b, "rows %d, accepted %d, rejected %d\n", in.Rows, in.Accepted, in.Rejected)
+	fmt.Fprintf(&b, "rows %d, accepted %d, rejected %d, not data %d", in.Rows, in.Accepted, in.Rejected, in.NotData)
+	if in.Declared != nil {
+		fmt.Fprintf(&b, " (%s)", Declared(in.Declared))
+	}
+	b.WriteString("\n")
 	for _, d := range l.Unreadable {
 		fmt.Fprintf(&b, "refused  %s\n", d)
 	}

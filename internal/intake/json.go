@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"strings"
 
+	"hearduty/internal/grid"
 	"hearduty/internal/record"
 )
 
@@ -16,7 +17,7 @@ type objectReader struct {
 	outer  map[string]bool // first parts of dotted names
 	seen   []bool          // fields that the current object has named
 	row    *row
-	walker walker
+	walker grid.Walker
 }
 
 // member is the name of a member and of the object that holds it, if that is nested.
@@ -55,20 +56,13 @@ func (o *objectReader) read(raw []byte, r *row) {
 func (o *objectReader) whole(raw []byte) *fault {
 	if !json.Valid(raw) {
 		var any json.RawMessage
-		return &fault{why: brokenJSON(json.Unmarshal(raw, &any)), remedy: "Write one complete JSON object a line, without commas between them"}
+		return &fault{why: grid.BrokenJSON(json.Unmarshal(raw, &any)), remedy: "Write one complete JSON object a line, without commas between them"}
 	}
-	o.walker = walker{s: string(raw)}
-	if o.walker.peek() != '{' {
+	o.walker = grid.Walk(string(raw))
+	if o.walker.Peek() != '{' {
 		return &fault{why: "this is no JSON object", remedy: "Write an object with the fields as keys"}
 	}
-	return o.walker.members(func(key string) *fault { return o.member(member{"", key}) })
-}
-
-func brokenJSON(err error) string {
-	if strings.Contains(err.Error(), "unexpected end") || strings.HasSuffix(err.Error(), "EOF") {
-		return "the JSON ends too early"
-	}
-	return "the JSON is broken: " + strings.TrimPrefix(err.Error(), "json: ")
+	return grid.WalkMembers(&o.walker, func(key string) *fault { return o.member(member{"", key}) })
 }
 
 func (o *objectReader) member(m member) *fault {
@@ -82,22 +76,22 @@ func (o *objectReader) member(m member) *fault {
 	}
 	switch name := record.Shorten(m.String()); {
 	case name == "record":
-		if w.peek() == '"' && w.text() == string(o.table.Kind) {
+		if w.Peek() == '"' && w.Text() == string(o.table.Kind) {
 			return nil
 		}
 		return &fault{field: name, why: "the object is not a record of kind " + string(o.table.Kind), remedy: "Put records of each kind into a file of their own"}
 	case name == "origin":
-		w.skip()
+		w.Skip()
 		return nil
 	case !o.outer[name]:
 		return &fault{field: name, why: fmt.Sprintf("%s records have no field %q", o.table.Kind, name), remedy: unknownName(name, o.table, "Remove or rename the key")}
-	case w.peek() == 'n':
-		w.bare()
+	case w.Peek() == 'n':
+		w.Bare()
 		return nil
-	case w.peek() != '{':
+	case w.Peek() != '{':
 		return &fault{field: name, why: name + " is not an object", remedy: "Write an object, such as " + o.example(name)}
 	default:
-		return w.members(func(key string) *fault { return o.member(member{name, key}) })
+		return grid.WalkMembers(w, func(key string) *fault { return o.member(member{name, key}) })
 	}
 }
 
@@ -117,13 +111,13 @@ func (o *objectReader) value(field int) *fault {
 		return &fault{field: f.Name, read: read, why: "the value is " + is, remedy: "Write " + valueOf(f)}
 	}
 	text := ""
-	switch w := &o.walker; w.peek() {
+	switch w := &o.walker; w.Peek() {
 	case '"':
-		text = w.text()
+		text = w.Text()
 	case 'n':
-		w.bare()
+		w.Bare()
 	case 't', 'f':
-		word := w.bare()
+		word := w.Bare()
 		if f.Type != record.YesNo && !hasWord(f.One, "yes") {
 			return wrong(word, "true or false")
 		}
@@ -136,7 +130,7 @@ func (o *objectReader) value(field int) *fault {
 	case '{':
 		return wrong("", "an object")
 	default:
-		text = w.bare()
+		text = w.Bare()
 		if f.Type != record.Decimal && f.Type != record.Hearing {
 			return wrong(text, "a number")
 		}
@@ -151,13 +145,13 @@ func (o *objectReader) value(field int) *fault {
 func (o *objectReader) list(field int) *fault {
 	f := &o.table.Fields[field]
 	var words []string
-	bad := o.walker.items(func() *fault {
+	bad := grid.WalkItems(&o.walker, func() *fault {
 		word, ok := "", true
-		switch c := o.walker.peek(); {
+		switch c := o.walker.Peek(); {
 		case c == '"':
-			word = o.walker.text()
+			word = o.walker.Text()
 		case f.Name == "samples" && (c == '-' || c >= '0' && c <= '9'):
-			word = o.walker.bare() // levels
+			word = o.walker.Bare() // levels
 		default:
 			ok = false
 		}

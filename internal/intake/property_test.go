@@ -1,11 +1,8 @@
 package intake
 
 import (
-	"bytes"
 	"context"
-	"encoding/csv"
 	"encoding/json"
-	"io"
 	"os"
 	"path/filepath"
 	"strings"
@@ -32,7 +29,7 @@ func readText(t require.TestingT, dir string, kind record.Kind, extension string
 			rejects++
 		}
 	}
-	require.Equal(t, in.Rows, in.Accepted+in.Rejected)
+	require.Equal(t, in.Rows, in.Accepted+in.Rejected+in.NotData)
 	require.Equal(t, in.Rejected, rejects)
 	require.Len(t, records, in.Accepted)
 	return records, l
@@ -54,7 +51,7 @@ func TestNoRowOfGarbageIsLost(t *testing.T) {
 				lines++
 			}
 		}
-		require.Equal(t, lines, l.Inputs[0].Rows, "%d records", len(records))
+		require.Equal(t, lines, l.Inputs[0].Accepted+l.Inputs[0].Rejected, "%d records", len(records))
 	})
 }
 
@@ -70,41 +67,8 @@ func TestNoLineOfNDJSONIsLost(t *testing.T) {
 				lines++
 			}
 		}
-		require.Equal(t, lines, l.Inputs[0].Rows)
+		require.Equal(t, lines, l.Inputs[0].Accepted+l.Inputs[0].Rejected)
 		readText(t, dir, "worker", ".json", []byte(text))
-	})
-}
-
-// Whatever encoding/csv reads without an error, the scanner reads the same.
-func agrees(t require.TestingT, text []byte) {
-	if bytes.IndexByte(text, 0) >= 0 || bytes.IndexByte(text, '\r') >= 0 || bytes.HasPrefix(text, []byte("\xef\xbb\xbf")) {
-		return
-	}
-	s := newScanner(bytes.NewReader(text))
-	s.delimiter = ','
-	std := csv.NewReader(bytes.NewReader(text))
-	std.FieldsPerRecord = -1
-	want, err := std.ReadAll()
-	if err != nil {
-		return
-	}
-	for _, cells := range want {
-		if blank(cells) {
-			continue
-		}
-		got, err := s.next()
-		require.NoError(t, err)
-		require.Nil(t, got.fault)
-		require.Equal(t, cells, got.cells)
-	}
-	_, err = s.next()
-	require.Equal(t, io.EOF, err)
-}
-
-func TestScannerAgreesWithTheStandardLibrary(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
-		text := strings.Join(rapid.SliceOfN(rapid.SampledFrom([]string{"a", "bc", ",", "\n", "\"", "\"\"", " ", "é", "\"x,\ny\""}), 0, 40).Draw(t, "text"), "")
-		agrees(t, []byte(text))
 	})
 }
 
@@ -112,7 +76,6 @@ func FuzzCSV(f *testing.F) {
 	seed(f, ".csv")
 	f.Fuzz(func(t *testing.T, text []byte) {
 		readText(t, t.TempDir(), "worker", ".csv", text)
-		agrees(t, text)
 	})
 }
 

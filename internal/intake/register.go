@@ -1,7 +1,6 @@
 package intake
 
 import (
-	"bytes"
 	"fmt"
 	"strings"
 
@@ -19,16 +18,19 @@ type register struct {
 	outWorkers   map[string]record.Origin // workers none of whose rows was accepted so far
 	workerFiles  int                      // inputs of kind worker
 	workersMay   bool                     // a file of workers was refused, so unknown workers may be in it
-	ids          map[record.Kind]map[string]record.Origin
-	measurements map[string]measured
+	ids          map[record.Kind]*marks[digest, record.Origin]
+	measurements map[digest]measured
+	likes        map[string][]string // workers by their ids without leading zeros, once it is needed
 
-	table         *record.Table // of the current input
-	column        columns       // of the current input
-	previous, now []byte        // compact form of the row accepted last and of the current row
+	table  *record.Table                                 // of the current input
+	column columns                                       // of the current input
+	rows   *marks[digest, record.Origin]                 // accepted rows of the current input, or of all inputs of its kind if there are several, by what they hold, where records have no id
+	kept   map[record.Kind]*marks[digest, record.Origin] // of the kinds with several inputs
+	buffer []byte
 }
 
 // columns are the fields of a table that the register looks at; -1 where the table has none.
-type columns struct{ id, worker, site int }
+type columns struct{ id, worker, site, day int }
 
 // measured is what the rows of one measurement must share.
 type measured struct {
@@ -37,18 +39,23 @@ type measured struct {
 	at                  record.Origin
 }
 
-func newRegister(p *program.Program, l *Ledger) *register {
+func newRegister(p *program.Program, sources []source, l *Ledger) *register {
 	g := &register{
 		ledger: l, sites: map[string]bool{}, workers: map[string]*person{}, outWorkers: map[string]record.Origin{},
-		ids: map[record.Kind]map[string]record.Origin{}, measurements: map[string]measured{},
+		ids: map[record.Kind]*marks[digest, record.Origin]{}, measurements: map[digest]measured{}, kept: map[record.Kind]*marks[digest, record.Origin]{},
 	}
 	for _, s := range p.Sites {
 		g.sites[s.ID] = true
 		g.siteNames = append(g.siteNames, s.ID)
 	}
-	for _, s := range p.Sources {
-		if s.Kind == "worker" {
-			g.workerFiles++
+	inputs := map[record.Kind]int{}
+	for i := range sources {
+		inputs[sources[i].kind]++
+	}
+	g.workerFiles = inputs["worker"]
+	for kind, n := range inputs {
+		if n > 1 {
+			g.kept[kind] = &marks[digest, record.Origin]{}
 		}
 	}
 	return g
@@ -56,21 +63,23 @@ func newRegister(p *program.Program, l *Ledger) *register {
 
 // begin starts an input.
 func (g *register) begin(t *record.Table) {
-	g.table, g.column = t, columns{id: -1, worker: t.Index("worker_id"), site: t.Index("site")}
+	g.table, g.column = t, columns{id: -1, worker: t.Index("worker_id"), site: t.Index("site"), day: dayField(t)}
 	for i := range t.Fields {
 		if t.Fields[i].ID {
 			g.column.id = i
 		}
 	}
 	if g.column.id >= 0 && g.ids[t.Kind] == nil {
-		g.ids[t.Kind] = map[string]record.Origin{}
+		g.ids[t.Kind] = &marks[digest, record.Origin]{}
 	}
-	g.previous = g.previous[:0]
+	if g.rows = g.kept[t.Kind]; g.rows == nil {
+		g.rows = &marks[digest, record.Origin]{}
+	}
 }
 
-// refused notes that a file of this kind could not be read to its end.
+// refused notes that a file of this kind, empty if it is not known, could not be read to its end.
 func (g *register) refused(k record.Kind) {
-	if k == "worker" {
+	if k == "worker" || k == "" {
 		g.workersMay = true
 	}
 }
@@ -82,7 +91,7 @@ func (g *register) rejected(r record.Record) {
 		return
 	}
 	if _, known := g.outWorkers[w.WorkerID]; !known {
-		g.outWorkers[w.WorkerID] = w.At()
+		g.outWorkers[strings.Clone(w.WorkerID)] = w.At() // the id shares memory with its whole row
 	}
 }
 
@@ -94,7 +103,14 @@ func (g *register) admit(r record.Record) *record.Problem {
 		}
 	}
 	if w, ok := r.(*record.Worker); ok {
-		return g.admitWorker(w)
+		p := g.admitWorker(w)
+		switch earlier, double := g.rows.get(g.content(w)); {
+		case p == nil:
+			g.rows.mark(g.content(w), w.At())
+		case double:
+			p = g.repeated(earlier, w.At())
+		}
+		return p
 	}
 	worker := ""
 	if g.column.worker >= 0 {
@@ -102,6 +118,9 @@ func (g *register) admit(r record.Record) *record.Problem {
 	}
 	if worker != "" && g.workers[worker] == nil && !g.workersMay {
 		return g.orphan(worker)
+	}
+	if p := g.doubted(worker, r); p != nil {
+		return p
 	}
 	if m, ok := r.(*record.Measurement); ok {
 		if p := g.checkMeasurement(m); p != nil {
@@ -143,44 +162,33 @@ func (g *register) checkSite(site string) *record.Problem {
 	return refuse("site", site, remedy, "the program file names no site %q", record.Shorten(site))
 }
 
-func (g *register) orphan(worker string) *record.Problem {
-	shown := record.Shorten(worker)
-	if at, ok := g.outWorkers[worker]; ok {
-		return refuse("worker_id", worker, "Mend the worker's row first", "the row of worker %q (%s) was rejected, so this row belongs to nobody", shown, g.place(at))
-	}
-	if g.workerFiles == 0 {
-		return refuse("worker_id", worker, "Add a file workers.csv to the records of the program file", "the program has no file of workers, so the row of worker %q belongs to nobody", shown)
-	}
-	return refuse("worker_id", worker, "Correct the id (leading zeros count), or add the worker to the file of workers", "no worker has the id %q", shown)
-}
-
 func (g *register) admitID(r record.Record, id string) *record.Problem {
-	seen := g.ids[g.table.Kind]
-	if at, double := seen[id]; double {
+	g.buffer = append(g.buffer[:0], id...)
+	if at, double := g.ids[g.table.Kind].mark(digestOf(g.buffer), r.At()); double {
 		name := g.table.Fields[g.column.id].Name
 		return refuse(name, id, "Remove one of the two rows, or give it an id of its own", "the %s %q was already used in %s", name, record.Shorten(id), g.place(at))
 	}
-	seen[strings.Clone(id)] = r.At() // the id shares memory with its whole row
 	return nil
 }
 
 // checkMeasurement lets the rows of several dose channels share an id if they agree on the rest.
 func (g *register) checkMeasurement(m *record.Measurement) *record.Problem {
-	this := measured{m.Date, m.Group, m.WorkerID, m.Area, m.At()}
-	known, double := g.measurements[m.MeasurementID]
+	g.buffer = append(g.buffer[:0], m.MeasurementID...)
+	key := digestOf(g.buffer)
+	known, double := g.measurements[key]
 	if !double {
-		g.measurements[m.MeasurementID] = this
+		g.measurements[key] = measured{m.Date, strings.Clone(m.Group), strings.Clone(m.WorkerID), strings.Clone(m.Area), m.At()}
 		return nil
 	}
 	field := ""
 	switch {
-	case known.date != this.date:
+	case known.date != m.Date:
 		field = "date"
-	case known.group != this.group:
+	case known.group != m.Group:
 		field = "group"
-	case known.worker != this.worker:
+	case known.worker != m.WorkerID:
 		field = "worker_id"
-	case known.area != this.area:
+	case known.area != m.Area:
 		field = "area"
 	default:
 		return nil
@@ -189,15 +197,33 @@ func (g *register) checkMeasurement(m *record.Measurement) *record.Problem {
 		"the measurement_id %q was already used in %s with another %s", record.Shorten(m.MeasurementID), g.place(known.at), field)
 }
 
-// checkRepeated refuses a row that repeats the accepted row before it.
+// checkRepeated refuses a row that repeats an accepted row of its kind.
 func (g *register) checkRepeated(r record.Record) *record.Problem {
 	at := r.At()
-	r.SetAt(record.Origin{})
-	g.now = record.Append(g.now[:0], r)
-	r.SetAt(at)
-	if bytes.Equal(g.now, g.previous) {
-		return refuse("", "", "Remove the row, or correct it if something else is meant", "the row repeats the one before it")
+	earlier, double := g.rows.mark(g.content(r), at)
+	if !double {
+		return nil
 	}
-	g.previous, g.now = g.now, g.previous
-	return nil
+	return g.repeated(earlier, at)
+}
+
+// content gives a digest of what a record holds, wherever it stands.
+func (g *register) content(r record.Record) digest {
+	at := r.At()
+	r.SetAt(record.Origin{})
+	g.buffer = record.Append(g.buffer[:0], r)
+	r.SetAt(at)
+	return digestOf(g.buffer)
+}
+
+// repeated says of the row at a place that it repeats an earlier one.
+func (g *register) repeated(earlier, at record.Origin) *record.Problem {
+	const remedy = "Remove the row, or correct it if something else is meant"
+	switch {
+	case earlier == at:
+		return refuse("", "", remedy, "the row gives the same record twice")
+	case earlier.Source == at.Source:
+		return refuse("", "", remedy, "the row repeats row %d", earlier.Row)
+	}
+	return refuse("", "", remedy, "the row repeats %s", g.place(earlier))
 }

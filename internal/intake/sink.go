@@ -1,6 +1,9 @@
 package intake
 
 import (
+	"slices"
+	"strings"
+
 	"hearduty/internal/diag"
 	"hearduty/internal/record"
 )
@@ -9,20 +12,41 @@ import (
 type sink struct {
 	in    *intake
 	input *Input
-	index int32
+	index int
 	table *record.Table
 }
 
-// take turns one row into a record, which it emits, or into a reject. The error is emit's.
+// take turns one canonical row into a record, which it emits, or into a reject. The error is emit's.
 func (s *sink) take(r *row) error {
-	s.input.Rows++
-	if f := r.fault; f != nil {
-		s.reject(r, Reject{Column: f.column, Field: f.field, Read: record.Shorten(f.read), Why: f.why, Remedy: f.remedy})
+	if r.notData != "" {
+		s.input.declare(r.notData, 1)
 		return nil
 	}
+	s.input.Rows++
+	if f := r.fault; f != nil {
+		s.reject(r.line, Reject{Column: f.column, Field: f.field, Read: record.Shorten(f.read), Why: f.why, Remedy: f.remedy})
+		return nil
+	}
+	rec, errors := s.record(r.line, r.cells)
+	if len(errors) > 0 {
+		reject := s.explain(errors)
+		if i := s.table.Index(reject.Field); i >= 0 && r.columns != nil {
+			reject.Column = r.columns[i]
+		}
+		s.reject(r.line, reject)
+		return nil
+	}
+	s.input.Accepted++
+	return s.emit(rec)
+}
+
+// record makes a record of cells and lets the register look at it. It gives the errors of a record that
+// cannot be used.
+func (s *sink) record(line int, cells []cell) (record.Record, []*record.Problem) {
 	rec := s.table.New()
-	rec.SetAt(record.Origin{Source: s.index, Row: int32(r.line)})
-	errors := s.fill(r, rec)
+	rec.SetAt(record.Origin{Source: int32(s.index), Row: int32(line)})
+	errors := s.fill(line, cells, rec)
+	s.in.people.translate(rec)
 	if len(errors) == 0 {
 		if p := s.in.register.admit(rec); p != nil {
 			errors = append(errors, p)
@@ -30,16 +54,19 @@ func (s *sink) take(r *row) error {
 	}
 	if len(errors) > 0 {
 		s.in.register.rejected(rec)
-		s.rejectProblems(r, errors)
-		return nil
 	}
-	s.input.Accepted++
+	return rec, errors
+}
+
+func (s *sink) emit(rec record.Record) error {
+	s.input.Records++
+	s.in.observer.look(rec)
 	return s.in.emit(rec)
 }
 
 // fill sets the fields of the record and checks it as a whole. It notes the warnings of a record that
 // has no errors, and returns the errors of one that has.
-func (s *sink) fill(r *row, rec record.Record) []*record.Problem {
+func (s *sink) fill(line int, cells []cell, rec record.Record) []*record.Problem {
 	var errors, warnings []*record.Problem
 	note := func(p *record.Problem) {
 		if p.Severity == diag.Error {
@@ -48,8 +75,9 @@ func (s *sink) fill(r *row, rec record.Record) []*record.Problem {
 			warnings = append(warnings, p)
 		}
 	}
-	for _, c := range r.cells {
-		if p := s.table.Set(rec, c.field, c.text); p != nil {
+	setter := s.table.Setter(rec)
+	for _, c := range cells {
+		if p := setter.Set(c.field, c.text); p != nil {
 			note(p)
 		}
 	}
@@ -60,37 +88,36 @@ func (s *sink) fill(r *row, rec record.Record) []*record.Problem {
 	}
 	if len(errors) == 0 {
 		for _, p := range warnings {
-			s.in.remarks.add(diag.Position{File: s.input.File, Sheet: s.input.Sheet, Line: r.line, Field: p.Field}, p)
+			s.remark(line, p)
 		}
 	}
 	return errors
 }
 
-func names(problems []*record.Problem, field string) bool {
-	for _, p := range problems {
-		if p.Field == field {
-			return true
-		}
-	}
-	return false
+func (s *sink) remark(line int, p *record.Problem) {
+	s.in.remarks.add(diag.Position{File: s.input.File, Sheet: s.input.Sheet, Line: line, Field: p.Field}, p)
 }
 
-func (s *sink) rejectProblems(r *row, problems []*record.Problem) {
+func names(problems []*record.Problem, field string) bool {
+	return slices.ContainsFunc(problems, func(p *record.Problem) bool { return p.Field == field })
+}
+
+// explain makes a reject of what is wrong with a record: the first error, and the fields of the others.
+func (s *sink) explain(problems []*record.Problem) Reject {
 	p := problems[0]
 	reject := Reject{Field: p.Field, Read: p.Read, Why: p.Why, Remedy: p.Remedy}
-	if i := s.table.Index(p.Field); i >= 0 && r.columns != nil {
-		reject.Column = r.columns[i]
-	}
 	for _, other := range problems[1:] {
 		if other.Field != p.Field {
 			reject.Also = append(reject.Also, other.Field)
 		}
 	}
-	s.reject(r, reject)
+	return reject
 }
 
-func (s *sink) reject(r *row, reject Reject) {
+// reject counts a row that did not become a record. What it keeps shares no memory with the row.
+func (s *sink) reject(line int, reject Reject) {
 	s.input.Rejected++
-	reject.File, reject.Sheet, reject.Row = s.input.File, s.input.Sheet, r.line
+	reject.File, reject.Sheet, reject.Row, reject.Source = s.input.File, s.input.Sheet, line, s.index
+	reject.Read = strings.Clone(reject.Read)
 	s.in.ledger.Rejects = append(s.in.ledger.Rejects, reject)
 }

@@ -1,6 +1,9 @@
 package intake
 
 import (
+	"slices"
+	"strings"
+
 	"hearduty/internal/calendar"
 	"hearduty/internal/record"
 )
@@ -11,6 +14,7 @@ type person struct {
 	sex        string
 	birth      record.Date
 	employment []employment
+	doubts     []employment // stretches of rows that give the id to somebody else
 }
 
 // employment is one stretch of a worker's employment.
@@ -29,18 +33,20 @@ func (g *register) admitWorker(w *record.Worker) *record.Problem {
 	if known == nil {
 		known = &person{at: w.At()}
 	}
+	const remedy = "Correct the wrong one; if they are two people, give each an id of its own"
+	if known.birth.Known() && w.BirthDate.Known() && known.birth != w.BirthDate {
+		known.doubts = append(known.doubts, this)
+		return refuse("birth_date", w.BirthDate.String(), remedy, "the birth date of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
+	}
+	if known.sex != "" && w.Sex != "" && known.sex != w.Sex {
+		known.doubts = append(known.doubts, this)
+		return refuse("sex", w.Sex, remedy, "the sex of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
+	}
 	for _, other := range known.employment {
 		if overlap(this.days, other.days) {
 			return refuse("hired_on", w.HiredOn.String(), "Give the earlier stretch its left_on, one row a stretch and site; if they are two people, give each an id of its own",
 				"the employment of worker %q overlaps with the one in %s", record.Shorten(w.WorkerID), g.place(other.at))
 		}
-	}
-	const remedy = "Correct the wrong one; if they are two people, give each an id of its own"
-	if known.birth.Known() && w.BirthDate.Known() && known.birth != w.BirthDate {
-		return refuse("birth_date", w.BirthDate.String(), remedy, "the birth date of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
-	}
-	if known.sex != "" && w.Sex != "" && known.sex != w.Sex {
-		return refuse("sex", w.Sex, remedy, "the sex of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
 	}
 	if known.sex == "" {
 		known.sex = w.Sex
@@ -48,9 +54,32 @@ func (g *register) admitWorker(w *record.Worker) *record.Problem {
 	if !known.birth.Known() {
 		known.birth = w.BirthDate
 	}
+	if len(known.employment) == 0 {
+		g.workers[strings.Clone(w.WorkerID)] = known // the id shares memory with its whole row
+	}
 	known.employment = append(known.employment, this)
-	g.workers[w.WorkerID] = known
 	return nil
+}
+
+// doubted refuses a record of an id that rows of workers give to two people, unless only the one whose row was accepted
+// was employed on its day.
+func (g *register) doubted(worker string, r record.Record) *record.Problem {
+	p := g.workers[worker]
+	if p == nil || p.doubts == nil {
+		return nil
+	}
+	if g.column.day >= 0 {
+		day := dayOf(g.table.Text(r, g.column.day))
+		if day.Known() && employed(p.employment, day) && !employed(p.doubts, day) {
+			return nil
+		}
+	}
+	return refuse("worker_id", worker, "Correct the rows of the worker, or say in the same_person file whose the id was on which days",
+		"the rows of worker %q (%s, and %s) contradict each other and may be two people, so whose this row is cannot be told", record.Shorten(worker), g.place(p.at), g.place(p.doubts[0].at))
+}
+
+func employed(stretches []employment, day record.Date) bool {
+	return slices.ContainsFunc(stretches, func(e employment) bool { return e.days.Contains(day) })
 }
 
 // overlap says whether two stretches of employment share more than the day on which one ends and the other

@@ -63,6 +63,7 @@ type Fault struct {
 	Column                           int
 	Field, Header, Read, Why, Remedy string
 	Also                             []string // further fields of the row whose cells cannot be read
+	Worker                           string   // id of the row's worker, if that could be read
 }
 
 // Remark is something about a row that somebody should look at. Rows that share one are counted together.

@@ -44,9 +44,24 @@ func (p *plan) resolve(h *header, objects bool) (absent []*reference, err error)
 		}
 	}
 	if lost != nil {
-		return nil, lacking(h, lost)
+		return nil, lacking(h, lost, p.free(h))
 	}
 	return absent, nil
+}
+
+// free lists the names of the columns that nothing takes.
+func (p *plan) free(h *header) []string {
+	taken := map[int]bool{}
+	for _, r := range p.references {
+		taken[r.at] = true
+	}
+	var out []string
+	for i, c := range h.columns {
+		if c.name != "" && !taken[i] {
+			out = append(out, c.name)
+		}
+	}
+	return out
 }
 
 // find finds the column of a reference in the header.
@@ -76,8 +91,8 @@ func quoted(name string) string { return strconv.Quote(record.Shorten(name)) }
 // shownMost is the number of columns that a message lists.
 const shownMost = 12
 
-// lacking says which columns the header lacks, and what is spelled like them there.
-func lacking(h *header, lost []*reference) error {
+// lacking says which columns the header lacks, and which of the free ones are spelled like them.
+func lacking(h *header, lost []*reference, free []string) error {
 	var missing, hints []string
 	for _, r := range lost {
 		var names []string
@@ -85,7 +100,7 @@ func lacking(h *header, lost []*reference) error {
 			names = append(names, quoted(n))
 		}
 		missing = append(missing, strings.Join(names, " or "))
-		if n := near(r.names, h.names()); n != "" {
+		if n := near(r.names, free); n != "" {
 			hints = append(hints, "near to "+quoted(r.names[0])+" is "+quoted(n))
 		}
 	}

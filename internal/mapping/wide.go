@@ -21,6 +21,7 @@ func (s *source) wide(o *Out) {
 		if e.Values, fault = s.fill(e.Values[:0], recipe, false, nil); fault == nil {
 			n++
 		} else {
+			fault.Worker = s.workerOf(e.Values)
 			o.Fault = o.Fault.and(fault)
 		}
 	}
@@ -28,6 +29,17 @@ func (s *source) wide(o *Out) {
 	if n == 0 && o.Fault == nil {
 		o.NotData = isNoRecord
 	}
+}
+
+// workerOf gives the id of the worker among the values, or nothing.
+func (s *source) workerOf(values []Value) string {
+	field := s.table.Index("worker_id")
+	for _, v := range values {
+		if v.Field == field {
+			return v.Text
+		}
+	}
+	return ""
 }
 
 // and joins the faults of two records of a row: the first is told, and of the second the fields.

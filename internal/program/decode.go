@@ -15,6 +15,8 @@ type decoder struct {
 	file   string
 	diags  *diag.List
 	values int // values read within choices so far
+
+	members map[[2]string]bool // files in archives that the records name one by one
 }
 
 func (d *decoder) at(n *yaml.Node) diag.Position {

@@ -42,7 +42,7 @@ func Load(path string) (*Program, diag.List) {
 // read makes a program of the text of its file.
 func read(file string, text []byte, diags *diag.List) *Program {
 	d := decoder{file: filepath.ToSlash(file), diags: diags}
-	root := d.parse(text)
+	root := d.parse(text, "the program file", "Give it the keys program, sites and records")
 	if root == nil {
 		return nil
 	}
@@ -92,10 +92,11 @@ func plain(err error) string {
 	return err.Error()
 }
 
-// parse gives the top mapping of the only document in text, or nil with an error in the list.
-func (d *decoder) parse(text []byte) *yaml.Node {
+// parse gives the top node of the only document in text, or nil with an error in the list. The file is called
+// what in messages, and content says what belongs into it.
+func (d *decoder) parse(text []byte, what, content string) *yaml.Node {
 	if !utf8.Valid(text) || bytes.IndexByte(text, 0) >= 0 {
-		d.diags.Errorf(diag.Position{File: d.file}, "Save the file as UTF-8", "the program file is not UTF-8 text")
+		d.diags.Errorf(diag.Position{File: d.file}, "Save the file as UTF-8", "%s is not UTF-8 text", what)
 		return nil
 	}
 	reader := yaml.NewDecoder(bytes.NewReader(text))
@@ -103,14 +104,14 @@ func (d *decoder) parse(text []byte) *yaml.Node {
 	err := reader.Decode(&document)
 	switch {
 	case errors.Is(err, io.EOF) || err == nil && len(document.Content) == 0:
-		d.diags.Errorf(diag.Position{File: d.file}, "Give it the keys program, sites and records", "the program file is empty")
+		d.diags.Errorf(diag.Position{File: d.file}, content, "%s is empty", what)
 		return nil
 	case err != nil:
 		d.syntax(err, text)
 		return nil
 	}
 	if err := reader.Decode(&second); err == nil {
-		d.diags.Errorf(d.at(&second), "Keep one program to a file", "the file holds a second YAML document")
+		d.diags.Errorf(d.at(&second), "Keep one document to a file", "the file holds a second YAML document")
 		return nil
 	} else if !errors.Is(err, io.EOF) {
 		d.syntax(err, text)

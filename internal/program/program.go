@@ -17,6 +17,7 @@ type File struct {
 	Program  string       `json:"program" doc:"title of the hearing-conservation program"`
 	Sites    []FileSite   `json:"sites" doc:"sites of the program, each under its own law"`
 	Records  []RecordFile `json:"records" doc:"files with the records; the path alone, if the file is canonical and its name tells the kind"`
+	Same     string       `json:"same_person,omitempty" doc:"YAML file that says which worker ids are one person, and which id stood for several"`
 	AsOf     string       `json:"as_of,omitempty" doc:"day on which the program is judged, YYYY-MM-DD; the flag --as-of comes before it, and without either it is today"`
 	Accepted string       `json:"accepted,omitempty" doc:"YAML file with the gaps that the employer has accepted"`
 }
@@ -33,10 +34,12 @@ type FileSite struct {
 
 // RecordFile is one item of records as the program file states it.
 type RecordFile struct {
-	File  string `json:"file" doc:"path of the file, relative to the program file"`
-	Kind  string `json:"kind,omitempty" doc:"record kind; needed unless the file name tells it"`
-	Sheet string `json:"sheet,omitempty" doc:"sheet of a workbook"`
-	Map   string `json:"map,omitempty" doc:"YAML file that says how the columns of an export become fields"`
+	File     string `json:"file" doc:"path of the file, relative to the program file; an asterisk stands for any part of a name"`
+	Member   string `json:"member,omitempty" doc:"file within a ZIP archive; if left out, each member with a canonical name is read"`
+	Kind     string `json:"kind,omitempty" doc:"record kind; needed unless the map or the file name tells it"`
+	Sheet    string `json:"sheet,omitempty" doc:"sheet of a workbook; may be left out if only one is visible"`
+	Encoding string `json:"encoding,omitempty" doc:"code page of the text, such as windows-1252 or cp850; UTF-8 and UTF-16 are recognized"`
+	Map      string `json:"map,omitempty" doc:"YAML file that says how the columns of an export become fields"`
 }
 
 // Program is a program file that was read and checked.
@@ -48,7 +51,14 @@ type Program struct {
 	AsOf     calendar.Date // day on which the program is judged, or not known
 	Sites    []Site
 	Sources  []Source
-	Accepted string // path of the accepted gaps that can be opened, or empty
+	Accepted string  // path of the accepted gaps that can be opened, or empty
+	Aliases  []Alias // ids of people with several, as the same_person file says
+}
+
+// Path is a file that the program file names. The zero Path names none.
+type Path struct {
+	Open  string // path that can be opened
+	Shown string // path relative to the program's folder, with slashes
 }
 
 // Site is one site of the program.
@@ -61,14 +71,16 @@ type Site struct {
 	ChoicesAt                 map[string]diag.Position // where each of Choices stands
 }
 
-// Source is one file of records.
+// Source is one table of records: a file, a member of a ZIP archive, or a sheet of a workbook.
 type Source struct {
-	Path  string // path that can be opened
-	Shown string // path relative to the program's folder, with slashes
-	Kind  record.Kind
-	Map   string
-	Sheet string
-	At    diag.Position
+	Path     string      // path that can be opened
+	Shown    string      // path relative to the program's folder, with slashes; that of the archive goes before a member's name
+	Member   string      // file within the ZIP archive at Path, or empty
+	Kind     record.Kind // empty if the map must tell it
+	Map      Path        // map of an export; none for a canonical file
+	Sheet    string      // of a workbook, or empty
+	Encoding string      // code page, or empty
+	At       diag.Position
 }
 
 // Site gives the site of an id. It returns false if the program names no such site.
