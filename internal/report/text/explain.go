@@ -39,6 +39,9 @@ func Explain(w io.Writer, e *judge.Explanation, o Format) error {
 	if d := dates(f, e.AsOf); d != "" {
 		p.para(2, 2, sentence(upper(d)))
 	}
+	if f.Accepted != nil {
+		p.para(2, 2, sentence("Accepted "+acceptance(f.Accepted))+" The status stays "+string(f.Status)+", and it is not counted as met.")
+	}
 	parameters(p, e)
 	numbers(p, f)
 	if e.Withheld {

@@ -33,6 +33,7 @@ func (f Format) Write(w io.Writer, r *finding.Report) error {
 	for _, s := range sections {
 		section(p, r, s, names)
 	}
+	accepted(p, r, names)
 	fromMemory(p, r)
 	observations(p, r)
 	if len(r.Remarks) > 0 {
@@ -68,13 +69,19 @@ func table(p *page, r *finding.Report, site finding.Site) {
 	if len(site.Choices) > 0 {
 		p.para(2, 4, "Choices: "+choices(site.Choices))
 	}
-	for _, bundle := range site.Bundles {
+	bundles := site.Bundles
+	if _, own := tally(r, site.ID, finding.OfProgram); len(own) > 0 {
+		bundles = append(slices.Clone(bundles), finding.OfProgram)
+	}
+	for _, bundle := range bundles {
 		numbers, topics := tally(r, site.ID, bundle)
 		if len(topics) == 0 {
 			p.para(2, 2, bundle+": no duty is owed, or none could be judged.")
 			continue
 		}
-		if len(site.Bundles) > 1 {
+		if bundle == finding.OfProgram {
+			p.para(2, 2, "The program's own papers, which no law asks for")
+		} else if len(bundles) > 1 {
 			p.para(2, 2, "By "+bundle)
 		}
 		if p.width < tableWidth {
@@ -155,8 +162,8 @@ var meaning = map[finding.Status]string{
 func totals(p *page, r *finding.Report) {
 	p.blank()
 	judged := 0
-	for _, n := range r.Totals {
-		judged += n
+	for _, s := range finding.Statuses {
+		judged += r.Totals[s] + r.AcceptedTotals[s]
 	}
 	if judged == 0 {
 		p.para(0, 0, "Nothing was judged: no duty found anybody or anything to judge. That does not mean that all is well.")
@@ -168,6 +175,7 @@ func totals(p *page, r *finding.Report) {
 		parts = append(parts, fmt.Sprintf("%d %s", r.Totals[s], s))
 	}
 	p.para(0, 2, "In all: "+strings.Join(parts, ", ")+".")
+	acceptedTotals(p, r)
 	unusable(p, r)
 	if r.Listed != "" {
 		p.para(0, 2, sentence(upper(r.Listed)))

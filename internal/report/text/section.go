@@ -35,23 +35,15 @@ type group struct {
 
 // section lists the findings of one status, major duties first, one block a duty and site.
 func section(p *page, r *finding.Report, s aSection, names map[string]string) {
-	groups, n := grouped(r, s.status)
+	groups, n := grouped(r, func(f *finding.Finding) bool { return f.Status == s.status && f.Accepted == nil })
 	if n == 0 {
 		return
 	}
 	p.heading(s.colour, fmt.Sprintf("%s (%d): %s", s.title, n, meaning[s.status]))
 	for _, g := range groups {
 		first := g.findings[0]
-		title := g.site + ": " + g.duty
-		if len(r.Bundles) > 1 {
-			title += " of " + g.bundle
-		}
-		title += ", " + first.Cite
-		if first.Severity == "minor" {
-			title += ", minor"
-		}
 		p.blank()
-		p.para(0, 2, title)
+		p.para(0, 2, g.title(r))
 		if s.status.Urgency() < finding.Due.Urgency() && first.Remedy != "" {
 			p.para(2, 4, "What to do: "+sentence(first.Remedy))
 		}
@@ -63,6 +55,19 @@ func section(p *page, r *finding.Report, s aSection, names map[string]string) {
 			p.item(2, "- ", line(f, r.AsOf, names))
 		}
 	}
+}
+
+// title names the site, the duty and the paragraph.
+func (g *group) title(r *finding.Report) string {
+	title := g.site + ": " + g.duty
+	if len(r.Bundles) > 1 {
+		title += " of " + g.bundle
+	}
+	title += ", " + g.findings[0].Cite
+	if g.findings[0].Severity == "minor" {
+		title += ", minor"
+	}
+	return title
 }
 
 // together lists findings on which nobody need act at once: those of which the same is to be said share
@@ -85,13 +90,13 @@ func together(p *page, g *group, asOf calendar.Date, names map[string]string) {
 	}
 }
 
-// grouped gathers the findings of a status by duty and site. Groups stand in the order of their most
+// grouped gathers the findings that are wanted by duty and site. Groups stand in the order of their most
 // urgent finding, major before minor.
-func grouped(r *finding.Report, status finding.Status) (groups []*group, n int) {
+func grouped(r *finding.Report, wanted func(*finding.Finding) bool) (groups []*group, n int) {
 	index := map[[3]string]*group{}
 	for i := range r.Findings {
 		f := &r.Findings[i]
-		if f.Status != status {
+		if !wanted(f) {
 			continue
 		}
 		n++
