@@ -16,6 +16,7 @@ type mappedSink struct {
 	header func(column int) string // name of a column in the export
 	column func(field int) int     // column of a field in the export, from 1, 0 if there is none; may be nil
 	cells  []cell
+	skips  bool // a row that repeats another is no data
 }
 
 // take turns one row, or the rows of one record, into records, which it emits, or into rejects. The error is
@@ -48,6 +49,11 @@ func (s *mappedSink) records(o *mapping.Out, rows int) error {
 	good := 0
 	for i := range o.Records {
 		rec, errors := s.entry(o.Line, &o.Records[i])
+		if s.skips && len(o.Records) == 1 && len(errors) == 1 && errors[0] == s.in.register.repeat && failed == nil {
+			s.input.Rows -= rows
+			s.input.declare("repeat", rows)
+			return nil
+		}
 		if len(errors) > 0 {
 			if failed == nil {
 				r := s.exported(s.explain(errors), &o.Records[i])

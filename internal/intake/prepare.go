@@ -123,6 +123,9 @@ func (in *intake) export(ctx context.Context, sink *sink, s *source) error {
 		return nil
 	}
 	m := mappedSink{sink: *sink, header: func(int) string { return "" }}
+	if r := s.mapped.File.Rows; r != nil {
+		m.skips = r.Repeated == "skip"
+	}
 	if h, ok := rows.(interface{ Header(column int) string }); ok {
 		m.header = h.Header
 	}

@@ -81,7 +81,7 @@ func TestEncodingOfTheProgramFile(t *testing.T) {
 
 func TestSheetOfNoWorkbook(t *testing.T) {
 	_, l, err := readAll(t, loaded(t, "[{file: workers.csv, sheet: T}]", "workers.csv", workersCSV))
-	require.ErrorContains(t, err, "workers.csv T!: the file is no workbook, so it has no sheets")
+	require.ErrorContains(t, err, "workers.csv T: the file is no workbook, so it has no sheets")
 	require.Len(t, l.Inputs[0].SHA256, 64)
 }
 

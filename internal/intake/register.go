@@ -11,6 +11,7 @@ import (
 
 // register remembers what was accepted, as far as later rows must agree with it.
 type register struct {
+	repeat       *record.Problem // what was said last of a row that repeats another
 	ledger       *Ledger
 	sites        map[string]bool
 	siteNames    []string
@@ -116,11 +117,15 @@ func (g *register) admit(r record.Record) *record.Problem {
 	if g.column.worker >= 0 {
 		worker = g.table.Text(r, g.column.worker)
 	}
-	if worker != "" && g.workers[worker] == nil && !g.workersMay {
-		return g.orphan(worker)
-	}
-	if p := g.doubted(worker, r); p != nil {
-		return p
+	if worker != "" {
+		switch known := g.workers[worker]; {
+		case known == nil && !g.workersMay:
+			return g.orphan(worker)
+		case known != nil && known.doubts != nil:
+			if p := g.doubted(known, worker, r); p != nil {
+				return p
+			}
+		}
 	}
 	if m, ok := r.(*record.Measurement); ok {
 		if p := g.checkMeasurement(m); p != nil {
@@ -216,8 +221,13 @@ func (g *register) content(r record.Record) digest {
 	return digestOf(g.buffer)
 }
 
-// repeated says of the row at a place that it repeats an earlier one.
+// repeated says of the row at a place that it repeats an earlier one, and remembers that it said so.
 func (g *register) repeated(earlier, at record.Origin) *record.Problem {
+	g.repeat = g.repeats(earlier, at)
+	return g.repeat
+}
+
+func (g *register) repeats(earlier, at record.Origin) *record.Problem {
 	const remedy = "Remove the row, or correct it if something else is meant"
 	switch {
 	case earlier == at:

@@ -33,20 +33,23 @@ func (g *register) admitWorker(w *record.Worker) *record.Problem {
 	if known == nil {
 		known = &person{at: w.At()}
 	}
-	const remedy = "Correct the wrong one; if they are two people, give each an id of its own"
-	if known.birth.Known() && w.BirthDate.Known() && known.birth != w.BirthDate {
+	otherBirth := known.birth.Known() && w.BirthDate.Known() && known.birth != w.BirthDate
+	otherSex := known.sex != "" && w.Sex != "" && known.sex != w.Sex
+	if otherBirth || otherSex {
 		known.doubts = append(known.doubts, this)
-		return refuse("birth_date", w.BirthDate.String(), remedy, "the birth date of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
-	}
-	if known.sex != "" && w.Sex != "" && known.sex != w.Sex {
-		known.doubts = append(known.doubts, this)
-		return refuse("sex", w.Sex, remedy, "the sex of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
 	}
 	for _, other := range known.employment {
 		if overlap(this.days, other.days) {
 			return refuse("hired_on", w.HiredOn.String(), "Give the earlier stretch its left_on, one row a stretch and site; if they are two people, give each an id of its own",
 				"the employment of worker %q overlaps with the one in %s", record.Shorten(w.WorkerID), g.place(other.at))
 		}
+	}
+	const remedy = "Correct the wrong one; if they are two people, give each an id of its own"
+	switch {
+	case otherBirth:
+		return refuse("birth_date", w.BirthDate.String(), remedy, "the birth date of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
+	case otherSex:
+		return refuse("sex", w.Sex, remedy, "the sex of worker %q is not the one in %s", record.Shorten(w.WorkerID), g.place(known.at))
 	}
 	if known.sex == "" {
 		known.sex = w.Sex
@@ -63,11 +66,7 @@ func (g *register) admitWorker(w *record.Worker) *record.Problem {
 
 // doubted refuses a record of an id that rows of workers give to two people, unless only the one whose row was accepted
 // was employed on its day.
-func (g *register) doubted(worker string, r record.Record) *record.Problem {
-	p := g.workers[worker]
-	if p == nil || p.doubts == nil {
-		return nil
-	}
+func (g *register) doubted(p *person, worker string, r record.Record) *record.Problem {
 	if g.column.day >= 0 {
 		day := dayOf(g.table.Text(r, g.column.day))
 		if day.Known() && employed(p.employment, day) && !employed(p.doubts, day) {

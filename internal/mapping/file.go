@@ -36,11 +36,12 @@ type Head struct {
 
 // Rows says which rows are data. What is no data is counted in the ledger all the same.
 type Rows struct {
-	Skip    []int       `json:"skip,omitempty" doc:"rows to pass over, from 1"`
-	Comment []string    `json:"comment,omitempty" doc:"rows whose first filled cell begins with one of these are comments"`
-	Footer  []string    `json:"footer,omitempty" doc:"a row whose first filled cell begins with one of these ends the data"`
-	Only    []Condition `json:"only,omitempty" doc:"only rows that meet all of these are data"`
-	Hidden  string      `json:"hidden,omitempty" enum:"read|skip" doc:"what becomes of hidden rows of a workbook; read if left out"`
+	Skip     []int       `json:"skip,omitempty" doc:"rows to pass over, from 1"`
+	Comment  []string    `json:"comment,omitempty" doc:"rows whose first filled cell begins with one of these are comments"`
+	Footer   []string    `json:"footer,omitempty" doc:"a row whose first filled cell begins with one of these ends the data"`
+	Only     []Condition `json:"only,omitempty" doc:"only rows that meet all of these are data"`
+	Hidden   string      `json:"hidden,omitempty" enum:"read|skip" doc:"what becomes of hidden rows of a workbook; read if left out"`
+	Repeated string      `json:"repeated,omitempty" enum:"reject|skip" doc:"what becomes of a row that gives a record once more, such as the person on each row of tests; reject if left out"`
 }
 
 // Condition is met by a row whose cell is one of the words.
