@@ -29,9 +29,10 @@ func All() []Entry {
 		out = append(out, Entry{"dossier-" + kind, schema.DossierText(kind)})
 	}
 	out = append(out, Entry{"program", schema.Of(program.File{}, programOptions())})
-	out = append(out, mapFile())
+	out = append(out, acceptedFile(), mapFile())
 	out = append(out, Entry{"report", schema.Of(finding.Report{}, reportOptions())})
 	out = append(out, intakeFiles()...)
+	out = append(out, comparisonFile())
 	return append(out, bundleFiles()...)
 }
 

@@ -34,8 +34,8 @@ func (r *run) checkCommand() *cli.Command {
 			outFlag(), rejectsFlag(), strictFlag(),
 			&cli.StringFlag{Name: "ahead", Value: "90d", Usage: "list what is due within `DAYS`"},
 			&cli.BoolFlag{Name: "all", Usage: "list what is met, lifted or due later, and each observation", DisableDefaultText: true},
-			&cli.StringFlag{Name: "fail-on", Value: "gap,unproven", Usage: "end with exit code 1 if there is any of these `STATUSES`, or a rejected row (reject), or never (none)"},
-			healthFlag(), widthFlag(), parallelFlag(),
+			&cli.StringFlag{Name: "fail-on", Value: "gap,unproven", Usage: "end with exit code 1 if there is any of these `STATUSES`, or a rejected row (reject), an accepted finding (accepted), or never (none)"},
+			pseudonymsFlag(), healthFlag(), widthFlag(), parallelFlag(),
 		},
 		Action: r.check,
 	}
@@ -46,7 +46,7 @@ func (r *run) check(c *cli.Context) error {
 	if err != nil {
 		return err
 	}
-	fails, reject, err := failOn(c)
+	fails, err := failOn(c)
 	if err != nil {
 		return err
 	}
@@ -58,6 +58,9 @@ func (r *run) check(c *cli.Context) error {
 		return err
 	}
 	format, _ := report.Named(c.String("format"), style)
+	if _, terminal := r.terminal(); terminal && c.String("out") == "" && report.Binary(format) {
+		return usage("a workbook cannot be shown on a terminal", "Name a file with --out, such as --out report.xlsx")
+	}
 	days, err := ahead(c)
 	if err != nil {
 		return err
@@ -80,7 +83,7 @@ func (r *run) check(c *cli.Context) error {
 	if path := c.String("out"); path != "" {
 		fmt.Fprintf(r.stderr, "Wrote %s: %s.\n", path, counts(result))
 	}
-	if found(result, fails) || reject && len(result.Rejects) > 0 {
+	if found(result, fails.statuses) || fails.reject && len(result.Rejects) > 0 || fails.accepted && accepted(result) > 0 {
 		r.code = exitFound
 	}
 	if c.Bool("strict") && len(result.Rejects) > 0 {
@@ -117,7 +120,10 @@ func (r *run) options(c *cli.Context, args []string) (judge.Options, error) {
 	if _, err = day(c); err != nil {
 		return o, err
 	}
-	if o.Program, err = r.load(args); err != nil {
+	if o.Veil, err = veil(c); err != nil {
+		return o, err
+	}
+	if o.Program, err = r.load(c, args); err != nil {
 		return o, err
 	}
 	if o.Library, err = bundle.Embedded(); err != nil {
@@ -128,6 +134,9 @@ func (r *run) options(c *cli.Context, args []string) (judge.Options, error) {
 	}
 	if o.AsOf, err = r.judged(c, o.Program); err != nil {
 		return o, err
+	}
+	if o.Accepted, err = r.accepted(o.Program); err != nil {
+		return o, discreet(c, err)
 	}
 	o.Bundle, o.HealthDetail, o.Version = c.String("bundle"), c.Bool("health-detail"), Version
 	return o, nil
@@ -148,6 +157,9 @@ func counts(r *finding.Report) string {
 	var parts []string
 	for _, s := range finding.Statuses {
 		parts = append(parts, fmt.Sprintf("%d %s", r.Totals[s], s))
+	}
+	if n := accepted(r); n > 0 {
+		parts = append(parts, fmt.Sprintf("%d accepted and counted apart", n))
 	}
 	switch n := len(r.Rejects); n {
 	case 0:

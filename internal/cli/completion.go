@@ -10,6 +10,8 @@ import (
 	"hearduty/internal/bundle"
 	"hearduty/internal/program"
 	"hearduty/internal/report"
+	"hearduty/internal/report/change"
+	"hearduty/internal/report/pull"
 	"hearduty/policies"
 )
 
@@ -72,6 +74,12 @@ func candidates(app *cli.App, before []string, last string) []string {
 	for _, f := range command.Flags {
 		_, isBool := f.(*cli.BoolFlag)
 		if name := f.Names()[0]; !isBool && len(before) > 1 && strings.TrimLeft(previous, "-") == name && strings.HasPrefix(previous, "-") {
+			if command.Name == "compare" && name == "format" {
+				return change.Names
+			}
+			if command.Name == "sample" && name == "format" {
+				return pull.Names()
+			}
 			return valuesOf(name, before[1:], last)
 		}
 	}

@@ -18,11 +18,11 @@ func (r *run) explainCommand() *cli.Command {
 		ArgsUsage: "FINDING [PROGRAM]",
 		Description: examples(
 			"FINDING is the id of a finding, or as much of its beginning as no other finding has.\n"+
-				"Give the same --as-of, --site and --bundle as in the check that listed it.",
+				"Give the same --as-of, --site, --bundle and --pseudonyms as in the check that listed it.",
 			"hearduty explain f-91425f4c",
 			"hearduty explain f-91425f4c plants --as-of 2026-06-30",
 		),
-		Flags:  []cli.Flag{asOfFlag(), siteFlag(), bundleFlag(), outFlag(), healthFlag(), widthFlag(), parallelFlag()},
+		Flags:  []cli.Flag{asOfFlag(), siteFlag(), bundleFlag(), outFlag(), pseudonymsFlag(), healthFlag(), widthFlag(), parallelFlag()},
 		Action: r.explain,
 	}
 }

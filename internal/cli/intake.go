@@ -10,6 +10,7 @@ import (
 
 	"hearduty/internal/intake"
 	"hearduty/internal/program"
+	"hearduty/internal/pseudonym"
 	"hearduty/internal/report/text"
 )
 
@@ -27,7 +28,7 @@ func (r *run) intakeCommand() *cli.Command {
 			"hearduty intake --draft-map exports/tests.xlsx --sheet Tests --out maps/tests.yaml",
 		),
 		Flags: append([]cli.Flag{
-			outFlag(), rejectsFlag(), strictFlag(), healthFlag(),
+			outFlag(), rejectsFlag(), strictFlag(), pseudonymsFlag(), healthFlag(),
 			&cli.StringFlag{Name: "ledger", Usage: "write what became of every row to `FILE` as JSON"},
 		}, draftFlags()...),
 		Action: r.intake,
@@ -53,7 +54,11 @@ func (r *run) intake(c *cli.Context) error {
 	if err != nil {
 		return err
 	}
-	p, err := r.load(args)
+	veil, err := veil(c)
+	if err != nil {
+		return err
+	}
+	p, err := r.load(c, args)
 	if err != nil {
 		return err
 	}
@@ -63,7 +68,7 @@ func (r *run) intake(c *cli.Context) error {
 	var ledger *intake.Ledger
 	err = r.output(c, func(w io.Writer) error {
 		var err error
-		ledger, err = normalize(r.progress(c.Context, c.String("out") == ""), p, w)
+		ledger, err = normalize(r.progress(c.Context, c.String("out") == ""), p, veil, w)
 		return err
 	})
 	if ledger == nil {
@@ -92,8 +97,8 @@ func (r *run) intake(c *cli.Context) error {
 	return nil
 }
 
-func normalize(ctx context.Context, p *program.Program, w io.Writer) (*intake.Ledger, error) {
-	return intake.Read(ctx, p, intake.NewNDJSONWriter(w, intake.Inputs(p)).Write)
+func normalize(ctx context.Context, p *program.Program, veil *pseudonym.Veil, w io.Writer) (*intake.Ledger, error) {
+	return intake.ReadVeiled(ctx, p, veil, intake.NewNDJSONWriter(w, intake.Inputs(p)).Write)
 }
 
 // books writes the files that --rejects and --ledger name.

@@ -52,7 +52,7 @@ func TestComplete(t *testing.T) {
 			lines = append(lines, c.Name+" --"+f.Names()[0])
 		}
 	}
-	lines = append(lines, "check --format json", "check --fail-on gap,unproven", "check DIR --fail-on none", "bundle us-osha-general-industry",
+	lines = append(lines, "check --format json", "compare --format html", "sample --format csv", "check --fail-on gap,unproven", "check DIR --fail-on none", "bundle us-osha-general-industry",
 		"check --bundle us-osha-general-industry", "completion bash", "help check", "--version", "--help")
 	for _, line := range lines {
 		words := strings.Split(line, " ")

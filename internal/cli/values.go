@@ -44,11 +44,18 @@ func ahead(c *cli.Context) (int, error) {
 // that it would have shown stays hidden.
 const rejectWord = "reject"
 
-// failOn reads the flag --fail-on: statuses, and reject, with commas between them, or none.
-func failOn(c *cli.Context) (out []finding.Status, reject bool, err error) {
+// failing is what --fail-on names.
+type failing struct {
+	statuses         []finding.Status
+	reject, accepted bool
+}
+
+// failOn reads the flag --fail-on: statuses, reject and accepted, with commas between them, or none.
+func failOn(c *cli.Context) (failing, error) {
+	var out failing
 	text := strings.TrimSpace(c.String("fail-on"))
 	if text == "none" {
-		return nil, false, nil
+		return out, nil
 	}
 	names := failWords()
 	for word := range strings.SplitSeq(text, ",") {
@@ -58,15 +65,18 @@ func failOn(c *cli.Context) (out []finding.Status, reject bool, err error) {
 			if near := diag.Near(word, names); near != "" && word != "" {
 				remedy = "Write " + near + " if that is meant"
 			}
-			return nil, false, usage(fmt.Sprintf("--fail-on cannot be %q", word), "%s", remedy)
+			return out, usage(fmt.Sprintf("--fail-on cannot be %q", word), "%s", remedy)
 		}
-		if word == rejectWord {
-			reject = true
-			continue
+		switch word {
+		case rejectWord:
+			out.reject = true
+		case acceptedWord:
+			out.accepted = true
+		default:
+			out.statuses = append(out.statuses, finding.Status(word))
 		}
-		out = append(out, finding.Status(word))
 	}
-	return out, reject, nil
+	return out, nil
 }
 
 func failWords() []string {
@@ -74,7 +84,7 @@ func failWords() []string {
 	for _, s := range finding.Statuses {
 		names = append(names, string(s))
 	}
-	return append(names, rejectWord)
+	return append(names, rejectWord, acceptedWord)
 }
 
 // oneOf refuses a word that is none of the known ones.
@@ -91,12 +101,13 @@ func oneOf(what, word string, known []string) error {
 
 // load reads the program file that the arguments name, or that of the current folder, and tells what is
 // wrong or odd about it.
-func (r *run) load(args []string) (*program.Program, error) {
+func (r *run) load(c *cli.Context, args []string) (*program.Program, error) {
 	path := "."
 	if len(args) > 0 {
 		path = args[0]
 	}
 	p, problems := program.Load(path)
+	keepQuiet(c, problems, path)
 	r.diagnostics(problems)
 	if problems.Failed() {
 		return nil, &quietError{problems}

@@ -81,6 +81,9 @@ func (b *book) write(dir string) error {
 	if err := writeProgram(dir, demoProgram); err != nil {
 		return err
 	}
+	if err := writeAccepted(dir); err != nil {
+		return err
+	}
 	t, err := createTables(dir)
 	if err != nil {
 		return err

@@ -51,6 +51,7 @@ const demoProgram = `# The demo program of hearduty: an invented firm, invented 
 # Kiln Hill has trouble of every kind; Larch Street does everything in time.
 program: Harrow & Slate hearing conservation
 as_of: 2026-06-30
+accepted: accepted.yaml
 sites:
   - {id: kiln-hill, name: Kiln Hill foundry, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
   - {id: larch-street, name: Larch Street joinery, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}

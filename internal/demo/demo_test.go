@@ -131,7 +131,7 @@ func TestNobodyAndNoBrandIsNamed(t *testing.T) {
 func TestNoRecordIsLaterThanTheAsOfDay(t *testing.T) {
 	late := regexp.MustCompile(`\b(2026-0[7-9]|2026-1|20[3-9]|202[7-9])`)
 	for name, text := range read(t, testdata) {
-		if name != "records/testers.csv" { // licences run on
+		if name != "records/testers.csv" && name != "accepted.yaml" { // licences and accepted gaps run on
 			require.Empty(t, late.FindAllString(text, 3), name)
 		}
 	}

@@ -19,6 +19,7 @@ const exportsProgram = `
 # the same as those of program.yaml.
 program: Harrow & Slate hearing conservation
 as_of: 2026-06-30
+accepted: accepted.yaml
 sites:
   - {id: kiln-hill, name: Kiln Hill foundry, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
   - {id: larch-street, name: Larch Street joinery, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}

@@ -106,3 +106,18 @@ func TestCheckEncoding(t *testing.T) {
 		require.NotNil(t, CheckEncoding(name), name)
 	}
 }
+
+// TestMixedEncodings tells of UTF-8 in a file that is read in a page of single bytes.
+func TestMixedEncodings(t *testing.T) {
+	for _, c := range []struct {
+		text, stated string
+		line         int
+	}{
+		{"a,b\nPrüfer,1\nPr\xfcfer,2\n", "windows-1252", 2},
+		{"a,b\nPr\xfcfer,1\n", "windows-1252", 0},
+		{"\xc2\xb1,a\n\x81\xfc,1\n", "shift_jis", 0},
+	} {
+		_, about := table(t, open(t, "x.csv", c.text), Options{Encoding: c.stated})
+		require.Equal(t, c.line, about.UTF8, c.text)
+	}
+}

@@ -7,6 +7,7 @@ import (
 	"sort"
 	"strconv"
 	"strings"
+	"unicode/utf8"
 
 	"hearduty/internal/diag"
 	"hearduty/internal/record"
@@ -116,17 +117,23 @@ func (l *Ledger) Shown() []Reject {
 	out := slices.Clone(l.Rejects)
 	for i := range out {
 		if r := &out[i]; r.Read != "" && l.hides(r) {
-			r.Why = strings.ReplaceAll(r.Why, strconv.Quote(r.Read), "what stands there")
-			if utf8Length(r.Read) > 1 {
-				r.Why = strings.ReplaceAll(r.Why, r.Read, "what stands there")
-			}
-			r.Read = ""
+			r.Why, r.Read = withoutRead(r.Why, r.Read), ""
 		}
 	}
 	return out
 }
 
-func utf8Length(s string) int { return len([]rune(s)) }
+// withoutRead takes what stands in a cell out of a sentence.
+func withoutRead(sentence, read string) string {
+	if read == "" {
+		return sentence
+	}
+	sentence = strings.ReplaceAll(sentence, strconv.Quote(read), "what stands there")
+	if utf8.RuneCountInString(read) > 1 {
+		sentence = strings.ReplaceAll(sentence, read, "what stands there")
+	}
+	return sentence
+}
 
 // Total adds up the inputs.
 func (l *Ledger) Total() Input {

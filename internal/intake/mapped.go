@@ -44,6 +44,7 @@ func (s *mappedSink) records(o *mapping.Out, rows int) error {
 	var failed *Reject
 	if f := o.Fault; f != nil {
 		failed = &Reject{Column: f.Column, Header: f.Header, Field: f.Field, Read: record.Shorten(f.Read), Why: f.Why, Remedy: f.Remedy, Also: slices.Clone(f.Also)}
+		s.in.withholdReject(failed, s.table)
 		s.unread(o.Line, f)
 	}
 	good := 0
@@ -88,7 +89,7 @@ func (s *mappedSink) unread(line int, f *mapping.Fault) {
 	}
 	w := &record.Worker{WorkerID: f.Worker}
 	w.SetAt(record.Origin{Source: int32(s.index), Row: int32(line)})
-	s.in.people.translate(w)
+	s.in.identify(w)
 	s.in.register.rejected(w)
 }
 

@@ -11,6 +11,7 @@ import (
 	"hearduty/internal/diag"
 	"hearduty/internal/grid"
 	"hearduty/internal/program"
+	"hearduty/internal/pseudonym"
 	"hearduty/internal/record"
 )
 
@@ -22,7 +23,11 @@ var first = []record.Kind{"worker", "group", "instrument", "tester", "protector"
 // diag.List if files were refused, which never keeps the others from being read; otherwise it is the
 // context's error, or what emit returned.
 func Read(ctx context.Context, p *program.Program, emit func(record.Record) error) (*Ledger, error) {
-	in := &intake{ledger: &Ledger{Inputs: Inputs(p)}, people: newPeople(p.Aliases), emit: emit, tell: progressOf(ctx)}
+	return read(ctx, p, nil, emit)
+}
+
+func read(ctx context.Context, p *program.Program, veil *pseudonym.Veil, emit func(record.Record) error) (*Ledger, error) {
+	in := &intake{ledger: &Ledger{Inputs: Inputs(p)}, people: newPeople(p.Aliases), veil: veil, emit: emit, tell: progressOf(ctx)}
 	defer in.tell("", 0)
 	sources := in.prepare(p)
 	in.register = newRegister(p, sources, in.ledger)
@@ -35,7 +40,12 @@ func Read(ctx context.Context, p *program.Program, emit func(record.Record) erro
 	}
 	in.people.done(&in.remarks)
 	in.ledger.Remarks = append(in.ledger.Remarks, in.remarks.done()...)
+	in.withholdDiagnostics(in.ledger.Remarks)
+	in.withholdDiagnostics(in.ledger.Unreadable)
 	in.ledger.sort()
+	if err == nil {
+		err = in.doubled()
+	}
 	if err == nil {
 		err = in.ledger.Unreadable.Err()
 	}
@@ -71,6 +81,7 @@ func order(sources []source) []int {
 type intake struct {
 	ledger   *Ledger
 	people   *people
+	veil     *pseudonym.Veil // nil for none
 	register *register
 	observer *observer
 	remarks  remarks
@@ -171,9 +182,9 @@ func (in *intake) refuse(sink *sink, why *refusal) {
 	input := sink.input
 	in.register.refused(input.Kind)
 	in.ledger.Unreadable = append(in.ledger.Unreadable, why.diagnostic(input.File, input.Sheet))
-	in.ledger.Rejects = append(in.ledger.Rejects, Reject{
-		File: input.File, Sheet: input.Sheet, Column: why.column, Field: why.field, Why: why.problem, Remedy: why.remedy, Source: sink.index,
-	})
+	reject := Reject{File: input.File, Sheet: input.Sheet, Column: why.column, Field: why.field, Why: why.problem, Remedy: why.remedy, Source: sink.index}
+	in.withholdReject(&reject, sink.table)
+	in.ledger.Rejects = append(in.ledger.Rejects, reject)
 }
 
 func (in *intake) noRows(input *Input) {

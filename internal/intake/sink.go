@@ -24,7 +24,9 @@ func (s *sink) take(r *row) error {
 	}
 	s.input.Rows++
 	if f := r.fault; f != nil {
-		s.reject(r.line, Reject{Column: f.column, Field: f.field, Read: record.Shorten(f.read), Why: f.why, Remedy: f.remedy})
+		reject := Reject{Column: f.column, Field: f.field, Read: record.Shorten(f.read), Why: f.why, Remedy: f.remedy}
+		s.in.withholdReject(&reject, s.table)
+		s.reject(r.line, reject)
 		return nil
 	}
 	rec, errors := s.record(r.line, r.cells)
@@ -46,9 +48,10 @@ func (s *sink) record(line int, cells []cell) (record.Record, []*record.Problem)
 	rec := s.table.New()
 	rec.SetAt(record.Origin{Source: int32(s.index), Row: int32(line)})
 	errors := s.fill(line, cells, rec)
-	s.in.people.translate(rec)
+	s.in.identify(rec)
 	if len(errors) == 0 {
 		if p := s.in.register.admit(rec); p != nil {
+			s.in.withholdCell(p)
 			errors = append(errors, p)
 		}
 	}
@@ -86,7 +89,9 @@ func (s *sink) fill(line int, cells []cell, rec record.Record) []*record.Problem
 			note(p)
 		}
 	}
+	s.in.withhold(errors)
 	if len(errors) == 0 {
+		s.in.withhold(warnings)
 		for _, p := range warnings {
 			s.remark(line, p)
 		}

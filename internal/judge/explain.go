@@ -57,6 +57,7 @@ func Explain(ctx context.Context, o Options, id string) (*Explanation, error) {
 	if err := c.judgeAll(ctx); err != nil {
 		return nil, err
 	}
+	c.explainAccepted()
 	switch len(c.found) {
 	case 0:
 		return nil, fmt.Errorf("%s: %w", id, ErrNoFinding)

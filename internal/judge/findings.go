@@ -28,7 +28,7 @@ func (c *check) judgeFile(ctx context.Context, b *bench, f *dossier.File) (liste
 		}
 	}
 	kept.done()
-	return len(kept.findings), nil
+	return len(kept.findings) + len(kept.taken), nil
 }
 
 // settled is an outcome with the obligation that it comes from, if any.
@@ -76,13 +76,13 @@ type keeper struct {
 	file     *dossier.File
 	keys     map[string]bool // keys seen of the duty at hand
 	findings []finding.Finding
+	taken    []taken
 	counts   []countKey
 	tallies  []tally
 }
 
 // keep counts an outcome and, if it is to be listed, writes it as a finding.
 func (k *keeper) keep(d *bundle.Duty, x outcome, o *obligation) {
-	k.counts = append(k.counts, countKey{d.Topic, x.status})
 	if k.file.Kind == dossier.KindWorker {
 		if t, ok := rateOf(d, &x, o); ok {
 			k.tallies = append(k.tallies, t)
@@ -93,10 +93,15 @@ func (k *keeper) keep(d *bundle.Duty, x outcome, o *obligation) {
 		key = fmt.Sprintf("%s-%d", x.key, n)
 	}
 	k.keys[key] = true
+	accepted := k.take(d, x, o, key)
 	if k.check.wanted != "" {
 		k.explain(d, x, o, key)
 		return
 	}
+	if accepted {
+		return
+	}
+	k.counts = append(k.counts, countKey{d.Topic, x.status})
 	if k.check.listed(&x) {
 		k.findings = append(k.findings, k.finding(d, x, o, key))
 	}
@@ -186,6 +191,7 @@ func (k *keeper) done() {
 	k.bench.mu.Lock()
 	defer k.bench.mu.Unlock()
 	k.bench.findings = append(k.bench.findings, k.findings...)
+	k.bench.taken = append(k.bench.taken, k.taken...)
 	for _, key := range k.counts {
 		k.bench.counts[key]++
 	}
@@ -194,7 +200,7 @@ func (k *keeper) done() {
 // report puts the result together: findings sorted, counts added up.
 func (c *check) report() *finding.Report {
 	r := &finding.Report{
-		Tool: finding.Tool{Name: "hearduty", Version: c.Version}, Program: c.Program.Title, AsOf: c.AsOf, Cautions: cautions,
+		Tool: finding.Tool{Name: "hearduty", Version: c.Version}, Program: c.Program.Title, AsOf: c.AsOf, Cautions: c.cautions(),
 		Sites: []finding.Site{}, Bundles: []finding.Bundle{}, Inputs: c.ledger.Inputs, Rejects: c.rejects(), Remarks: []string{},
 		Totals: map[finding.Status]int{}, AcceptedTotals: map[finding.Status]int{}, Counts: []finding.Count{}, Listed: c.listedWords(), Findings: []finding.Finding{},
 		Observations: []finding.Observation{}, ObservationCounts: []finding.ObservationCount{},
@@ -205,12 +211,16 @@ func (c *check) report() *finding.Report {
 	if counts := c.ledger.ObservationCounts(); counts != nil {
 		r.Remarks = append(r.Remarks, "hearduty intake lists rows that contradict each other or themselves: "+strings.Join(counts, ", "))
 	}
+	if text := c.later.remark(c.AsOf, c.ledger); text != "" {
+		r.Remarks = append(r.Remarks, text)
+	}
 	for _, b := range c.used {
 		r.Bundles = append(r.Bundles, finding.Bundle{
 			ID: b.ID, Title: b.About.Title, Revision: b.Revision, SHA256: b.SHA256, Kind: b.About.Kind,
 			CheckedOn: b.About.CheckedOn, Cautions: b.About.Cautions,
 		})
 	}
+	own := c.settleAccepted(r.AcceptedTotals)
 	for _, s := range c.sites {
 		site := finding.Site{ID: s.ID, Name: s.Name, Bundles: c.bundlesOf(s), Choices: map[string]any{}}
 		for _, b := range c.benches[s.ID] {
@@ -220,6 +230,7 @@ func (c *check) report() *finding.Report {
 			b.findings = nil
 			r.Counts = append(r.Counts, b.sortedCounts(r.Totals)...)
 		}
+		own.add(r, s.ID)
 		r.Sites = append(r.Sites, site)
 	}
 	r.Remarks = append(r.Remarks, c.unplaced()...)

@@ -10,6 +10,7 @@ import (
 	"slices"
 	"sync"
 
+	"hearduty/internal/accept"
 	"hearduty/internal/bundle"
 	"hearduty/internal/calendar"
 	"hearduty/internal/diag"
@@ -17,6 +18,7 @@ import (
 	"hearduty/internal/finding"
 	"hearduty/internal/intake"
 	"hearduty/internal/program"
+	"hearduty/internal/pseudonym"
 	"hearduty/internal/record"
 )
 
@@ -24,15 +26,17 @@ import (
 type Options struct {
 	Program      *program.Program
 	Library      bundle.Library
-	AsOf         calendar.Date // the day on which the program is judged
-	Sites        []string      // only these sites; empty for all
-	Bundle       string        // judge every chosen site by this bundle instead of its own
-	AheadDays    int           // how many days ahead a due finding is listed
-	All          bool          // list met and lifted findings and those due later, too
-	HealthDetail bool          // show audiometric figures
-	Portraits    bool          // draw each subject that has a listed finding
-	Parallel     int           // number of subjects judged at a time; 0 for one a processor
-	Version      string        // of the tool, for the report
+	AsOf         calendar.Date   // the day on which the program is judged
+	Sites        []string        // only these sites; empty for all
+	Bundle       string          // judge every chosen site by this bundle instead of its own
+	AheadDays    int             // how many days ahead a due finding is listed
+	All          bool            // list met and lifted findings and those due later, too
+	HealthDetail bool            // show audiometric figures
+	Portraits    bool            // draw each subject that has a listed finding
+	Accepted     *accept.List    // the gaps that the employer has accepted; nil for none
+	Veil         *pseudonym.Veil // puts codes in place of the ids of persons; nil for none
+	Parallel     int             // number of subjects judged at a time; 0 for one a processor
+	Version      string          // of the tool, for the report
 
 	// keepRecords is set where whole records are to be shown.
 	keepRecords bool
@@ -78,6 +82,7 @@ type check struct {
 	found     []explained
 	seen      seen
 	gallery   gallery
+	later     later
 }
 
 // bench is one site under one bundle.
@@ -90,6 +95,7 @@ type bench struct {
 
 	mu       sync.Mutex
 	findings []finding.Finding
+	taken    []taken
 	counts   map[countKey]int
 	copies   dossier.Copies // kept at the first bench of a site
 	ears     ears
@@ -102,6 +108,19 @@ type countKey struct {
 }
 
 func newCheck(ctx context.Context, o Options) (*check, error) {
+	c, err := readAll(ctx, o)
+	if err != nil {
+		return nil, err
+	}
+	if err := c.prepare(ctx); err != nil {
+		c.store.Close()
+		return nil, err
+	}
+	return c, nil
+}
+
+// readAll begins a check: it settles what is to be judged and reads the records. No rule is prepared yet.
+func readAll(ctx context.Context, o Options) (*check, error) {
 	c := &check{Options: o, benches: map[string][]*bench{}}
 	if err := c.choose(); err != nil {
 		return nil, err
@@ -110,16 +129,18 @@ func newCheck(ctx context.Context, o Options) (*check, error) {
 	read := o.read
 	if read == nil {
 		read = func(ctx context.Context, emit func(record.Record) error) (*intake.Ledger, error) {
-			return intake.Read(ctx, o.Program, emit)
+			return intake.ReadVeiled(ctx, o.Program, o.Veil, emit)
 		}
 	}
-	ledger, err := read(ctx, c.store.Add)
-	if err != nil {
-		c.store.Close()
-		return nil, err
+	ledger, err := read(ctx, func(r record.Record) error {
+		c.later.look(r, c.AsOf)
+		return c.store.Add(r)
+	})
+	if err == nil {
+		c.ledger = ledger
+		c.registers, err = c.store.Registers()
 	}
-	c.ledger = ledger
-	if err := c.prepare(ctx); err != nil {
+	if err != nil {
 		c.store.Close()
 		return nil, err
 	}
@@ -165,11 +186,6 @@ func (c *check) bundlesOf(s *program.Site) []string {
 
 // prepare makes the engine of every bundle and the builder of every site under each.
 func (c *check) prepare(ctx context.Context) error {
-	registers, err := c.store.Registers()
-	if err != nil {
-		return err
-	}
-	c.registers = registers
 	engines := map[string]Engine{}
 	grounds := map[string]*dossier.Ground{}
 	for _, s := range c.sites {
@@ -182,7 +198,7 @@ func (c *check) prepare(ctx context.Context) error {
 				}
 				measures := b.Measures
 				measures.Hearing.Sums = c.HealthDetail
-				engines[id], grounds[id] = engine, dossier.NewGround(registers, measures, b, c.AsOf)
+				engines[id], grounds[id] = engine, dossier.NewGround(c.registers, measures, b, c.AsOf)
 				grounds[id].KeepRecords = c.keepRecords
 				c.used = append(c.used, b)
 			}

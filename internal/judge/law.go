@@ -30,6 +30,11 @@ func (c *check) lawOf(r *finding.Report) {
 			}
 		}
 	}
+	if c.Accepted != nil {
+		for _, d := range acceptDuties {
+			r.Duties = append(r.Duties, d.shown(c.Accepted.File))
+		}
+	}
 	slices.SortStableFunc(r.Duties, func(a, b finding.Duty) int {
 		return cmp.Or(cmp.Compare(a.Bundle, b.Bundle), cmp.Compare(slices.Index(finding.Topics, a.Topic), slices.Index(finding.Topics, b.Topic)), cmp.Compare(a.ID, b.ID))
 	})

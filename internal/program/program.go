@@ -51,7 +51,7 @@ type Program struct {
 	AsOf     calendar.Date // day on which the program is judged, or not known
 	Sites    []Site
 	Sources  []Source
-	Accepted string  // path of the accepted gaps that can be opened, or empty
+	Accepted Path    // the file of accepted gaps, if any
 	Aliases  []Alias // ids of people with several, as the same_person file says
 }
 

@@ -27,11 +27,7 @@ func (d *decoder) program(root *yaml.Node, p *Program) {
 	if n := values["as_of"]; n != nil {
 		p.AsOf = d.day(n, "as_of")
 	}
-	if n := values["accepted"]; n != nil {
-		if p.Accepted = d.path(n, "accepted", p).Open; p.Accepted != "" {
-			d.diags.Warnf(d.at(n), "Read the gaps as they stand", "accepted gaps are not applied by this version")
-		}
-	}
+	p.Accepted = d.path(values["accepted"], "accepted", p)
 }
 
 func (d *decoder) site(n *yaml.Node, p *Program) {

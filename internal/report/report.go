@@ -14,6 +14,7 @@ import (
 	"hearduty/internal/report/ndjson"
 	"hearduty/internal/report/sarif"
 	"hearduty/internal/report/text"
+	"hearduty/internal/report/xlsx"
 )
 
 // Format is one form of a report.
@@ -32,7 +33,7 @@ type Options struct {
 
 // Formats lists all forms, the default first.
 func Formats(o Options) []Format {
-	return []Format{text.Format{Width: o.Width, Colour: o.Colour}, json.Format{}, html.Format{},
+	return []Format{text.Format{Width: o.Width, Colour: o.Colour}, json.Format{}, html.Format{}, xlsx.Format{},
 		csv.Format{}, sarif.Format{}, junit.Format{}, ics.Format{}, ndjson.Format{}}
 }
 
@@ -70,4 +71,10 @@ func Split(f Format, r *finding.Report) []Part {
 		return page.Split(r)
 	}
 	return nil
+}
+
+// Binary says whether a form is no text, so that a terminal should not be given it.
+func Binary(f Format) bool {
+	_, ok := f.(xlsx.Format)
+	return ok
 }

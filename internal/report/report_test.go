@@ -6,6 +6,7 @@ import (
 	"flag"
 	"os"
 	"path/filepath"
+	"regexp"
 	"strings"
 	"testing"
 	"unicode"
@@ -56,6 +57,9 @@ func whole(of func() *finding.Report) func() *finding.Report {
 	}
 }
 
+// dressed is the style and the script of a page, which are the same in all.
+var dressed = regexp.MustCompile(`(?s)<(style|script)>.*?</(?:style|script)>`)
+
 func TestGolden(t *testing.T) {
 	for name, make := range reports {
 		for _, f := range Formats(Options{}) {
@@ -63,7 +67,9 @@ func TestGolden(t *testing.T) {
 			if err := f.Write(&b, make()); err != nil {
 				t.Fatal(err)
 			}
-			golden(t, name+"."+f.Name(), b.Bytes())
+			if !Binary(f) { // its own tests hold the cells of a workbook
+				golden(t, name+"."+f.Name(), dressed.ReplaceAll(b.Bytes(), []byte("<$1>…</$1>")))
+			}
 		}
 	}
 }

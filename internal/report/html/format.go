@@ -8,6 +8,7 @@ import (
 	"fmt"
 	"html/template"
 	"io"
+	"net/url"
 	"slices"
 
 	"hearduty/internal/finding"
@@ -35,6 +36,7 @@ var (
 
 var functions = template.FuncMap{
 	"figure": figureOf, "mark": mark, "anchorOf": anchor, "dayOf": day, "short": short, "spaced": spaced, "choices": choices, "notData": notData,
+	"count": count, "accepted": accepted, "place": place, "queryOf": url.QueryEscape,
 }
 
 // Write writes the report. Findings beyond MostFindings are left out, the least urgent first, and the page says so.

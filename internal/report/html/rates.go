@@ -92,7 +92,7 @@ func rateCellOf(of map[int]finding.Rate, year int) rateCell {
 	case !ok:
 		return rateCell{Percent: "–"}
 	case r.Suppressed || r.Part == nil || r.Of == nil || r.Percent == nil:
-		return rateCell{Percent: "too few to show"}
+		return rateCell{Percent: "too few"}
 	}
-	return rateCell{fmt.Sprintf("%.1f %%", *r.Percent), fmt.Sprintf("%d of %d", *r.Part, *r.Of)}
+	return rateCell{fmt.Sprintf("%.1f\u00a0%%", *r.Percent), fmt.Sprintf("%d\u00a0of\u00a0%d", *r.Part, *r.Of)}
 }

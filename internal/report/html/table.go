@@ -8,6 +8,7 @@ import (
 	"strings"
 
 	"hearduty/internal/finding"
+	"hearduty/internal/report/phrase"
 )
 
 // row is a line of the register as the page shows it before its script runs.
@@ -21,13 +22,14 @@ type row struct {
 // table writes findings compactly for the page's script: words that repeat stand once, in a list.
 type table struct {
 	r      *finding.Report
+	titles phrase.Titles
 	duties map[[2]string]*finding.Duty
 	words  []string
 	known  map[string]int
 }
 
-func newTable(r *finding.Report) *table {
-	t := &table{r: r, duties: map[[2]string]*finding.Duty{}, known: map[string]int{}}
+func newTable(r *finding.Report, titles phrase.Titles) *table {
+	t := &table{r: r, titles: titles, duties: map[[2]string]*finding.Duty{}, known: map[string]int{}}
 	for i := range r.Duties {
 		t.duties[[2]string{r.Duties[i].Bundle, r.Duties[i].ID}] = &r.Duties[i]
 	}
@@ -47,14 +49,14 @@ func (t *table) duty(f *finding.Finding) *finding.Duty {
 	if d := t.duties[[2]string{f.Bundle, f.Duty}]; d != nil {
 		return d
 	}
-	return &finding.Duty{Bundle: f.Bundle, ID: f.Duty, Title: f.Duty, Topic: f.Topic}
+	return &finding.Duty{Bundle: f.Bundle, ID: f.Duty, Topic: f.Topic}
 }
 
 func (t *table) first(findings []finding.Finding, n int) []row {
 	var out []row
 	for i := range findings[:min(n, len(findings))] {
 		f := &findings[i]
-		out = append(out, row{f, t.duty(f).Title, day(f.Due), over(f)})
+		out = append(out, row{f, t.titles.Of(f), day(f.Due), over(f)})
 	}
 	return out
 }
@@ -64,10 +66,7 @@ func over(f *finding.Finding) string {
 	if f.DaysOver <= 0 {
 		return ""
 	}
-	if f.DaysOver == 1 {
-		return "1 day over"
-	}
-	return finding.Words(f.DaysOver) + " days over"
+	return count(f.DaysOver, "day") + " over"
 }
 
 // line is a finding as the script reads it. Numbers are places in the list of words.
@@ -89,7 +88,7 @@ type line struct {
 	Law      []int    `json:"l,omitempty"` // name, value, paragraph, how seen
 	Health   []int    `json:"h,omitempty"` // name, value
 	Evidence []int    `json:"w,omitempty"` // record, file, row
-	Accepted []string `json:"a,omitempty"` // reason, by, until
+	Accepted []string `json:"a,omitempty"` // in short, reason, by
 }
 
 // dutyLine is a duty as the script reads it.
@@ -103,7 +102,7 @@ type dutyLine struct {
 }
 
 type data struct {
-	AsOf     string           `json:"asOf"`
+	Says     string           `json:"says"` // how many findings are listed, and which
 	Statuses []finding.Status `json:"statuses"`
 	Words    []string         `json:"words"`
 	Duties   []dutyLine       `json:"duties"`
@@ -111,17 +110,17 @@ type data struct {
 }
 
 // data gives the register as JSON. The encoder writes <, > and & in a form that cannot end the script.
-func (t *table) data(findings []finding.Finding) (template.JS, error) {
-	d := data{AsOf: t.r.AsOf.String(), Statuses: finding.Statuses, Duties: []dutyLine{}, Lines: make([]line, 0, len(findings))}
-	place := map[[2]string]int{}
+func (t *table) data(findings []finding.Finding, says string) (template.JS, error) {
+	d := data{Says: says, Statuses: finding.Statuses, Duties: []dutyLine{}, Lines: make([]line, 0, len(findings))}
+	at := map[[4]string]int{}
 	dutyAt := func(f *finding.Finding) int {
-		key := [2]string{f.Bundle, f.Duty}
-		n, ok := place[key]
+		key := [4]string{f.Bundle, f.Duty, f.Topic, f.Severity}
+		n, ok := at[key]
 		if !ok {
 			n = len(d.Duties)
-			place[key] = n
+			at[key] = n
 			x := t.duty(f)
-			d.Duties = append(d.Duties, dutyLine{t.word(f.Bundle), f.Duty, x.Title, x.Description, f.Topic, f.Severity})
+			d.Duties = append(d.Duties, dutyLine{t.word(f.Bundle), f.Duty, t.titles.Of(f), x.Description, f.Topic, f.Severity})
 		}
 		return n
 	}
@@ -131,14 +130,10 @@ func (t *table) data(findings []finding.Finding) (template.JS, error) {
 			Status: f.Status.Urgency(), Due: day(f.Due), Done: day(f.Done), Over: f.DaysOver, Message: t.word(f.Message), Cite: t.word(f.Cite), Remedy: t.word(f.Remedy)}
 		t.facts(f, &l)
 		if a := f.Accepted; a != nil {
-			l.Accepted = []string{a.Reason, a.ApprovedBy, day(a.Until)}
+			l.Accepted = []string{accepted(a), a.Reason, a.ApprovedBy}
 		}
 		for _, e := range f.Evidence {
-			file := e.File
-			if e.Sheet != "" {
-				file += ", sheet " + e.Sheet
-			}
-			l.Evidence = append(l.Evidence, t.word(e.Record), t.word(file), e.Row)
+			l.Evidence = append(l.Evidence, t.word(e.Record), t.word(place(e.File, e.Sheet, 0)), e.Row)
 		}
 		d.Lines = append(d.Lines, l)
 	}
