@@ -9,14 +9,16 @@ import (
 	"github.com/open-policy-agent/opa/v1/ast"
 
 	"hearduty/internal/calendar"
+	"hearduty/internal/diag"
 	"hearduty/internal/dossier"
 )
 
 // Bundle is one loaded bundle.
 type Bundle struct {
 	ID         string
-	Revision   string // of the manifest
-	SHA256     string // digest over the paths and contents of all its files
+	Revision   string   // of the manifest
+	SHA256     string   // digest over the paths and contents of all its files, and of those of the bundles that it extends
+	Extends    []string // bundles that it extends, directly or through others, the nearest first
 	About      About
 	Parameters map[string]Parameter
 	Choices    map[string]Choice
@@ -24,6 +26,7 @@ type Bundle struct {
 	Measures   dossier.Measures
 	Duties     []*Duty // by topic, then in order of citation
 
+	Warnings diag.List             // what somebody should look at, such as a parameter looser than that of the bundle extended
 	Week     *calendar.WorkingWeek // working days, if the law counts in them
 	Compiler *ast.Compiler         // the checked rules
 	Data     map[string]any        // all data of the bundle, JSON-shaped
@@ -36,6 +39,8 @@ type About struct {
 	Authority   string       `json:"authority" doc:"who makes and enforces it"`
 	Country     string       `json:"country" doc:"country code"`
 	Region      string       `json:"region,omitempty" doc:"state, province or region"`
+	Extends     []string     `json:"extends,omitempty" doc:"bundles whose duties and parameters hold here, too, unless this one has its own of the name"`
+	Drops       []string     `json:"drops,omitempty" doc:"duties, by id, and parameters, by name, of the extended bundles that do not hold here"`
 	Kind        string       `json:"kind" enum:"law|guidance|practice|company" doc:"how it binds"`
 	Instruments []Instrument `json:"instruments" doc:"the texts it reads"`
 	InForce     string       `json:"in_force" format:"date" doc:"first day judged by it"`
@@ -60,9 +65,10 @@ type Reading struct {
 
 // Parameter is one number, interval or list of the law, by the days on which it is in force.
 type Parameter struct {
-	About  string  `json:"about" doc:"what it is"`
-	Unit   string  `json:"unit,omitempty" doc:"unit of the value"`
-	Values []Value `json:"values" doc:"values, oldest first"`
+	About    string  `json:"about" doc:"what it is"`
+	Unit     string  `json:"unit,omitempty" doc:"unit of the value"`
+	Stricter string  `json:"stricter,omitempty" enum:"lower|higher" doc:"which way a value asks for more, so that a bundle that extends this one can be told to be looser"`
+	Values   []Value `json:"values" doc:"values, oldest first"`
 }
 
 // Value is a parameter's value from a day on.
@@ -163,6 +169,7 @@ type Duty struct {
 	Evidence    []string // record kinds that prove it
 	Remedy      string   // what to do
 	File        string   // path of the module in the bundle
+	From        string   // id of the bundle that it comes from: this one, or one that it extends
 	Text        string   // the module as written
 }
 

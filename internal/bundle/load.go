@@ -6,13 +6,13 @@ import (
 	"encoding/json"
 	"fmt"
 	"io/fs"
+	"maps"
 	"path"
 	"slices"
 	"strings"
 	"sync"
 
 	"hearduty/internal/diag"
-	"hearduty/internal/schema"
 	"hearduty/policies"
 )
 
@@ -96,19 +96,24 @@ func (f files) digest() string {
 // diagnostics name file, line and column of whatever is wrong; with an error among them there is no bundle.
 func Load(fsys fs.FS, dir string) (*Bundle, diag.List) {
 	var problems diag.List
-	all, err := readFiles(fsys, dir, commonDir)
-	if err != nil {
-		problems.Errorf(diag.Position{File: dir}, "Name a folder that holds a bundle", "%v", err)
+	l := layers(fsys, dir, nil, &problems)
+	if problems.Failed() {
 		return nil, problems
 	}
-	b := &Bundle{SHA256: all.digest()}
-	b.readManifest(all, dir, &problems)
-	b.readData(all, dir, &problems)
+	shared, err := readFiles(fsys, commonDir)
+	if err != nil {
+		problems.Errorf(diag.Position{File: commonDir}, "Put the shared rules beside the bundle", "%v", err)
+		return nil, problems
+	}
+	maps.Copy(l.read, shared)
+	b := &Bundle{ID: l.about.ID, Revision: l.revision, SHA256: l.read.digest(), Extends: l.chain, Data: l.data}
+	b.take(l, &problems)
 	if problems.Failed() {
 		return nil, problems
 	}
 	b.checkData(dir, &problems)
-	b.readRules(all, dir, &problems)
+	b.checkLooser(l, &problems)
+	b.readRules(l, shared, &problems)
 	if problems.Failed() {
 		return nil, problems
 	}
@@ -116,52 +121,37 @@ func Load(fsys fs.FS, dir string) (*Bundle, diag.List) {
 	if problems.Failed() {
 		return nil, problems
 	}
+	b.Warnings = problems
 	return b, problems
 }
 
-func (b *Bundle) readManifest(all files, dir string, problems *diag.List) {
-	file := path.Join(dir, ".manifest")
+func (l *layer) readManifest(problems *diag.List) {
+	file := path.Join(l.dir, ".manifest")
 	var manifest struct {
 		Revision string   `json:"revision"`
 		Roots    []string `json:"roots"`
 	}
-	if err := json.Unmarshal(all[file], &manifest); err != nil {
+	if err := json.Unmarshal(l.read[file], &manifest); err != nil {
 		problems.Errorf(diag.Position{File: file}, "Write a JSON object with revision and roots", "the manifest cannot be read: %v", err)
 	}
-	b.Revision = manifest.Revision
-	if b.Revision == "" {
+	if l.revision = manifest.Revision; l.revision == "" {
 		problems.Errorf(diag.Position{File: file}, "Add a revision, such as its date", "the manifest has no revision")
 	}
 }
 
-// readData reads the five data files, each against its schema, into the bundle and into b.Data.
-func (b *Bundle) readData(all files, dir string, problems *diag.List) {
-	b.Data = map[string]any{}
+// take reads the data of all layers into the bundle.
+func (b *Bundle) take(l *layer, problems *diag.List) {
 	for name, into := range map[string]any{
 		"about": &b.About, "parameters": &b.Parameters, "choices": &b.Choices, "paragraphs": &b.Paragraphs, "measures": &b.Measures,
 	} {
-		file := path.Join(dir, name, "data.yaml")
-		content, ok := all[file]
-		if !ok {
-			problems.Errorf(diag.Position{File: file}, "Add the file", "the bundle has no %s", name)
-			continue
+		if l.data[name] == nil {
+			l.data[name] = map[string]any{}
 		}
-		value, found := schema.YAML(name, file, content)
-		*problems = append(*problems, found...)
-		if found.Failed() {
-			continue
-		}
-		b.Data[name] = value
-		if err := remarshal(value, into); err != nil {
-			problems.Errorf(diag.Position{File: file}, "", "%v", err)
+		if err := remarshal(l.data[name], into); err != nil {
+			problems.Errorf(diag.Position{File: l.file(name)}, "", "%v", err)
 		}
 	}
-	problems.Sort()
-	b.ID = b.About.ID
-	if base := path.Base(dir); b.ID != base && b.ID != "" {
-		problems.Errorf(diag.Position{File: path.Join(dir, "about", "data.yaml")}, "Give the folder and the bundle the same name",
-			"the bundle calls itself %q but lies in the folder %q", b.ID, base)
-	}
+	b.About = l.about // with what it inherits
 }
 
 func remarshal(value, into any) error {

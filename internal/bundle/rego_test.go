@@ -66,7 +66,13 @@ func TestRegoRules(t *testing.T) {
 				return nil
 			})
 			require.NoError(t, err)
-			require.Greater(t, ran, len(b.Duties), "every duty has several tests")
+			own := 0
+			for _, d := range b.Duties {
+				if d.From == id { // those of a bundle that it extends are tested there
+					own++
+				}
+			}
+			require.Greater(t, ran, own, "every duty has several tests")
 			for file, lines := range coverage.Report(modules).Files {
 				if !isTest(file) {
 					assert.Empty(t, lines.NotCovered, "%s has lines that no test reaches", file)
@@ -117,7 +123,7 @@ func TestEveryDutyHasTests(t *testing.T) {
 	require.NoError(t, err)
 	for _, id := range library.IDs() {
 		for _, d := range library[id].Duties {
-			content, err := fs.ReadFile(policies.FS, id+"/"+strings.TrimSuffix(d.File, ".rego")+"_test.rego")
+			content, err := fs.ReadFile(policies.FS, d.From+"/"+strings.TrimSuffix(d.File, ".rego")+"_test.rego")
 			if assert.NoError(t, err) {
 				assert.Contains(t, string(content), "package duty."+d.Package+"_test")
 			}

@@ -17,13 +17,13 @@ import (
 
 // readRules parses the modules of the bundle and the shared ones, reads the duties from their
 // annotations, and compiles the rules against the schemas of the dossiers.
-func (b *Bundle) readRules(all files, dir string, problems *diag.List) {
-	modules := map[string]*ast.Module{}
-	for _, file := range all.paths() {
-		if path.Ext(file) != ".rego" || isTest(file) {
+func (b *Bundle) readRules(l *layer, shared files, problems *diag.List) {
+	dir, modules, all := l.dir, map[string]*ast.Module{}, l.sources(shared)
+	for _, file := range slices.Sorted(maps.Keys(all)) {
+		if isTest(file) {
 			continue
 		}
-		module, err := ast.ParseModuleWithOpts(file, string(all[file]), ast.ParserOptions{
+		module, err := ast.ParseModuleWithOpts(file, string(all[file].text), ast.ParserOptions{
 			ProcessAnnotation: true, RegoVersion: ast.RegoV1, Capabilities: Capabilities(),
 		})
 		if err != nil {
@@ -35,8 +35,8 @@ func (b *Bundle) readRules(all files, dir string, problems *diag.List) {
 				"the module does not import rego.v2, so that a value that is not known could pass in silence")
 		}
 		modules[file] = module
-		if strings.HasPrefix(file, path.Join(dir, "duty")+"/") {
-			b.readDuty(module, file, string(all[file]), dir, problems)
+		if from := all[file].dir; strings.HasPrefix(file, path.Join(from, "duty")+"/") {
+			b.readDuty(module, file, string(all[file].text), from, problems)
 		}
 	}
 	b.checkConfirmation(dir, problems)
@@ -154,7 +154,7 @@ func (b *Bundle) readDuty(m *ast.Module, file, text, dir string, problems *diag.
 	notes := m.Annotations[i]
 	d := &Duty{
 		ID: strings.ReplaceAll(name, "_", "-"), Package: name, Title: notes.Title, Description: strings.TrimSpace(notes.Description),
-		File: strings.TrimPrefix(file, dir+"/"), Text: text,
+		File: strings.TrimPrefix(file, dir+"/"), From: path.Base(dir), Text: text,
 	}
 	custom := func(key string) string {
 		s, _ := notes.Custom[key].(string)

@@ -144,6 +144,7 @@ type Protection struct {
 	Count          int           `json:"count" doc:"number of protectors at hand"`
 	ChoicesOffered record.Number `json:"choices_offered" doc:"number of suitable models to choose from"`
 	Fitted         *Link         `json:"fitted" doc:"initial fitting: recorded with the issue, as a follow-up, or by a fit test that was passed"`
+	FitTest        *Link         `json:"fit_test" doc:"the latest fit test of this model since it was handed over"`
 	FitFailed      *Link         `json:"fit_failed" doc:"the latest fit test of this model, if it was not passed"`
 	Required       record.Answer `json:"required" doc:"whether the employer requires it to be worn"`
 	Rating         string        `json:"rating" enum:"nrr|snr|hml|octave|slc80" doc:"rating that the estimate uses"`

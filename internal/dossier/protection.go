@@ -77,6 +77,7 @@ func (b *Builder) fit(p *Protection, w *WorkerRecords, issue *record.ProtectorIs
 			continue
 		}
 		latest, p.PAR, p.FitFailed = t, t.PARDB, nil
+		p.FitTest = link(refs, t, t.Date)
 		switch t.Passed {
 		case record.Yes:
 			if p.Fitted == nil {

@@ -215,6 +215,9 @@ func (c *check) report() *finding.Report {
 		r.Remarks = append(r.Remarks, text)
 	}
 	for _, b := range c.used {
+		for _, d := range b.Warnings {
+			r.Remarks = append(r.Remarks, d.String())
+		}
 		r.Bundles = append(r.Bundles, finding.Bundle{
 			ID: b.ID, Title: b.About.Title, Revision: b.Revision, SHA256: b.SHA256, Kind: b.About.Kind,
 			CheckedOn: b.About.CheckedOn, Cautions: b.About.Cautions,

@@ -25,9 +25,27 @@ const (
 // JSON-shaped: maps with text keys, lists, texts, json.Number, bool and nil. Dates stay texts. It is nil
 // if the YAML itself cannot be read.
 func YAML(name, file string, data []byte) (any, diag.List) {
+	value, _, problems := YAMLPlaces(name, file, data)
+	return value, problems
+}
+
+// Places tells where the values and keys of a YAML document stand, by JSON pointer.
+type Places struct{ p *places }
+
+// Value gives the place of a value.
+func (p *Places) Value(pointer string) diag.Position { return p.p.value(pointer) }
+
+// Key gives the place of a key, or of the value where it has none.
+func (p *Places) Key(pointer string) diag.Position { return p.p.key(pointer) }
+
+// YAMLPlaces is YAML and tells where everything stands. Without a name it checks against no schema.
+func YAMLPlaces(name, file string, data []byte) (any, *Places, diag.List) {
 	value, places, problems := readYAML(file, data)
 	if problems.Failed() {
-		return nil, problems
+		return nil, nil, problems
+	}
+	if name == "" {
+		return value, &Places{places}, problems
 	}
 	found := validate(name, value, places.value, places.key)
 	for i := range found {
@@ -35,7 +53,7 @@ func YAML(name, file string, data []byte) (any, diag.List) {
 			found[i].Position.File = file
 		}
 	}
-	return value, append(problems, found...)
+	return value, &Places{places}, append(problems, found...)
 }
 
 // places tells where the values and keys of a document stand, by JSON pointer.

@@ -36,9 +36,12 @@ func about(p *page, b *bundle.Bundle, asOf calendar.Date) {
 		where += "-" + a.Region
 	}
 	for _, row := range [][2]string{
-		{"Authority", a.Authority}, {"Country", where}, {"Kind", a.Kind}, {"Revision", b.Revision}, {"Judges from", a.InForce},
+		{"Authority", a.Authority}, {"Country", where}, {"Kind", a.Kind}, {"Extends", strings.Join(b.Extends, ", ")}, {"Revision", b.Revision}, {"Judges from", a.InForce},
 		{"Checked on", a.CheckedOn}, {"Shown as of", asOf.String()}, {"SHA-256", b.SHA256},
 	} {
+		if row[1] == "" {
+			continue
+		}
 		for i, line := range wrap(row[1], p.width-14) {
 			p.raw(padRight([]string{row[0], ""}[min(i, 1)], 14) + line)
 		}
@@ -69,6 +72,9 @@ func duties(p *page, b *bundle.Bundle) {
 		title := d.ID + ", " + d.Cite + ", of each " + d.Subject
 		if d.Severity == "minor" {
 			title += ", minor"
+		}
+		if d.From != b.ID {
+			title += ", from " + d.From
 		}
 		p.para(2, 4, title)
 		p.para(4, 4, sentence(d.Description))
