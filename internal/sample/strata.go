@@ -37,21 +37,31 @@ func Missed(strata []Stratum, faulty int) *big.Rat {
 }
 
 // Spread divides a sample of n files among strata. If the goal allows no faulty file in it, the sample grows until it
-// reaches the goal also where the faulty files lie most unluckily; else it does so as a sample without strata would.
+// reaches the goal also where the faulty files lie most unluckily: file after file is added where the share drawn is
+// smallest. Else it reaches the goal as a sample without strata would.
 func (g *Goal) Spread(sizes []int, n int) []Stratum {
 	population := 0
-	for _, size := range sizes {
-		population += size
+	strata := make([]Stratum, len(sizes))
+	for i, of := range Allocate(sizes, n) {
+		strata[i] = Stratum{sizes[i], of}
+		population += sizes[i]
 	}
-	for ; ; n++ {
-		strata := make([]Stratum, len(sizes))
-		drawn := 0
-		for i, of := range Allocate(sizes, n) {
-			strata[i] = Stratum{sizes[i], of}
-			drawn += of
-		}
-		if g.Expect > 0 || drawn >= population || Missed(strata, g.TooMany(population)).Cmp(Risk(g.Confidence)) <= 0 {
-			return strata
+	if g.Expect > 0 {
+		return strata
+	}
+	for too, risk := g.TooMany(population), Risk(g.Confidence); Missed(strata, too).Cmp(risk) > 0; {
+		strata[thinnest(strata)].Drawn++
+	}
+	return strata
+}
+
+// thinnest gives the first of the strata with the smallest share drawn. One at least must have files left.
+func thinnest(strata []Stratum) int {
+	least := -1
+	for i, s := range strata {
+		if s.Drawn < s.Size && (least < 0 || s.Drawn*strata[least].Size < strata[least].Drawn*s.Size) {
+			least = i
 		}
 	}
+	return least
 }

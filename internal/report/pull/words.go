@@ -5,6 +5,7 @@ import (
 	"math/big"
 
 	"hearduty/internal/judge"
+	"hearduty/internal/sample"
 )
 
 // bandWords say the bands in words.
@@ -93,7 +94,16 @@ func (s *Sheet) promise() string {
 		few = fmt.Sprintf("no more than %d of them", s.Goal.Expect)
 	}
 	return text + fmt.Sprintf(" The size was chosen for that: tolerated are %s, %d files; if one more than that were faulty, the chance to find %s would be %s.",
-		plainPercent(s.Goal.Tolerable), s.Tolerated(), few, percent(s.Missed(), 2))
+		plainPercent(s.Goal.Tolerable), s.Tolerated(), few, percent(s.Missed(), 2)) + s.without()
+}
+
+// without says how large the sample would be without parts, as tables of sizes have it.
+func (s *Sheet) without() string {
+	n := sample.SizeFor(s.Population, s.Tolerated()+1, s.Goal.Expect, s.Goal.Confidence)
+	if n == len(s.Files) {
+		return ""
+	}
+	return fmt.Sprintf(" A sample without parts by site and exposure would need %d.", n)
 }
 
 // population says which files could be drawn.
