@@ -123,6 +123,12 @@ func TestBrowserLinksToSubjects(t *testing.T) {
 		of[bool](p, target+".open = false")
 	}
 
+	// The part of the page that is shown already is left as it is, with its open rows.
+	of[int](p, `(location.hash = "#register", document.querySelectorAll("#rows .open")[1].click(), 0)`)
+	of[int](p, `(window.changed = 0, addEventListener("hashchange", () => { window.changed = 1; }, { once: true }), location.hash = "#register?", 0)`)
+	p.until("window.changed")
+	assert.NotZero(t, of[int](p, `document.querySelectorAll("#rows .more").length`))
+
 	// From a subject to its finding.
 	of[int](p, open+`.querySelector("a.id").click(), 0`)
 	p.until(`location.hash.startsWith("#register?text=f-")`)

@@ -104,7 +104,7 @@ func wantedCell(r *finding.Report, s finding.Site, topic string) (c struct{ Site
 			n[x.Status] += x.Number
 		}
 	}
-	c.Site, c.Topic, c.Shown = s.Name, topic, "nothing owed"
+	c.Site, c.Topic, c.Shown = s.Name, topic, "no findings"
 	var words []string
 	for _, status := range finding.Statuses {
 		if n[status] == 0 {

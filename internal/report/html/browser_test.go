@@ -125,7 +125,7 @@ func show(t *testing.T, path, fragment string, steps ...chromedp.Action[chromedp
 		address += "#" + fragment
 	}
 	p.do(chromedp.Navigate(address))
-	p.until(`document.documentElement.dataset.ready === "yes"`)
+	p.until(`document.documentElement.dataset.ready === "yes" && document.readyState === "complete"`)
 	return p
 }
 

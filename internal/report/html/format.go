@@ -81,6 +81,12 @@ func OfSite(r *finding.Report, site string) *finding.Report {
 	part.ObservationCounts = keep(r.ObservationCounts, func(o *finding.ObservationCount) bool { return o.Site == site })
 	part.Rates = keep(r.Rates, func(x *finding.Rate) bool { return x.Site == site })
 	part.Counts = keep(r.Counts, func(c *finding.Count) bool { return c.Site == site })
+	part.AcceptedTotals = map[finding.Status]int{}
+	for i := range part.Findings {
+		if part.Findings[i].Accepted != nil {
+			part.AcceptedTotals[part.Findings[i].Status]++
+		}
+	}
 	part.Totals = map[finding.Status]int{}
 	for _, c := range part.Counts {
 		part.Totals[c.Status] += c.Number

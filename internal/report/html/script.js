@@ -10,7 +10,7 @@
   const FIELDS = Object.keys(get), known = {};
   const subject = (l) => W[l.k] + " " + l.u;
   const collator = new Intl.Collator("en", { numeric: true });
-  let state = {}, list = [], count = PAGE, hay;
+  let state = {}, list = [], count = PAGE, hay, applied;
 
   // The address holds the filter: #register?status=gap&text=K01&sort=-due
   const decoded = (text) => { try { return decodeURIComponent(text); } catch { return text; } };
@@ -68,6 +68,7 @@
     for (const f of FIELDS) form.elements[f].value = state[f] || "";
     if (form.elements.text.value.trim() !== (state.text || "")) form.elements.text.value = state.text || "";
     count = PAGE;
+    applied = address();
     draw();
     say(wanted);
   }
@@ -159,7 +160,7 @@
     const of = part() && by(part());
     if (of && of.tagName === "DETAILS") { of.open = true; of.scrollIntoView(); of.querySelector("summary").focus({ preventScroll: true }); }
   }
-  function follow() { if (!read()) { reveal(); return; } apply(); if (location.hash.includes("?")) by("register").scrollIntoView(); }
+  function follow() { if (!read()) { reveal(); return; } if (address() !== applied) apply(); if (location.hash.includes("?")) by("register").scrollIntoView(); }
   let wait;
   form.elements.text.addEventListener("input", () => { clearTimeout(wait); wait = setTimeout(() => { set("text", form.elements.text.value.trim()); go(false); }, 60); });
   form.addEventListener("submit", (e) => e.preventDefault());
