@@ -84,7 +84,7 @@ type keeper struct {
 // keep counts an outcome and, if it is to be listed, writes it as a finding.
 func (k *keeper) keep(d *bundle.Duty, x outcome, o *obligation) {
 	if k.file.Kind == dossier.KindWorker {
-		if t, ok := rateOf(d, &x, o); ok {
+		if t, ok := rateOf(d, &x, o, k.check.AsOf); ok {
 			k.tallies = append(k.tallies, t)
 		}
 	}

@@ -65,7 +65,7 @@ type tally struct {
 
 // rateOf says what a settled obligation of a worker counts towards, if anything. What is still due, unproven or
 // lifted counts nowhere.
-func rateOf(d *bundle.Duty, x *outcome, o *obligation) (tally, bool) {
+func rateOf(d *bundle.Duty, x *outcome, o *obligation, asOf calendar.Date) (tally, bool) {
 	in := x.status == finding.Met
 	if o == nil || !in && x.status != finding.Late && x.status != finding.Gap {
 		return tally{}, false
@@ -73,7 +73,7 @@ func rateOf(d *bundle.Duty, x *outcome, o *obligation) (tally, bool) {
 	switch {
 	case o.shape == limit && d.Topic == "protectors" && (o.compare == "at_most" || o.compare == "below"):
 		return tally{rateKey{0, protectedBelow}, in}, true
-	case o.shape != recurring && o.shape != once || !x.due.Known():
+	case o.shape != recurring && o.shape != once || !x.due.Known() || x.due > asOf: // what is done before it falls due counts once it has
 		return tally{}, false
 	case d.Topic == "audiometry" && slices.Contains(d.Evidence, "audiogram"):
 		return tally{rateKey{x.due.Year(), testedInTime}, in}, true

@@ -14,7 +14,7 @@ func TestYAMLProblems(t *testing.T) {
 	for _, c := range []struct{ name, yaml, want string }{
 		{"good", good, ""},
 		{"no cite", strings.Replace(good, `cite: "(c)(1)", `, "", 1), "p.yaml:5:7: item 1 of values has no cite. Add it: paragraph."},
-		{"misspelt key", strings.Replace(good, "unit:", "unite:", 1), `p.yaml:3:3: a_level has no key "unite". Write unit if that is meant; the keys are about, unit, values.`},
+		{"misspelt key", strings.Replace(good, "unit:", "unite:", 1), `p.yaml:3:3: a_level has no key "unite". Write unit if that is meant; the keys are about, stricter, unit, values.`},
 		{"bad word", strings.Replace(good, "seen: text", "seen: tekst", 1), `p.yaml:5:59: seen cannot be "tekst". Write text if that is meant; the words are text, secondary, memory.`},
 		{"bad day", strings.Replace(good, "1983-04-07", "1983-02-29", 1), `p.yaml:5:14: from is not a day of the calendar: "1983-02-29". Write the day as YYYY-MM-DD.`},
 		{"empty text", strings.Replace(good, "A level", `""`, 1), "p.yaml:2:10: about is empty. Fill it in."},

@@ -44,6 +44,7 @@ const unfold = `(() => { const kinds = new Set(), statuses = new Set();
 	return kinds.size; })()`
 
 func TestBrowserAccess(t *testing.T) {
+	t.Parallel()
 	script := rules(t)
 	p := show(t, written(t, demoOf(t, true)), "")
 	of[bool](p, script+"; true")
@@ -61,6 +62,7 @@ func TestBrowserAccess(t *testing.T) {
 }
 
 func TestBrowserAccessOfOddReports(t *testing.T) {
+	t.Parallel()
 	script := rules(t)
 	odd := oddReports()
 	for name, r := range map[string]*finding.Report{"odd": reporttest.WithHealth(), "empty": odd["empty"], "twelve sites": odd["twelve sites"]} {

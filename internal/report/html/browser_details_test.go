@@ -82,6 +82,7 @@ func openedOf(r *finding.Report, f *finding.Finding) opened {
 }
 
 func TestBrowserDetailsEqualTheFinding(t *testing.T) {
+	t.Parallel()
 	r := demoOf(t, true)
 	p := show(t, written(t, r), "")
 	got := of[[]opened](p, openAll)

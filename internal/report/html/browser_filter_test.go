@@ -117,6 +117,7 @@ func agrees(t *testing.T, r *finding.Report, got seen, by filter) {
 }
 
 func TestBrowserFiltersByEachField(t *testing.T) {
+	t.Parallel()
 	r := demoOf(t, false)
 	p := show(t, written(t, r), "")
 	agrees(t, r, of[seen](p, seeing), filter{})
@@ -205,6 +206,7 @@ func TestBrowserAddressHoldsTheView(t *testing.T) {
 }
 
 func TestBrowserUnknownAddressesDoNoHarm(t *testing.T) {
+	t.Parallel()
 	r := demoOf(t, false)
 	path := written(t, r)
 	p := show(t, path, "%F0")

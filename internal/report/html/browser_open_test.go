@@ -55,6 +55,7 @@ func TestBrowserOpensTheReportFromDisk(t *testing.T) {
 
 // What slips into the page by a fault must not run, and must not load.
 func TestBrowserRunsNothingElse(t *testing.T) {
+	t.Parallel()
 	p := show(t, written(t, demoOf(t, false)), "")
 	of[int](p, `(document.body.insertAdjacentHTML("beforeend", "<img src='data:,' onerror='window.ran = 1'>"),
 		document.body.append(Object.assign(document.createElement("script"), { textContent: "window.ran = 1" })), 0)`)
@@ -67,6 +68,7 @@ func TestBrowserRunsNothingElse(t *testing.T) {
 }
 
 func TestBrowserFirstScreen(t *testing.T) {
+	t.Parallel()
 	r := demoOf(t, false)
 	p := show(t, written(t, r), "")
 	for _, s := range finding.Statuses {
@@ -142,6 +144,7 @@ func TestBrowserTilesLeadToTheRegister(t *testing.T) {
 }
 
 func TestBrowserShowsHearingOnRequestOnly(t *testing.T) {
+	t.Parallel()
 	const audiograms = `document.querySelectorAll(".ear").length`
 	plain, health := show(t, written(t, demoOf(t, false)), ""), show(t, written(t, demoOf(t, true)), "")
 	assert.Zero(t, of[int](plain, audiograms))

@@ -17,6 +17,7 @@ import (
 var pdfPage = regexp.MustCompile(`/Type\s*/Page\b[^s]`)
 
 func TestBrowserPrints(t *testing.T) {
+	t.Parallel()
 	r := demoOf(t, false)
 	p := show(t, written(t, r), "")
 	pdf, err := chromedp.Run(p.ctx, chromedp.PrintToPDF(chromedp.PDFPreferCSSPageSize()))
@@ -63,6 +64,7 @@ func pdfText(t *testing.T, pdf []byte) string {
 
 // Paper is white, whatever the screen is, and holds what the screen folds away.
 func TestBrowserPrintIsLightAndWhole(t *testing.T) {
+	t.Parallel()
 	r := demoOf(t, false)
 	p := show(t, written(t, r), "")
 	p.look(794, 1123, "dark", "")

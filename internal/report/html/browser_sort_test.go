@@ -46,6 +46,7 @@ func sorted(r *finding.Report, head string, down bool) []*finding.Finding {
 }
 
 func TestBrowserSortsByEachHead(t *testing.T) {
+	t.Parallel()
 	r := demoOf(t, false)
 	p := show(t, written(t, r), "")
 	for _, head := range []string{"status", "due", "subject", "duty", "cite"} {

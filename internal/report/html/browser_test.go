@@ -191,9 +191,9 @@ func (p *tab) look(width, height int64, theme, media string) {
 	require.NoError(p.t, err)
 }
 
-// jsText writes a text as the script would.
-func jsText(s string) string {
-	text, _ := json.Marshal(s)
+// jsText writes a value as a script would.
+func jsText(v any) string {
+	text, _ := json.Marshal(v)
 	return string(text)
 }
 

@@ -73,7 +73,7 @@ func duties(p *page, b *bundle.Bundle) {
 		if d.Severity == "minor" {
 			title += ", minor"
 		}
-		if d.From != b.ID {
+		if d.From != "" && d.From != b.ID {
 			title += ", from " + d.From
 		}
 		p.para(2, 4, title)
