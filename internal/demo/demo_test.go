@@ -93,6 +93,13 @@ func TestNothingStaysBehindWhenWritingFails(t *testing.T) {
 
 func TestEveryRecordKindIsPresent(t *testing.T) {
 	files := read(t, testdata)
+	records := 0
+	for name := range files {
+		if strings.HasPrefix(name, "records/") {
+			records++
+		}
+	}
+	require.Equal(t, len(record.Kinds()), records, "a file of records that is of no kind")
 	for _, k := range record.Kinds() {
 		text := files["records/"+csvName(k)]
 		require.Greater(t, len(regexp.MustCompile(`(?m)^.+$`).FindAllString(text, 3)), 1, "%s has no row", k)
