@@ -73,7 +73,11 @@ func FuzzEncoding(f *testing.F) {
 			order := map[string]unicode.Endianness{"utf-16le": unicode.LittleEndian, "utf-16be": unicode.BigEndian}[a.Encoding]
 			again, err := unicode.UTF16(order, unicode.IgnoreBOM).NewEncoder().Bytes(out)
 			require.NoError(t, err)
-			require.Equal(t, bytes.TrimPrefix(bytes.TrimPrefix(b, []byte("\xff\xfe")), []byte("\xfe\xff")), again)
+			content := b
+			if file.survey.marked {
+				content = b[2:]
+			}
+			require.Equal(t, content, again)
 		}
 	})
 }
