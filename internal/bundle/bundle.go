@@ -5,6 +5,7 @@ package bundle
 import (
 	"encoding/json"
 	"sort"
+	"strings"
 
 	"github.com/open-policy-agent/opa/v1/ast"
 
@@ -30,7 +31,17 @@ type Bundle struct {
 	Week     *calendar.WorkingWeek // working days, if the law counts in them
 	Compiler *ast.Compiler         // the checked rules
 	Data     map[string]any        // all data of the bundle, JSON-shaped
+	Files    map[string][]byte     // every file of the bundle, of those that it extends, and of the shared rules, by path
+	Modules  []string              // paths of the modules that hold here, tests among them, in order
+
+	places map[string]string // where its folders were read, by name, if they are not embedded
 }
+
+// Own says whether a path in Files is one of the bundle itself, not of a bundle that it extends or of the shared rules.
+func (b *Bundle) Own(file string) bool { return strings.HasPrefix(file, b.ID+"/") }
+
+// Shared says whether a path in Files is one of the rules that all bundles share.
+func (b *Bundle) Shared(file string) bool { return strings.HasPrefix(file, commonDir+"/") }
 
 // About says what the bundle is: about/data.yaml.
 type About struct {

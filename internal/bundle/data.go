@@ -60,6 +60,18 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 	}
 	for _, name := range slices.Sorted(maps.Keys(m.Exposure.Levels)) {
 		level := m.Exposure.Levels[name]
+		if len(level.Any) > 0 {
+			b.checkAny(name, level, at, problems)
+			continue
+		}
+		if i := level.Instead; i != nil {
+			if _, ok := m.Exposure.Channels[i.Channel]; !ok {
+				problems.Errorf(at, "Name one of the channels", "the level %s names the channel %q, which the measures do not have", name, i.Channel)
+			}
+			if _, ok := b.Choices[i.Choice]; !ok {
+				problems.Errorf(at, "Name one of the choices", "the level %s names the choice %q, which the bundle does not have", name, i.Choice)
+			}
+		}
 		if _, ok := m.Exposure.Channels[level.Channel]; !ok {
 			problems.Errorf(at, "Name one of the channels", "the level %s names the channel %q, which the measures do not have", name, level.Channel)
 		}
@@ -80,6 +92,9 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 	if m.Exposure.Several == "sampled" && m.Exposure.Strategy == "" {
 		problems.Errorf(at, "Give exposure.strategy: job or full_day", "exposure takes several results by sampling and names no strategy")
 	}
+	for _, class := range slices.Sorted(maps.Keys(m.Exposure.Margins)) {
+		needParameter(m.Exposure.Margins[class], "margins."+class)
+	}
 	for _, p := range checkSchemes(&m.Hearing) {
 		problems.Errorf(at, "Correct hearing in the measures", "%s", p)
 	}
@@ -88,7 +103,7 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 	}
 	needParameter(m.Protection.RealWorld, "protection")
 	needParameter(m.Protection.Bands, "protection")
-	if _, ok := m.Exposure.Channels[m.Protection.Channel]; !ok {
+	if _, ok := m.Exposure.Channels[m.Protection.Channel]; !ok && (m.Protection.Channel != "" || m.Protection.Rating != "") {
 		problems.Errorf(at, "Name one of the channels", "protection names the channel %q, which the measures do not have", m.Protection.Channel)
 	}
 	needParameter(m.Hearing.Shift.Parameter(), "hearing.shift")
@@ -103,8 +118,36 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 	}
 }
 
+// checkAny checks a level of several parts: each is a level without parts, the first on a channel of doses or levels.
+func (b *Bundle) checkAny(name string, level dossier.Threshold, at diag.Position, problems *diag.List) {
+	levels := b.Measures.Exposure.Levels
+	if level.Channel != "" || level.AtLeast != "" || level.Above != "" || level.Instead != nil {
+		problems.Errorf(at, "Keep any alone", "the level %s has any and names a channel or parameter as well", name)
+	}
+	for i, part := range level.Any {
+		p, ok := levels[part]
+		switch {
+		case !ok:
+			problems.Errorf(at, nearRemedy(part, slices.Collect(maps.Keys(levels))), "the level %s names the level %q, which the measures do not have", name, part)
+		case len(p.Any) > 0:
+			problems.Errorf(at, "Name its parts", "the level %s names %s, which has parts itself", name, part)
+		case i == 0 && b.Measures.Exposure.Channels[p.Channel].Kind == dossier.HighestChannel:
+			problems.Errorf(at, "Name a level on a channel of doses or levels first", "the level %s begins with %s, which is on a channel of the highest value", name, part)
+		}
+	}
+}
+
 // checkChannel checks that a channel has what its kind needs, and nothing of the other kind.
 func checkChannel(c dossier.Channel) error {
+	if (c.Kind == dossier.HighestChannel) != (c.Of != "") {
+		return errors.New("has a figure in of, or is of the highest value, but not both")
+	}
+	if c.Kind == dossier.HighestChannel {
+		if c.CriterionDB != 0 || c.ExchangeDB != 0 || c.ThresholdDB != 0 || c.UpperDB != 0 || c.Weekly {
+			return errors.New("takes the highest value of a figure and has no criterion_db, exchange_db, threshold_db, upper_db or weekly")
+		}
+		return nil
+	}
 	if c.Kind == dossier.LevelChannel {
 		if c.CriterionDB != 0 || c.ExchangeDB != 0 || c.ThresholdDB != 0 || c.UpperDB != 0 {
 			return errors.New("is a level and has no criterion_db, exchange_db, threshold_db or upper_db")

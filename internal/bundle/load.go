@@ -10,33 +10,12 @@ import (
 	"path"
 	"slices"
 	"strings"
-	"sync"
 
 	"hearduty/internal/diag"
-	"hearduty/policies"
 )
 
 // commonDir is the folder of the rules that all bundles share.
 const commonDir = "common"
-
-// Embedded loads the bundles that are built into the program. It reads them once.
-func Embedded() (Library, error) { return embedded() }
-
-var embedded = sync.OnceValues(func() (Library, error) {
-	ids, err := Folders(policies.FS)
-	if err != nil {
-		return nil, err
-	}
-	library := Library{}
-	for _, id := range ids {
-		b, problems := Load(policies.FS, id)
-		if err := problems.Err(); err != nil {
-			return nil, err
-		}
-		library[id] = b
-	}
-	return library, nil
-})
 
 // Folders lists the bundle folders of a file system: those with a .manifest, without the shared rules.
 func Folders(fsys fs.FS) ([]string, error) {
@@ -60,7 +39,7 @@ func readFiles(fsys fs.FS, dirs ...string) (files, error) {
 	out := files{}
 	for _, dir := range dirs {
 		err := fs.WalkDir(fsys, dir, func(p string, entry fs.DirEntry, err error) error {
-			if err != nil || entry.IsDir() {
+			if err != nil || entry.IsDir() || entry.Name() == "BOOK.md" { // made from the bundle, so no part of it
 				return err
 			}
 			out[p], err = fs.ReadFile(fsys, p)
@@ -106,7 +85,10 @@ func Load(fsys fs.FS, dir string) (*Bundle, diag.List) {
 		return nil, problems
 	}
 	maps.Copy(l.read, shared)
-	b := &Bundle{ID: l.about.ID, Revision: l.revision, SHA256: l.read.digest(), Extends: l.chain, Data: l.data}
+	b := &Bundle{
+		ID: l.about.ID, Revision: l.revision, SHA256: l.read.digest(), Extends: l.chain, Data: l.data,
+		Files: l.read, Modules: slices.Sorted(maps.Keys(l.sources(shared))),
+	}
 	b.take(l, &problems)
 	if problems.Failed() {
 		return nil, problems

@@ -190,7 +190,7 @@ func checkWord(problems *diag.List, at diag.Position, duty, key, word string, al
 
 // intervalKeys and numberKeys are the fields of an obligation that name a parameter.
 var (
-	intervalKeys = []string{"within", "every", "first", "for"}
+	intervalKeys = []string{"within", "every", "first", "for", "until", "then"}
 	numberKeys   = []string{"at_most", "below", "at_least", "above"}
 	seriesKeys   = []string{"by", "touches"}
 )
@@ -241,7 +241,7 @@ func (b *Bundle) checkField(k, v *ast.Term, d *Duty, problems *diag.List) {
 			list.Foreach(func(t *ast.Term) { terms = append(terms, t) })
 		}
 		for _, t := range terms {
-			if name, ok := t.Value.(ast.String); ok && !slices.Contains(dossier.SeriesOf[d.Subject], string(name)) {
+			if name, ok := t.Value.(ast.String); ok && !dossier.HasSeries(d.Subject, string(name)) {
 				problems.Errorf(position(t.Location), nearRemedy(string(name), slices.Clone(dossier.SeriesOf[d.Subject])),
 					"a %s has no series of records %q", d.Subject, string(name))
 			}

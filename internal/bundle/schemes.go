@@ -19,7 +19,9 @@ func checkSchemes(m *dossier.HearingMeasures) []string {
 			out = append(out, fmt.Sprintf("%s needs either at_least or above", name))
 		}
 	}
-	check("hearing.shift", &m.Shift.Scheme)
+	if m.Shift.Rule != "" {
+		check("hearing.shift", &m.Shift.Scheme)
+	}
 	if m.Shift.Of != "" && m.Shift.Of != audiometry.OfChange {
 		out = append(out, "hearing.shift is of a "+m.Shift.Of+", but a shift is a change")
 	}

@@ -51,6 +51,23 @@ func (iv Interval) After(d Date, w *WorkingWeek) (Date, error) {
 	return 0, fmt.Errorf("an interval has no unit %q", iv.Unit)
 }
 
+// Before gives the first day of the interval that ends on d: the latest day from which the interval does not end
+// before d. Working days are not counted backwards. An unknown day stays unknown.
+func (iv Interval) Before(d Date) (Date, error) {
+	if !d.Known() {
+		return d, nil
+	}
+	switch iv.Unit {
+	case Days:
+		return d.AddDays(-iv.Count), nil
+	case Months:
+		return d.AddMonths(-iv.Count), nil
+	case Years:
+		return d.AddMonths(-12 * iv.Count), nil
+	}
+	return 0, fmt.Errorf("%s cannot be counted backwards", iv)
+}
+
 // String writes the interval in words, such as "21 days" or "1 month".
 func (iv Interval) String() string {
 	word := map[Unit]string{Days: "day", WorkingDays: "working day", Months: "month", Years: "year", CalendarYears: "calendar year"}[iv.Unit]

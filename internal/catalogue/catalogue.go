@@ -32,7 +32,7 @@ func All() []Entry {
 	out = append(out, acceptedFile(), mapFile())
 	out = append(out, Entry{"report", schema.Of(finding.Report{}, reportOptions())})
 	out = append(out, intakeFiles()...)
-	out = append(out, comparisonFile())
+	out = append(out, comparisonFile(), switchFile())
 	return append(out, bundleFiles()...)
 }
 

@@ -2,10 +2,11 @@ package cli
 
 import (
 	"io"
+	"strings"
 
 	"github.com/urfave/cli/v2"
 
-	"hearduty/internal/bundle"
+	"hearduty/internal/report/rulebook"
 	"hearduty/internal/report/text"
 )
 
@@ -14,7 +15,7 @@ func (r *run) bundlesCommand() *cli.Command {
 		Name:        "bundles",
 		Usage:       "list the bundles",
 		Description: examples("A bundle holds the duties of one jurisdiction as rules and dated numbers.", "hearduty bundles"),
-		Flags:       []cli.Flag{outFlag(), widthFlag()},
+		Flags:       []cli.Flag{policiesFlag(), outFlag(), widthFlag()},
 		Action: func(c *cli.Context) error {
 			if _, err := arguments(c, 0, 0); err != nil {
 				return err
@@ -23,11 +24,15 @@ func (r *run) bundlesCommand() *cli.Command {
 			if err != nil {
 				return err
 			}
-			library, err := bundle.Embedded()
+			shelf, err := r.library(c)
 			if err != nil {
 				return err
 			}
-			return r.output(c, func(w io.Writer) error { return text.Library(w, library, plain(style)) })
+			heads, err := shelf.Heads()
+			if err != nil {
+				return err
+			}
+			return r.output(c, func(w io.Writer) error { return text.Library(w, heads, plain(style)) })
 		},
 	}
 }
@@ -37,10 +42,13 @@ func (r *run) bundleCommand() *cli.Command {
 		Name:      "bundle",
 		Usage:     "show a bundle as a rule book",
 		ArgsUsage: "ID",
-		Description: examples("The book has the duties in words, the numbers in force on a day, and how each paragraph is accounted for.",
-			"hearduty bundle us-osha-general-industry", "hearduty bundle us-osha-general-industry --as-of 2002-12-31"),
+		Description: examples("The book says in plain words what is asked, of whom, when and by which paragraph, with the numbers in force on a day, how each paragraph is accounted for, and what rests on memory.",
+			"hearduty bundle us-osha-general-industry", "hearduty bundle us-osha-general-industry --as-of 2002-12-31",
+			"hearduty bundle company-example --format markdown --out rules.md"),
 		Flags: []cli.Flag{
-			&cli.StringFlag{Name: "as-of", Usage: "show the numbers in force on `DATE`", DefaultText: "today"}, outFlag(), widthFlag(),
+			&cli.StringFlag{Name: "as-of", Usage: "show the numbers in force on `DATE`", DefaultText: "today"},
+			&cli.StringFlag{Name: "format", Value: rulebook.Forms[0], Usage: "write the book as `NAME`: " + strings.Join(rulebook.Forms, ", ")},
+			policiesFlag(), outFlag(), widthFlag(),
 		},
 		Action: r.bundle,
 	}
@@ -55,11 +63,18 @@ func (r *run) bundle(c *cli.Context) error {
 	if err != nil {
 		return err
 	}
-	library, err := bundle.Embedded()
+	if err := oneOf("format", c.String("format"), rulebook.Forms); err != nil {
+		return err
+	}
+	shelf, err := r.library(c)
 	if err != nil {
 		return err
 	}
-	if err := oneOf("bundle", args[0], library.IDs()); err != nil {
+	if err := oneOf("bundle", args[0], shelf.IDs()); err != nil {
+		return err
+	}
+	library, err := shelf.Take(args[0])
+	if err != nil {
 		return err
 	}
 	d, err := day(c)
@@ -69,5 +84,9 @@ func (r *run) bundle(c *cli.Context) error {
 	if !d.Known() {
 		d = r.Today()
 	}
-	return r.output(c, func(w io.Writer) error { return text.Book(w, library[args[0]], d, plain(style)) })
+	book := rulebook.Of(library[args[0]], d)
+	if c.String("format") == "markdown" {
+		return r.output(c, book.Markdown)
+	}
+	return r.output(c, func(w io.Writer) error { return text.Book(w, book, plain(style)) })
 }

@@ -9,7 +9,6 @@ import (
 
 	"github.com/urfave/cli/v2"
 
-	"hearduty/internal/bundle"
 	"hearduty/internal/finding"
 	"hearduty/internal/judge"
 	"hearduty/internal/report"
@@ -29,7 +28,7 @@ func (r *run) checkCommand() *cli.Command {
 			"hearduty check --format json --out report.json --fail-on gap,unproven,reject",
 		),
 		Flags: []cli.Flag{
-			asOfFlag(), siteFlag(), bundleFlag(),
+			asOfFlag(), siteFlag(), bundleFlag(), policiesFlag(),
 			&cli.StringFlag{Name: "format", Value: report.Names()[0], Usage: "write the report as `NAME`: " + strings.Join(report.Names(), ", ")},
 			outFlag(), rejectsFlag(), strictFlag(),
 			&cli.StringFlag{Name: "ahead", Value: "90d", Usage: "list what is due within `DAYS`"},
@@ -126,10 +125,14 @@ func (r *run) options(c *cli.Context, args []string) (judge.Options, error) {
 	if o.Program, err = r.load(c, args); err != nil {
 		return o, err
 	}
-	if o.Library, err = bundle.Embedded(); err != nil {
+	shelf, err := r.library(c)
+	if err != nil {
 		return o, err
 	}
-	if o.Sites, err = choose(c, o.Program, o.Library); err != nil {
+	if o.Sites, err = choose(c, o.Program, shelf.IDs()); err != nil {
+		return o, err
+	}
+	if o.Library, err = taken(shelf, o.Program, o.Sites, c.String("bundle")); err != nil {
 		return o, err
 	}
 	if o.AsOf, err = r.judged(c, o.Program); err != nil {

@@ -111,8 +111,8 @@ func (r *run) app() *cli.App {
 		Description: "Exit codes: 0 nothing found of what --fail-on names, 1 something found, 2 could not check.\n" +
 			"A bundle is a reading of the law; local codes govern, and licensed professionals decide.",
 		Commands: []*cli.Command{
-			r.checkCommand(), r.intakeCommand(), r.bundlesCommand(), r.bundleCommand(), r.explainCommand(), r.compareCommand(), r.demoCommand(),
-			r.sampleCommand(), r.keyCommand(), r.completionCommand(), r.helpCommand(),
+			r.checkCommand(), r.intakeCommand(), r.bundlesCommand(), r.bundleCommand(), r.explainCommand(), r.compareCommand(), r.switchCommand(), r.demoCommand(),
+			r.sampleCommand(), r.rehearseCommand(), r.keyCommand(), r.completionCommand(), r.helpCommand(),
 		},
 		// A help command of our own keeps the library from adding its help flag.
 		Flags:           []cli.Flag{cli.HelpFlag},

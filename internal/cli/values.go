@@ -2,14 +2,12 @@ package cli
 
 import (
 	"fmt"
-	"maps"
 	"slices"
 	"strconv"
 	"strings"
 
 	"github.com/urfave/cli/v2"
 
-	"hearduty/internal/bundle"
 	"hearduty/internal/calendar"
 	"hearduty/internal/diag"
 	"hearduty/internal/finding"
@@ -130,7 +128,7 @@ func (r *run) judged(c *cli.Context, p *program.Program) (calendar.Date, error) 
 }
 
 // choose checks the flags --site and --bundle, and that the sites name bundles that exist.
-func choose(c *cli.Context, p *program.Program, library bundle.Library) ([]string, error) {
+func choose(c *cli.Context, p *program.Program, known []string) ([]string, error) {
 	var ids []string
 	for _, s := range p.Sites {
 		ids = append(ids, s.ID)
@@ -142,7 +140,7 @@ func choose(c *cli.Context, p *program.Program, library bundle.Library) ([]strin
 		}
 	}
 	if id := c.String("bundle"); id != "" {
-		return sites, oneOf("bundle", id, slices.Sorted(maps.Keys(library)))
+		return sites, oneOf("bundle", id, known)
 	}
-	return sites, p.CheckBundles(library.IDs()).Err()
+	return sites, p.CheckBundles(known).Err()
 }

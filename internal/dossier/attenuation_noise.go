@@ -32,6 +32,9 @@ func (b *Builder) noiseOf(now *stretch) noise {
 		return noise{}
 	}
 	i := b.channels.index(b.Measures.Protection.Channel)
+	if i < 0 {
+		return noise{}
+	}
 	channel, k := b.Measures.Exposure.Channels[b.Measures.Protection.Channel], now.on[i]
 	n := noise{equalEnergy: channel.Kind == LevelChannel || channel.ExchangeDB == 3}
 	n.level, n.known = b.levelOn(i, k)

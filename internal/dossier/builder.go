@@ -1,7 +1,6 @@
 package dossier
 
 import (
-	"fmt"
 	"maps"
 	"slices"
 
@@ -60,7 +59,7 @@ func NewGround(r *Registers, m Measures, law Law, asOf Date) *Ground {
 		}
 		results, events := g.channels.resultsOf(group, id), r.eventsOf(id, area, asOf)
 		if group != nil || len(results)+len(events) > 0 {
-			g.histories[id] = g.channels.historyOf(results, events)
+			g.histories[id] = g.channels.historyOf(results, events, workplaceOf(id, group))
 		}
 	}
 	return g
@@ -91,30 +90,6 @@ func (b *Builder) spells(list []calendar.Spell) []Spell {
 // verdict is yes, no, or not known.
 type verdict = record.Answer
 
-// reaches says whether an exposure, percent or dBA, reaches an exposure level on a day. Where the level's
-// parameter has no value on that day, it is not known.
-func (b *Builder) reaches(level string, d bounds, day Date) (verdict, string) {
-	t := b.Measures.Exposure.Levels[level]
-	name := t.AtLeast + t.Above
-	limit, ok := b.Law.Number(name, day)
-	if !ok {
-		return record.Unanswered, fmt.Sprintf("the bundle has no value of %s on %s", name, day)
-	}
-	over := func(v float64) bool {
-		if t.Above != "" {
-			return v > limit+tolerance
-		}
-		return v >= limit-tolerance
-	}
-	switch {
-	case over(d.low):
-		return record.Yes, ""
-	case !over(d.high):
-		return record.No, ""
-	}
-	return record.Unanswered, ""
-}
-
 // tolerance absorbs the rounding of binary arithmetic in doses and levels that were worked out, percent or dBA.
 const tolerance = 1e-9
 
@@ -122,28 +97,18 @@ const tolerance = 1e-9
 func (b *Builder) levelSpells(pieces []stretch) (map[string][]Spell, map[string][]Open, map[string][]calendar.Spell) {
 	exposed, unknown, plain := map[string][]Spell{}, map[string][]Open{}, map[string][]calendar.Spell{}
 	for _, level := range b.levels {
-		channel := b.channels.index(b.Measures.Exposure.Levels[level].Channel)
-		name := b.Measures.Exposure.Levels[level].AtLeast + b.Measures.Exposure.Levels[level].Above
 		var yes []calendar.Spell
 		open := []Open{}
-		for _, p := range splitAt(pieces, b.Law.Days(name)) {
+		for _, p := range splitAt(pieces, b.lawDays(level)) {
 			if p.From > b.AsOf {
 				continue
 			}
-			answer, why := b.reaches(level, p.on[channel].bounds, max(p.From, 1))
-			switch answer {
+			found := b.reaches(level, p.on, max(p.From, 1))
+			switch found.verdict {
 			case record.Yes:
 				yes = append(yes, p.Spell)
 			case record.Unanswered:
-				reason := p.on[channel].reason
-				if why != "" {
-					reason = why
-				}
-				if reason == "" {
-					limit, _ := b.Law.Number(name, max(p.From, 1))
-					reason = b.channels.openReason(channel, &p.on[channel], limit, b.Measures.Exposure.Levels[level].AtLeast != "")
-				}
-				open = appendOpen(open, Open{From: p.From, To: p.To, Reason: reason})
+				open = appendOpen(open, Open{From: p.From, To: p.To, Reason: found.reason})
 			}
 		}
 		plain[level] = calendar.Union(yes)

@@ -19,6 +19,7 @@ type Date = calendar.Date
 const (
 	KindWorker     = "worker"
 	KindGroup      = "group"
+	KindArea       = "area"
 	KindSite       = "site"
 	KindInstrument = "instrument"
 	KindRoom       = "room"
@@ -78,6 +79,9 @@ type Worker struct {
 	Revisions   []Revision    `json:"revisions" doc:"decisions to put a later test in the baseline's place"`
 	MarkedLater []Link        `json:"marked_later" doc:"tests marked baseline after the first one, without a decision to revise"`
 	Dangling    []Dangling    `json:"missing_audiograms" doc:"audiograms that other records refer to but that are not in the records"`
+
+	Examinations []Examination `json:"examinations" doc:"offers of hearing tests and health appointments and what came of them, oldest first"`
+	Told         []Told        `json:"told_of_exposure" doc:"notices of exposure and of corrective action, oldest first"`
 
 	Protection *Protection `json:"protection" doc:"the hearing protector at hand on the as-of day"`
 	Wear       *Wear       `json:"wear" doc:"the latest check of whether protectors are worn"`
@@ -146,6 +150,13 @@ type Protection struct {
 	Fitted         *Link         `json:"fitted" doc:"initial fitting: recorded with the issue, as a follow-up, or by a fit test that was passed"`
 	FitTest        *Link         `json:"fit_test" doc:"the latest fit test of this model since it was handed over"`
 	FitFailed      *Link         `json:"fit_failed" doc:"the latest fit test of this model, if it was not passed"`
+	Types          []string      `json:"types" doc:"types of all protectors at hand, such as formable and earmuff; null for a model without type"`
+	PlugsOffered   record.Number `json:"plugs_offered" doc:"number of types of earplug to choose from"`
+	MuffsOffered   record.Number `json:"muffs_offered" doc:"number of types of earmuff to choose from"`
+	Class          string        `json:"class" doc:"class or grade of the label"`
+	UnderPAR       record.Number `json:"under_par_db" doc:"8-hour level less the personal attenuation rating of the latest fit test, dBA"`
+	Peak           record.Number `json:"peak_dbc" doc:"C-weighted peak without the protector, dB"`
+	PeakUnder      record.Number `json:"peak_under_dbc" doc:"highest estimate of that peak under the protector over the kinds of impulse (EN 458, from memory), dB"`
 	Required       record.Answer `json:"required" doc:"whether the employer requires it to be worn"`
 	Rating         string        `json:"rating" enum:"nrr|snr|hml|octave|slc80" doc:"rating that the estimate uses"`
 	Exposure       record.Number `json:"exposure_dba" doc:"exposure without the protector, dBA or, where the method says so, dBC"`

@@ -16,6 +16,7 @@ type known struct {
 	own    bool    // whether it is the worker's own
 	note   string  // how it was taken
 	reason string  // why it is not known exactly, if more is to be said than that it lies within bounds
+	needed bool    // whether a highest value that is not known must be known, since the noise holds impulses
 }
 
 // step is a group's exposure from a day on, until the next step.
@@ -34,6 +35,7 @@ type event struct {
 // history is the exposure of a group over time.
 type history struct {
 	c       *channels
+	at      workplace
 	results []*result // oldest first
 	events  []event   // oldest first
 	steps   []step    // oldest first; the first begins before all days
@@ -82,7 +84,7 @@ func (c *channels) resultsOf(group *record.Group, id string) []*result {
 	rows := r.measurementsOf(group, id)
 	for len(rows) > 0 {
 		n := sameMeasurement(rows)
-		if rows[0].Type != "task" && rows[0].Date <= asOf {
+		if (rows[0].Type != "task" || c.highestAny) && rows[0].Date <= asOf {
 			out = append(out, c.ofMeasurement(rows[:n:n], at))
 		}
 		rows = rows[n:]
@@ -110,8 +112,8 @@ func (c *channels) resultsOf(group *record.Group, id string) []*result {
 //   - after another change it stays what it was until measured again;
 //   - before the first result that result is taken backwards, unless a change that may have raised
 //     exposure lies between.
-func (c *channels) historyOf(results []*result, events []event) *history {
-	h := &history{c: c, results: results, events: events}
+func (c *channels) historyOf(results []*result, events []event, at workplace) *history {
+	h := &history{c: c, at: at, results: results, events: events}
 	days := []Date{0}
 	for _, r := range results {
 		days = append(days, r.day)
@@ -129,7 +131,7 @@ func (c *channels) historyOf(results []*result, events []event) *history {
 func (h *history) step(day Date) step {
 	s := step{from: day, on: make([]known, len(h.c.names))}
 	for i := range s.on {
-		s.on[i] = h.knownOn(i, day)
+		s.on[i] = h.needs(i, h.knownOn(i, day))
 	}
 	return s
 }

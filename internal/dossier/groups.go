@@ -4,6 +4,7 @@ import (
 	"maps"
 	"slices"
 	"strconv"
+	"strings"
 
 	"hearduty/internal/acoustics"
 	"hearduty/internal/calendar"
@@ -57,7 +58,7 @@ func (b *Builder) group(id string, u *Usage) *File {
 	reg := b.Registers.Groups[id]
 	d := &Group{Common: b.common(shownID(id)), Known: reg != nil, Workers: u.members[id], Holders: u.holders[id]}
 	if reg != nil {
-		d.Area, d.SuspectedNoisy, d.Varied = reg.Area, reg.SuspectedNoisy, reg.Varied
+		d.Area, d.SuspectedNoisy, d.Varied, d.Impulsive, d.DaysVary = reg.Area, reg.SuspectedNoisy, reg.Varied, reg.Impulsive, reg.DaysVary
 		refs.Of(reg)
 	}
 	file := &File{Kind: KindGroup, ID: d.ID, Site: b.Place.ID, Input: d, Series: map[string][]Link{}, Refs: refs}
@@ -67,7 +68,7 @@ func (b *Builder) group(id string, u *Usage) *File {
 	}
 	h := b.histories[id]
 	if h == nil {
-		h = b.channels.historyOf(nil, nil)
+		h = b.channels.historyOf(nil, nil, workplace{})
 	}
 	b.markCurrent(d.Measurements, h)
 	pieces := h.during(calendar.Spell{From: 1}, id)
@@ -90,30 +91,58 @@ func (b *Builder) group(id string, u *Usage) *File {
 	b.changes(d, refs)
 	d.Controls = []Control{}
 	for _, c := range b.Registers.controlsOf(id, d.Area, b.AsOf) {
-		installed := c.InstalledOn
-		if installed > b.AsOf {
-			installed = 0
-		}
-		d.Controls = append(d.Controls, Control{Link: *link(refs, c, c.Date), Type: c.Type, What: c.What, Feasible: c.Feasible, Installed: installed})
+		d.Controls = append(d.Controls, b.control(c, refs))
 	}
-	d.Documents = []Document{}
-	for _, doc := range until(b.Registers.Documents, b.AsOf, func(d *record.Document) Date { return d.Date }) {
-		if b.covers(doc, d) {
-			d.Documents = append(d.Documents, document(doc, refs))
-		}
-	}
+	d.Documents = b.documents(file, func(doc *record.Document) bool { return b.covers(doc, d) })
 	return file
 }
 
-func document(doc *record.Document, refs Refs) Document {
-	return Document{Link: *link(refs, doc, doc.Date), Type: doc.Type, Covers: emptyNotNil([]string(doc.Covers))}
+func (b *Builder) control(c *record.Control, refs Refs) Control {
+	return Control{
+		Link: *link(refs, c, c.Date), Type: c.Type, What: c.What, Feasible: c.Feasible,
+		Started: b.past(c.StartedOn), Installed: b.past(c.InstalledOn),
+	}
+}
+
+// past forgets a day that lies after the as-of day.
+func (b *Builder) past(d Date) Date {
+	if d > b.AsOf {
+		return 0
+	}
+	return d
+}
+
+// documents writes the documents that fit, oldest first, and adds their series: by kind, the days of each document
+// and of its reviews.
+func (b *Builder) documents(file *File, fits func(*record.Document) bool) []Document {
+	out := []Document{}
+	for _, doc := range until(b.Registers.Documents, b.AsOf, func(d *record.Document) Date { return d.Date }) {
+		if !fits(doc) {
+			continue
+		}
+		d := Document{
+			Link: *link(file.Refs, doc, doc.Date), Type: doc.Type, Covers: emptyNotNil([]string(doc.Covers)),
+			ReviewedOn: b.past(doc.ReviewedOn), PostedOn: b.past(doc.PostedOn), PostedTo: doc.PostedTo,
+		}
+		out = append(out, d)
+		name := documentSeries + doc.Type
+		file.Series[name] = append(file.Series[name], d.Link)
+		if d.ReviewedOn.Known() && d.ReviewedOn != d.Date {
+			file.Series[name] = append(file.Series[name], Link{d.ReviewedOn, d.Ref})
+		}
+	}
+	for name, list := range file.Series {
+		if strings.HasPrefix(name, documentSeries) {
+			slices.SortStableFunc(list, func(a, b Link) int { return int(a.Date) - int(b.Date) })
+		}
+	}
+	return out
 }
 
 // measurements writes the measurements of a group, the dose channels of each taken together.
 func (b *Builder) measurements(id string, rows []*record.Measurement, refs Refs) []Measurement {
 	out := []Measurement{}
-	level := b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols]
-	i, at := b.channels.index(level.Channel), workplaceOf(id, b.Registers.Groups[id])
+	i, at := b.channels.enrols, workplaceOf(id, b.Registers.Groups[id])
 	for len(rows) > 0 {
 		n := sameMeasurement(rows)
 		first := rows[0]
@@ -124,7 +153,7 @@ func (b *Builder) measurements(id string, rows []*record.Measurement, refs Refs)
 		for _, row := range rows[:n] {
 			b.takeRow(&m, row, i)
 		}
-		m.Reaches, m.Doubts = b.reachesEnrolling(i, rows[:n], at), doubts(rows[:n])
+		m.Reaches, m.Doubts = b.reachesEnrolling(rows[:n], at), doubts(rows[:n])
 		out = append(out, m)
 		rows = rows[n:]
 	}
@@ -151,18 +180,30 @@ func (b *Builder) takeRow(m *Measurement, row *record.Measurement, channel int) 
 	if row.PeakDB.Known && (!m.PeakDB.Known || row.PeakDB.Value > m.PeakDB.Value) {
 		m.PeakDB, m.PeakWeighting = row.PeakDB, row.PeakWeighting
 	}
+	m.PeakDBC, m.PeakDBZ = higherFigure(m.PeakDBC, PeakDBC, row), higherFigure(m.PeakDBZ, PeakDBZ, row)
+	m.MaxDBCFast, m.ImpulseDBZ = higherFigure(m.MaxDBCFast, MaxDBCFast, row), higherFigure(m.ImpulseDBZ, ImpulseDBZ, row)
+	if row.AccuracyClass != "" {
+		m.AccuracyClass = row.AccuracyClass
+	}
+	if row.LAeqDBA.Known {
+		m.Levelled = true
+	}
 	if row.ObserversInvited != record.Unanswered {
 		m.ObserversInvited = row.ObserversInvited
 	}
 }
 
 // reachesEnrolling says whether one measurement reaches the level that enrols.
-func (b *Builder) reachesEnrolling(channel int, rows []*record.Measurement, at workplace) record.Answer {
+func (b *Builder) reachesEnrolling(rows []*record.Measurement, at workplace) record.Answer {
 	if rows[0].Type == "task" {
 		return record.Unanswered
 	}
-	answer, _ := b.reaches(b.Measures.Exposure.Enrols, b.channels.ofMeasurement(rows, at).on[channel].bounds, rows[0].Date)
-	return answer
+	r := b.channels.ofMeasurement(rows, at)
+	on := make([]known, len(r.on))
+	for i := range on {
+		on[i].bounds = r.on[i].bounds
+	}
+	return b.reaches(b.Measures.Exposure.Enrols, on, rows[0].Date).verdict
 }
 
 // changes writes the changes of a group with the first measurement and the first evaluation of protectors
@@ -170,7 +211,7 @@ func (b *Builder) reachesEnrolling(channel int, rows []*record.Measurement, at w
 func (b *Builder) changes(d *Group, refs Refs) {
 	d.Changes = []Change{}
 	for _, c := range b.Registers.changesOf(d.ID, d.Area, b.AsOf) {
-		change := Change{Link: *link(refs, c, c.Date), ID: c.ChangeID, What: c.What, Raises: c.RaisesExposure}
+		change := Change{Link: *link(refs, c, c.Date), ID: c.ChangeID, What: c.What, Raises: c.RaisesExposure, Identified: b.past(c.IdentifiedOn)}
 		for _, m := range d.Measurements {
 			if m.Date >= c.Date {
 				change.Measured = &Link{m.Date, m.Ref}
@@ -232,15 +273,13 @@ func (b *Builder) SiteDossier(u *Usage) *File {
 		x.Ref = refs.Of(u.missingRec[id])
 		d.MissingMeasurements = append(d.MissingMeasurements, x)
 	}
-	for _, doc := range until(b.Registers.Documents, b.AsOf, func(d *record.Document) Date { return d.Date }) {
-		if doc.Site == b.Place.ID || doc.Site == "" && doc.Group == "" && doc.Area == "" {
-			d.Documents = append(d.Documents, document(doc, refs))
-		}
-	}
+	file := &File{Kind: KindSite, ID: d.ID, Site: d.ID, Input: d, Series: map[string][]Link{}, Refs: refs}
+	d.Documents = b.documents(file, func(doc *record.Document) bool {
+		return doc.Site == b.Place.ID || doc.Site == "" && doc.Group == "" && doc.Area == ""
+	})
 	for _, year := range slices.Sorted(maps.Keys(u.logs)) {
 		d.LogYears = append(d.LogYears, b.logYear(year, u.logs[year], d.Documents, refs))
 	}
-	file := &File{Kind: KindSite, ID: d.ID, Site: d.ID, Input: d, Series: map[string][]Link{}, Refs: refs}
 	u.observeSite(file)
 	return file
 }

@@ -18,25 +18,32 @@ type Baseline struct {
 // Audiogram is one hearing test.
 type Audiogram struct {
 	Link
-	ID             string        `json:"id" doc:"id of the audiogram"`
-	Purpose        string        `json:"purpose" doc:"why it was made"`
-	Enrolled       bool          `json:"enrolled" doc:"whether the worker was enrolled on that day"`
-	InProgram      bool          `json:"in_program" doc:"whether it was made under the program: while enrolled, or as the baseline of a worker who was ever enrolled; and not found invalid"`
-	Invalidated    bool          `json:"invalidated" doc:"whether a professional has found it invalid"`
-	RetestOf       string        `json:"retest_of" doc:"reference of the test that this retest repeats in time"`
-	ReplacedBy     string        `json:"replaced_by" doc:"reference of the retest in time that stands in for this test"`
-	ToCompare      bool          `json:"to_compare" doc:"whether it is to be compared with the baseline: a later test, while enrolled, not invalidated and no exit test"`
-	ComparedOn     Date          `json:"compared_on" doc:"day of the comparison with the baseline"`
-	CannotCompare  []string      `json:"cannot_compare" doc:"thresholds that the comparison needs and the record lacks, such as left 3000 Hz"`
-	NotTested      []string      `json:"not_tested" doc:"required thresholds that were not tested"`
-	NotRecorded    []string      `json:"not_recorded" doc:"required thresholds on which the record says nothing"`
-	Problem        string        `json:"problem" doc:"why a professional should look at it: a shift, or thresholds that no average can be made of; null if nothing stands out"`
-	ReviewedOn     Date          `json:"reviewed_on" doc:"day of the professional review"`
-	ReviewerIs     string        `json:"reviewer_is" doc:"profession of the reviewer; null if not known"`
-	ReviewerKnown  bool          `json:"reviewer_named" doc:"whether a reviewer is named"`
-	RecordLacks    []string      `json:"record_lacks" doc:"contents of an audiometric record that this one lacks"`
-	Mobile         record.Answer `json:"mobile" doc:"made in a mobile test van"`
-	EarsWithResult int           `json:"ears_with_result" doc:"number of ears with any result"`
+	ID                string        `json:"id" doc:"id of the audiogram"`
+	Purpose           string        `json:"purpose" doc:"why it was made"`
+	Enrolled          bool          `json:"enrolled" doc:"whether the worker was enrolled on that day"`
+	InProgram         bool          `json:"in_program" doc:"whether it was made under the program: while enrolled, or as the baseline of a worker who was ever enrolled; and not found invalid"`
+	Invalidated       bool          `json:"invalidated" doc:"whether a professional has found it invalid"`
+	RetestOf          string        `json:"retest_of" doc:"reference of the test that this retest repeats in time"`
+	ReplacedBy        string        `json:"replaced_by" doc:"reference of the retest in time that stands in for this test"`
+	ToCompare         bool          `json:"to_compare" doc:"whether it is to be compared with the baseline: a later test, while enrolled, not invalidated and no exit test"`
+	ComparedOn        Date          `json:"compared_on" doc:"day of the comparison with the baseline"`
+	CannotCompare     []string      `json:"cannot_compare" doc:"thresholds that the comparison needs and the record lacks, such as left 3000 Hz"`
+	NotTested         []string      `json:"not_tested" doc:"required thresholds that were not tested"`
+	NotRecorded       []string      `json:"not_recorded" doc:"required thresholds on which the record says nothing"`
+	Problem           string        `json:"problem" doc:"why a professional should look at it: a shift, or thresholds that no average can be made of; null if nothing stands out"`
+	ReviewedOn        Date          `json:"reviewed_on" doc:"day of the professional review"`
+	ReviewerIs        string        `json:"reviewer_is" doc:"profession of the reviewer; null if not known"`
+	ReviewerKnown     bool          `json:"reviewer_named" doc:"whether a reviewer is named"`
+	ReceivedOn        Date          `json:"received_on" doc:"day on which the employer received the result"`
+	TesterIs          string        `json:"tester_is" doc:"profession of the examiner; null if not known"`
+	QuietHours        record.Number `json:"quiet_hours" doc:"hours without workplace noise before the test"`
+	QuietByProtectors record.Answer `json:"quiet_by_protectors" doc:"protectors were worn in place of the quiet period"`
+	Determined        bool          `json:"determined" doc:"whether the comparison with the baseline is on record"`
+	FollowUps         []Done        `json:"follow_ups" doc:"what was done or decided after it, oldest first; only where the bundle's measures ask for it"`
+	Notices           []Told        `json:"notices" doc:"what the worker was told after it, oldest first; only where the bundle's measures ask for it"`
+	RecordLacks       []string      `json:"record_lacks" doc:"contents of an audiometric record that this one lacks"`
+	Mobile            record.Answer `json:"mobile" doc:"made in a mobile test van"`
+	EarsWithResult    int           `json:"ears_with_result" doc:"number of ears with any result"`
 	// Schemes has one entry for each of the other schemes of the bundle's measures.
 	Schemes map[string]Judged `json:"schemes" doc:"what the other schemes of the bundle say of the test"`
 	Hearing *Hearing          `json:"hearing" doc:"the audiometric figures of the comparison; null if the test is not to be compared, or figures are not shown"`

@@ -90,7 +90,7 @@ func (a asked) ofStore(t require.TestingT, store *dossier.Store) *judged {
 			}
 		}
 	}
-	for _, more := range [][]*dossier.File{b.Groups(usage), b.Instruments(usage), b.Rooms(usage), b.Testers(usage), {b.SiteDossier(usage)}} {
+	for _, more := range [][]*dossier.File{b.Groups(usage), b.Areas(usage), b.Instruments(usage), b.Rooms(usage), b.Testers(usage), {b.SiteDossier(usage)}} {
 		out.files = append(out.files, more...)
 	}
 	return out

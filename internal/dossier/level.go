@@ -170,7 +170,7 @@ func (c *channels) steadyLine(day Date, shift float64, at workplace) string {
 // enrolling gives the parameter that enrols, percent or dBA, on a day, or where it has none then, on the as-of
 // day; and whether it is reached or gone beyond.
 func (c *channels) enrolling(day Date) (limit float64, verb string, ok bool) {
-	t := c.measures.Levels[c.measures.Enrols]
+	t := c.measures.Levels[c.measures.partsOf(c.measures.Enrols)[0]]
 	name, verb := t.AtLeast+t.Above, "reaches"
 	if t.Above != "" {
 		verb = "is the most that does not exceed"

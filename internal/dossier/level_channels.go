@@ -30,8 +30,10 @@ type channels struct {
 	channels []Channel
 	scales   []acoustics.Scale // of doses; empty for a level
 	levels   bool              // whether any channel is a level
-	measures ExposureMeasures
-	enrols   int // the channel of the level that enrols
+	// highestAny says whether any channel takes the highest value of a figure.
+	highestAny bool
+	measures   ExposureMeasures
+	enrols     int // the channel of the level that enrols
 
 	registers *Registers
 	rows      map[string]*record.Measurement // measurements with a level, by id
@@ -44,10 +46,11 @@ func newChannels(m ExposureMeasures, r *Registers, law Law, asOf Date) channels 
 	for _, name := range c.names {
 		ch := m.Channels[name]
 		c.levels = c.levels || ch.Kind == LevelChannel
+		c.highestAny = c.highestAny || ch.Kind == HighestChannel
 		c.channels = append(c.channels, ch)
 		c.scales = append(c.scales, acoustics.Scale{Criterion: ch.CriterionDB, Exchange: ch.ExchangeDB, Threshold: ch.ThresholdDB, Upper: ch.UpperDB})
 	}
-	c.enrols = c.index(m.Levels[m.Enrols].Channel)
+	c.enrols = c.index(m.MainChannel(m.Enrols))
 	c.rows = map[string]*record.Measurement{}
 	for _, row := range r.Measurements {
 		if c.rows[row.MeasurementID] == nil && row.LAeqDBA.Known && row.Date <= asOf {
@@ -59,24 +62,31 @@ func newChannels(m ExposureMeasures, r *Registers, law Law, asOf Date) channels 
 
 func (c *channels) index(name string) int { return slices.Index(c.names, name) }
 
-// isLevel says whether a channel is a level in dBA; else it is a dose in percent.
-func (c *channels) isLevel(i int) bool { return c.channels[i].Kind == LevelChannel }
+// isLevel says whether a channel is a level in dBA, or a highest value in dB; else it is a dose in percent.
+func (c *channels) isLevel(i int) bool { return c.channels[i].Kind == LevelChannel || c.isHighest(i) }
+
+// isHighest says whether a channel takes the highest value of a figure.
+func (c *channels) isHighest(i int) bool { return c.channels[i].Kind == HighestChannel }
 
 // sampled says whether several results on a channel are taken together by sampling (ISO 9612).
-func (c *channels) sampled(i int) bool { return c.isLevel(i) && c.measures.Several == "sampled" }
+func (c *channels) sampled(i int) bool {
+	return c.isLevel(i) && !c.isHighest(i) && c.measures.Several == "sampled"
+}
 
 // workplace is what is known of the shifts of a group.
 type workplace struct {
 	group string
 	shift record.Number // minutes
 	days  record.Number // worked in a week
+
+	impulsive record.Answer
 }
 
 func workplaceOf(id string, g *record.Group) workplace {
 	if g == nil {
 		return workplace{group: id}
 	}
-	return workplace{id, g.ShiftMinutes, g.DaysPerWeek}
+	return workplace{id, g.ShiftMinutes, g.DaysPerWeek, g.Impulsive}
 }
 
 // reading is what one result tells on one channel.
@@ -129,6 +139,9 @@ func (c *channels) ofMeasurement(rows []*record.Measurement, at workplace) *resu
 		for i := range c.names {
 			on := &r.on[i]
 			switch {
+			case c.isHighest(i):
+				on.takeHighest(c.channels[i].Of, m)
+			case m.Type == "task": // the level of a task is taken with the tasks of the day
 			case c.sampled(i):
 				c.takeSample(on, m, at)
 			case c.isLevel(i):
@@ -147,9 +160,11 @@ func (c *channels) ofMeasurement(rows []*record.Measurement, at workplace) *resu
 		}
 	}
 	for i := range r.on {
-		if c.isLevel(i) && r.on[i].known() {
-			c.week(i, &r.on[i], at)
+		if !c.isLevel(i) || c.isHighest(i) || !r.on[i].known() {
+			continue
 		}
+		c.margin(&r.on[i], rows)
+		c.week(i, &r.on[i], at)
 	}
 	c.finish(r, shift, at)
 	return r
@@ -191,7 +206,10 @@ func (c *channels) level(i int, k *known) Level {
 // words writes bounds that are not exact.
 func (c *channels) words(i int, d bounds) string {
 	unit := " %"
-	if c.isLevel(i) {
+	switch {
+	case c.isHighest(i):
+		unit = " " + figureUnits[c.channels[i].Of]
+	case c.isLevel(i):
 		unit = " dBA"
 	}
 	var parts []string

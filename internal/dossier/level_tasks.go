@@ -40,6 +40,7 @@ func (c *channels) ofTasks(tasks []*record.Task, at workplace) *result {
 	for i := range r.on {
 		on := &r.on[i]
 		switch {
+		case c.isHighest(i):
 		case note != "":
 			on.notes = append(on.notes, note)
 		case c.isLevel(i):
@@ -48,7 +49,7 @@ func (c *channels) ofTasks(tasks []*record.Task, at workplace) *result {
 				c.week(i, on, at)
 			}
 		default:
-			on.takeTaskDose(c.scales[i], day)
+			on.takeTaskDose(c.scales[i], c.channels[i].Durations, day)
 		}
 	}
 	c.finish(r, at.shift, at)
@@ -88,8 +89,13 @@ func (c *channels) day(tasks []*record.Task) (d dayOfTasks, note string) {
 	return d, ""
 }
 
-// takeTaskDose sums the dose of a day's tasks, with its numbers.
-func (r *reading) takeTaskDose(s acoustics.Scale, day dayOfTasks) {
+// takeTaskDose sums the dose of a day's tasks, with its numbers; where the law prints a table of permitted times,
+// by that table.
+func (r *reading) takeTaskDose(s acoustics.Scale, table []Limit, day dayOfTasks) {
+	if len(table) > 0 {
+		r.takeTableDose(table, day)
+		return
+	}
 	pct, err := s.Dose(day.segments)
 	if err != nil {
 		r.notes = append(r.notes, err.Error())

@@ -63,6 +63,7 @@ var weekdays = []time.Weekday{time.Sunday, time.Monday, time.Tuesday, time.Wedne
 type ExposureMeasures struct {
 	Channels map[string]Channel   `json:"channels" doc:"dose settings, by name"`
 	Levels   map[string]Threshold `json:"levels" doc:"exposure levels of the law, by name"`
+	Margins  map[string]string    `json:"margins,omitempty" doc:"parameter by accuracy class of the determination (1, 2 or 3): dB to be added to a level, for a law that counts in such classes"`
 	Enrols   string               `json:"enrols" doc:"name of the level that puts a worker into the program"`
 	Several  string               `json:"several" enum:"highest|sampled" doc:"what counts where a group has several results since its latest change: the highest, or the mean with its uncertainty by sampling (levels only)"`
 	Strategy string               `json:"strategy,omitempty" enum:"job|full_day" doc:"how samples were taken, where several is sampled (ISO 9612): over jobs or over full days"`
@@ -72,14 +73,29 @@ type ExposureMeasures struct {
 
 // The kinds of channels.
 const (
-	DoseChannel  = "dose"
-	LevelChannel = "level"
+	DoseChannel    = "dose"
+	LevelChannel   = "level"
+	HighestChannel = "highest"
 )
 
-// Channel is one way in which exposure is expressed: the dose of a dosimeter setting, or the level L_EX,8h
-// by equal energy.
+// The figures of a measurement that a channel of the highest value can take.
+const (
+	PeakDBC    = "peak_dbc"
+	PeakDBZ    = "peak_dbz"
+	MaxDBA     = "max_dba"
+	MaxDBCFast = "max_dbc_fast"
+	ImpulseDBZ = "impulse_dbz"
+)
+
+// HighestFigures lists those figures.
+var HighestFigures = []string{PeakDBC, PeakDBZ, MaxDBA, MaxDBCFast, ImpulseDBZ}
+
+// Channel is one way in which exposure is expressed: the dose of a dosimeter setting, the level L_EX,8h by
+// equal energy, or the highest value of a figure, such as the C-weighted peak.
 type Channel struct {
-	Kind        string  `json:"kind,omitempty" enum:"dose|level" doc:"a noise dose in percent, or the level L_EX,8h in dBA; a dose if left out"`
+	Kind        string  `json:"kind,omitempty" enum:"dose|level|highest" doc:"a noise dose in percent, the level L_EX,8h in dBA, or the highest value of a figure in dB; a dose if left out"`
+	Of          string  `json:"of,omitempty" enum:"peak_dbc|peak_dbz|max_dba|max_dbc_fast|impulse_dbz" doc:"figure of which the highest value counts: peak level with C-weighting or unweighted, highest continuous level dBA slow, or impact noise dBC fast or by an unweighted impulse detector"`
+	Durations   []Limit `json:"durations,omitempty" doc:"printed table of the permitted time by level, by which the dose of a day described by tasks is summed; a level between two rows takes the higher"`
 	CriterionDB float64 `json:"criterion_db,omitempty" doc:"criterion level of a dose for 8 h, dBA"`
 	ExchangeDB  float64 `json:"exchange_db,omitempty" doc:"exchange rate of a dose, dB"`
 	ThresholdDB float64 `json:"threshold_db,omitempty" doc:"integration threshold of a dose, dBA; levels at it count"`
@@ -88,23 +104,39 @@ type Channel struct {
 	Cite        string  `json:"cite" doc:"paragraph"`
 }
 
-// Threshold is an exposure level of the law: a channel whose value reaches, or exceeds, a parameter.
+// Limit is a row of a printed table of permitted times.
+type Limit struct {
+	DBA     float64 `json:"dba" doc:"level, dBA"`
+	Minutes float64 `json:"minutes" doc:"permitted time in a day, minutes"`
+}
+
+// Threshold is an exposure level of the law: a channel whose value reaches, or exceeds, a parameter; or any of
+// several such levels.
 type Threshold struct {
+	Channel string   `json:"channel,omitempty" doc:"name of the channel"`
+	AtLeast string   `json:"at_least,omitempty" doc:"parameter that the value, percent, dBA or dB, reaches"`
+	Above   string   `json:"above,omitempty" doc:"parameter that the value, percent, dBA or dB, exceeds"`
+	Instead *Instead `json:"instead,omitempty" doc:"another channel, where the site has elected it"`
+	Any     []string `json:"any,omitempty" doc:"in place of a channel: names of other levels, of which one is enough; one whose parameter has no value on the day is left out, so that a law can change its scale. A channel of the highest value that was not measured leaves it to the others, unless the group's noise holds impulses"`
+}
+
+// Instead is a channel that stands in for another one.
+type Instead struct {
+	Choice  string `json:"choice" doc:"choice of the site that elects it"`
 	Channel string `json:"channel" doc:"name of the channel"`
-	AtLeast string `json:"at_least,omitempty" doc:"parameter that the dose, percent, or the level, dBA, reaches"`
-	Above   string `json:"above,omitempty" doc:"parameter that the dose, percent, or the level, dBA, exceeds"`
 }
 
 // HearingMeasures say how hearing tests are compared.
 type HearingMeasures struct {
 	Required      []int               `json:"required" doc:"frequencies that each test of each ear must hold, Hz"`
-	Shift         ShiftMeasure        `json:"shift" doc:"the threshold shift of the law"`
+	Shift         ShiftMeasure        `json:"shift,omitzero" doc:"the threshold shift of the law; left out where the law knows none"`
 	Others        []audiometry.Scheme `json:"others,omitempty" doc:"further schemes by which each test is judged, such as an early warning; each has a name of its own"`
 	Recordable    *RecordMeasure      `json:"recordable,omitempty" doc:"the hearing level of the recording rule"`
 	AgeCorrection *AgeMeasure         `json:"age_correction,omitempty" doc:"the age correction that the law allows"`
 	Professionals []string            `json:"professionals" doc:"professions that may review tests and revise baselines"`
 	Physicians    []string            `json:"physicians" doc:"professions whose finding lifts the follow-up of a shift"`
 	Licensed      []string            `json:"licensed" doc:"professions whose finding lifts the entry in the log"`
+	Afterwards    bool                `json:"afterwards,omitempty" doc:"whether each test comes with all that was done or told after it"`
 
 	// Sums says whether audiometric figures come with their sums, which take time to write. It is set where they are shown.
 	Sums bool `json:"-"`
@@ -131,7 +163,7 @@ type AgeMeasure struct {
 
 // ProtectionMeasures say how the attenuation of protectors is estimated.
 type ProtectionMeasures struct {
-	Rating    string  `json:"rating" enum:"nrr|snr|hml|octave|slc80" doc:"rating of the label, or laboratory data, that is used"`
+	Rating    string  `json:"rating,omitempty" enum:"nrr|snr|hml|octave|slc80" doc:"rating of the label, or laboratory data, that is used"`
 	Channel   string  `json:"channel" doc:"channel whose 8-hour level is reduced"`
 	Derating  string  `json:"derating,omitempty" enum:"niosh|csa" doc:"reduction of a noise reduction rating by type of protector"`
 	Percent   float64 `json:"percent,omitempty" doc:"percentage of wearers for whom octave band values are assumed; 84 if left out"`

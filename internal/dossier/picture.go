@@ -82,6 +82,9 @@ func (b *Builder) LevelLines() []LevelLine {
 	var out []LevelLine
 	for _, name := range b.levels {
 		t := b.Measures.Exposure.Levels[name]
+		if len(t.Any) > 0 || b.channels.isHighest(b.channels.index(t.Channel)) {
+			continue // its parts are drawn, and peaks on no scale of averages
+		}
 		parameter := t.AtLeast + t.Above
 		v, ok := b.Law.Number(parameter, b.AsOf)
 		if !ok {

@@ -9,6 +9,8 @@ type Group struct {
 	Area           string             `json:"area" doc:"area where it works"`
 	SuspectedNoisy record.Answer      `json:"suspected_noisy" doc:"whether information suggests that exposure may reach the action level"`
 	Varied         record.Answer      `json:"varied" doc:"whether area sampling is generally unsuitable: mobility, varying levels or impulses"`
+	Impulsive      record.Answer      `json:"impulsive" doc:"whether impulse or impact noise occurs"`
+	DaysVary       record.Answer      `json:"days_vary" doc:"whether the daily exposure varies markedly from day to day"`
 	Workers        int                `json:"workers" doc:"number of workers in the group on the as-of day"`
 	Holders        int                `json:"protector_holders" doc:"number of them with a hearing protector at hand"`
 	Measurements   []Measurement      `json:"measurements" doc:"noise measurements that stand for the group, oldest first"`
@@ -37,6 +39,12 @@ type Measurement struct {
 	MaxDBA           record.Number `json:"max_dba" doc:"highest continuous level, dBA slow"`
 	PeakDB           record.Number `json:"peak_db" doc:"peak sound pressure level, dB"`
 	PeakWeighting    string        `json:"peak_weighting" doc:"C, or Z for unweighted"`
+	PeakDBC          record.Number `json:"peak_dbc" doc:"C-weighted peak sound pressure level, dB"`
+	PeakDBZ          record.Number `json:"peak_dbz" doc:"unweighted peak sound pressure level, dB"`
+	MaxDBCFast       record.Number `json:"max_dbc_fast" doc:"highest level of impact noise, C-weighted, fast, dB"`
+	ImpulseDBZ       record.Number `json:"impulse_dbz" doc:"highest level of impact noise by an impulse detector, unweighted, dB"`
+	Levelled         bool          `json:"levelled" doc:"whether an A-weighted equivalent level was taken"`
+	AccuracyClass    string        `json:"accuracy_class" doc:"accuracy class of the determination"`
 	ObserversInvited record.Answer `json:"observers_invited" doc:"whether workers or their representatives could observe"`
 	Reaches          record.Answer `json:"reaches_enrolling" doc:"whether it reaches the level that enrols"`
 	Doubts           []string      `json:"doubts" doc:"figures on it that cannot all be right"`
@@ -47,12 +55,13 @@ type Measurement struct {
 // Change is a change that may alter exposure.
 type Change struct {
 	Link
-	ID        string `json:"id" doc:"id of the change"`
-	What      string `json:"what" doc:"what was changed"`
-	Raises    string `json:"raises_exposure" doc:"yes, no or unknown; null if not recorded"`
-	Measured  *Link  `json:"measured" doc:"the first measurement since the change"`
-	Evaluated *Link  `json:"evaluated" doc:"the first evaluation of protector attenuation since the change"`
-	Enrolling bool   `json:"enrolling" doc:"whether the group was at or above the level that enrols on that day, or has been found so since"`
+	ID         string `json:"id" doc:"id of the change"`
+	What       string `json:"what" doc:"what was changed"`
+	Raises     string `json:"raises_exposure" doc:"yes, no or unknown; null if not recorded"`
+	Identified Date   `json:"identified_on" doc:"day on which it was entered in the register"`
+	Measured   *Link  `json:"measured" doc:"the first measurement since the change"`
+	Evaluated  *Link  `json:"evaluated" doc:"the first evaluation of protector attenuation since the change"`
+	Enrolling  bool   `json:"enrolling" doc:"whether the group was at or above the level that enrols on that day, or has been found so since"`
 }
 
 // Control is a noise control or the study of one.
@@ -61,14 +70,18 @@ type Control struct {
 	Type      string `json:"kind" doc:"engineering or administrative"`
 	What      string `json:"what" doc:"the control"`
 	Feasible  string `json:"feasible" doc:"yes, no or studied; null if not recorded"`
+	Started   Date   `json:"started_on" doc:"day on which the work on it began"`
 	Installed Date   `json:"installed_on" doc:"day on which it was put in place"`
 }
 
 // Document is a paper or file that attests a duty.
 type Document struct {
 	Link
-	Type   string   `json:"kind" doc:"what it attests"`
-	Covers []string `json:"covers" doc:"what it covers"`
+	Type       string   `json:"kind" doc:"what it attests"`
+	Covers     []string `json:"covers" doc:"what it covers"`
+	ReviewedOn Date     `json:"reviewed_on" doc:"day of the latest review"`
+	PostedOn   Date     `json:"posted_on" doc:"day from which it was posted or otherwise made known"`
+	PostedTo   Date     `json:"posted_to" doc:"last day on which it was posted; null while it is"`
 }
 
 // Site is the dossier of one site.

@@ -3,6 +3,7 @@ package dossier
 import (
 	"slices"
 
+	"hearduty/internal/acoustics"
 	"hearduty/internal/calendar"
 	"hearduty/internal/record"
 )
@@ -32,12 +33,32 @@ func (b *Builder) protection(w *WorkerRecords, now *stretch, h *hearing, inform 
 	}
 	test := b.fit(p, w, issue, h, refs)
 	noise := b.noiseOf(now)
-	b.attenuate(p, noise)
+	p.PlugsOffered, p.MuffsOffered, p.Class, p.Types = issue.PlugsOffered, issue.MuffsOffered, b.modelOf(issue.ProtectorID).Class, []string{}
+	for _, i := range held {
+		p.Types = append(p.Types, b.modelOf(i.ProtectorID).Type)
+	}
+	if b.Measures.Protection.Rating != "" {
+		b.attenuate(p, noise)
+	}
+	p.atTheEar(noise, peakEstimates(b.modelOf(issue.ProtectorID), noise))
 	p.Information = []Estimate{}
 	if inform {
 		p.Information = b.information(p, noise, held, test)
 	}
 	return p
+}
+
+// atTheEar notes what a fit test leaves of the 8-hour level, and the highest estimate of the peak.
+func (p *Protection) atTheEar(n noise, peaks []Estimate) {
+	p.Peak = n.peak
+	if p.PAR.Known && n.known {
+		p.UnderPAR = record.Num(acoustics.RoundTenth(n.level - max(0, p.PAR.Value)))
+	}
+	for _, e := range peaks {
+		if !p.PeakUnder.Known || e.Level.Value > p.PeakUnder.Value {
+			p.PeakUnder = e.Level
+		}
+	}
 }
 
 // attenuationMatters says whether a law may ask how much a protector leaves of the noise: on the as-of day the

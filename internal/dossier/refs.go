@@ -83,6 +83,8 @@ func name(rec record.Record) string {
 		return v.TesterID
 	case *record.Document:
 		return v.Type + "@" + v.Date.String()
+	case *record.Examination:
+		return v.ExaminationID
 	case *record.Control:
 		return v.Type + "/" + v.Group + v.Area + "@" + v.Date.String()
 	}

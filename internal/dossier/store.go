@@ -171,6 +171,7 @@ type WorkerRecords struct {
 	Issues       []*record.ProtectorIssue
 	FitTests     []*record.FitTest
 	WearChecks   []*record.WearCheck
+	Examinations []*record.Examination
 }
 
 // workerOf gives the worker to whom a record belongs, or an empty text. A measurement that stands for a
@@ -199,6 +200,8 @@ func workerOf(rec record.Record) string {
 		return v.WorkerID
 	case *record.WearCheck:
 		return v.WorkerID
+	case *record.Examination:
+		return v.WorkerID
 	}
 	return ""
 }
@@ -225,6 +228,8 @@ func (w *WorkerRecords) add(rec record.Record) {
 		w.FitTests = append(w.FitTests, v)
 	case *record.WearCheck:
 		w.WearChecks = append(w.WearChecks, v)
+	case *record.Examination:
+		w.Examinations = append(w.Examinations, v)
 	}
 }
 
@@ -242,6 +247,7 @@ func (w *WorkerRecords) until(last Date) *WorkerRecords {
 		Issues:       until(w.Issues, last, func(r *record.ProtectorIssue) Date { return r.Date }),
 		FitTests:     until(w.FitTests, last, func(r *record.FitTest) Date { return r.Date }),
 		WearChecks:   until(w.WearChecks, last, func(r *record.WearCheck) Date { return r.Date }),
+		Examinations: until(w.Examinations, last, firstDay),
 	}
 }
 
@@ -256,6 +262,15 @@ func (w *WorkerRecords) sort() {
 	byDay(w.Issues, func(r *record.ProtectorIssue) Date { return r.Date })
 	byDay(w.FitTests, func(r *record.FitTest) Date { return r.Date })
 	byDay(w.WearChecks, func(r *record.WearCheck) Date { return r.Date })
+	byDay(w.Examinations, firstDay)
+}
+
+// firstDay gives the day on which an examination was offered, or if no offer is on record, held.
+func firstDay(e *record.Examination) Date {
+	if e.OfferedOn.Known() {
+		return e.OfferedOn
+	}
+	return e.AttendedOn
 }
 
 // byDay sorts records by day, and those of one day as they were read.

@@ -158,10 +158,12 @@ func (h *hearing) findEffective() {
 		}
 		if n := len(h.effective); n > 0 {
 			h.effective[n-1].next = t.rec.Date
+		} else {
+			h.baseline.next = t.rec.Date
 		}
 		h.effective = append(h.effective, t)
 		s := t.standing()
-		s.compare = t.enrolled && (t.rec.Purpose != "exit" || h.determined(t).Known())
+		s.compare = h.b.Measures.Hearing.Shift.Rule != "" && t.enrolled && (t.rec.Purpose != "exit" || h.determined(t).Known())
 	}
 	for _, t := range h.effective {
 		t.standing().next = t.next
@@ -224,10 +226,15 @@ func (h *hearing) audiograms(compared map[*test]*comparison, lacks func(*test) [
 			Link: Link{Date: t.rec.Date, Ref: t.ref}, ID: t.rec.AudiogramID, Purpose: t.rec.Purpose, Enrolled: t.enrolled,
 			InProgram:   !t.invalidated && (t.enrolled || t == h.baseline && h.everEnrolled),
 			Invalidated: t.invalidated, ToCompare: t.compare, ComparedOn: h.past(t.rec.DeterminedOn), Mobile: t.rec.Mobile,
-			ReviewedOn: h.past(t.rec.ReviewedOn), ReviewerKnown: t.rec.Reviewer != "", ReviewerIs: h.b.Registers.professionOf(t.rec.Reviewer),
+			ReceivedOn: h.past(t.rec.ReceivedOn), TesterIs: h.b.Registers.professionOf(t.rec.TesterID), QuietHours: t.rec.QuietHours,
+			QuietByProtectors: t.rec.QuietByProtectors, Determined: t.rec.DeterminedOn.Known() && t.rec.DeterminedOn <= h.b.AsOf,
+			FollowUps: []Done{}, Notices: []Told{}, ReviewedOn: h.past(t.rec.ReviewedOn), ReviewerKnown: t.rec.Reviewer != "", ReviewerIs: h.b.Registers.professionOf(t.rec.Reviewer),
 			EarsWithResult: earsWithResult(t.rec), CannotCompare: []string{}, RecordLacks: lacks(t), Schemes: h.judged(t),
 		}
 		a.NotTested, a.NotRecorded = h.required(t.rec)
+		if h.b.Measures.Hearing.Afterwards {
+			a.FollowUps, a.Notices = h.afterwards(t)
+		}
 		if t.retestOf != nil {
 			a.RetestOf = t.retestOf.ref
 			if !a.ReviewedOn.Known() { // a review of the first test covers its retest

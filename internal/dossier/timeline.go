@@ -143,7 +143,7 @@ func (s *stretch) add(group string, on []known) {
 // inNoGroup gives the exposure on a day in a gap between assignments: own results of that gap tell it.
 func (b *Builder) inNoGroup(gap calendar.Spell, own *ownRows, day Date) []known {
 	const reason = "the worker is in no group and has no full-shift measurement"
-	return b.withOwn(b.channels.historyOf(nil, nil), reason, gap, own.in(""), day)
+	return b.withOwn(b.channels.historyOf(nil, nil, workplace{}), reason, gap, own.in(""), day)
 }
 
 // inGroup gives the exposure of a worker who is in a group on a day.
@@ -151,7 +151,7 @@ func (b *Builder) inGroup(m membership, own *ownRows, day Date) []known {
 	if h := b.histories[m.group]; h != nil {
 		return b.withOwn(h, "", m.Spell, own.in(m.group), day)
 	}
-	return b.withOwn(b.channels.historyOf(nil, nil), "the group "+m.group+" has no record and no measurement", m.Spell, own.in(m.group), day)
+	return b.withOwn(b.channels.historyOf(nil, nil, workplace{}), "the group "+m.group+" has no record and no measurement", m.Spell, own.in(m.group), day)
 }
 
 // withOwn gives what is known on a day from a group's history and from the own results of the stretch in

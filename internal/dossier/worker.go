@@ -49,7 +49,9 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 	d.Protection = b.protection(w, now, h, b.attenuationMatters(d), refs)
 	d.Wear = b.wear(w, now, refs)
 	d.Training, d.ProtectorTraining = b.training(w, refs)
-	file := &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: b.workerSeries(w, h, enrolled, refs), Refs: refs}
+	series := b.workerSeries(w, h, enrolled, refs)
+	d.Examinations, d.Told = b.examinations(w, h, refs, series), b.told(w, refs)
+	file := &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: series, Refs: refs}
 	h.observe(file)
 	b.observeEmployment(file, w)
 	return file
@@ -95,8 +97,7 @@ func (b *Builder) limitOn(pieces []stretch, day Date) record.Answer {
 	if p == nil {
 		return record.Unanswered
 	}
-	answer, _ := b.reaches(level, p.on[b.channels.index(b.Measures.Exposure.Levels[level].Channel)].bounds, day)
-	return answer
+	return b.reaches(level, p.on, day).verdict
 }
 
 // enrolled writes the stretches in the program.
@@ -122,18 +123,18 @@ func (b *Builder) enrolled(w *WorkerRecords, h *hearing, spells []calendar.Spell
 
 // results lists the monitoring results that put the worker into the program, with the notice of each.
 func (b *Builder) results(w *WorkerRecords, pieces []stretch, refs Refs) []Result {
-	level := b.Measures.Exposure.Enrols
-	channel := b.channels.index(b.Measures.Exposure.Levels[level].Channel)
 	out := []Result{}
 	seen := map[*result]bool{}
 	days := map[Date]bool{}
 	for _, p := range pieces {
-		k := p.on[channel]
-		src := k.src
-		if src == nil || seen[src] || p.From > b.AsOf {
+		if p.From > b.AsOf {
 			continue
 		}
-		if answer, _ := b.reaches(level, k.bounds, max(p.From, 1)); answer != record.Yes {
+		found := b.reaches(b.Measures.Exposure.Enrols, p.on, max(p.From, 1))
+		channel := found.channel
+		k := p.on[channel]
+		src := k.src
+		if found.verdict != record.Yes || src == nil || seen[src] {
 			continue
 		}
 		seen[src], days[src.day] = true, true
@@ -154,8 +155,6 @@ func (b *Builder) results(w *WorkerRecords, pieces []stretch, refs Refs) []Resul
 // otherResults adds the results of the worker's groups that reach the enrolling level but decide no stretch,
 // since a higher one stands: the worker is to be told of them, too. Of a day's results the highest is taken.
 func (b *Builder) otherResults(out []Result, w *WorkerRecords, pieces []stretch, days map[Date]bool, refs Refs) []Result {
-	level := b.Measures.Exposure.Enrols
-	channel := b.channels.index(b.Measures.Exposure.Levels[level].Channel)
 	for _, a := range w.Assignments {
 		h := b.histories[a.Group]
 		if h == nil {
@@ -165,15 +164,20 @@ func (b *Builder) otherResults(out []Result, w *WorkerRecords, pieces []stretch,
 			if !r.day.Known() || days[r.day] || !inclusive(a.From, a.To).Contains(r.day) || stretchOn(pieces, r.day) == nil {
 				continue
 			}
-			best, src := b.channels.highest(h.results, channel, r.day, r.day)
-			if src == nil {
-				continue
+			on := make([]known, len(b.channels.names))
+			for i := range on {
+				on[i].bounds, on[i].src = b.channels.highest(h.results, i, r.day, r.day)
+				if on[i].src == nil {
+					on[i].bounds = unknown
+				}
 			}
-			if answer, _ := b.reaches(level, best, r.day); answer != record.Yes {
+			found := b.reaches(b.Measures.Exposure.Enrols, on, r.day)
+			src := on[found.channel].src
+			if found.verdict != record.Yes || src == nil {
 				continue
 			}
 			days[r.day] = true
-			shown := b.channels.level(channel, &known{bounds: best, src: src})
+			shown := b.channels.level(found.channel, &on[found.channel])
 			out = append(out, Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: src.day, Dose: shown.DosePct, LevelDBA: shown.LevelDBA})
 		}
 	}
@@ -223,7 +227,7 @@ func (b *Builder) recordLacks(t *test, h *hearing, jobTitle string, pieces []str
 	if t.rec.AudiometerID == "" || !calibrated {
 		out = append(out, "date of the last acoustic or exhaustive calibration of the audiometer")
 	}
-	channel := b.channels.index(b.Measures.Exposure.Levels[b.Measures.Exposure.Enrols].Channel)
+	channel := b.channels.enrols
 	if p := stretchOn(pieces, t.rec.Date); t.enrolled && (p == nil || p.on[channel].src == nil) {
 		out = append(out, "most recent noise exposure assessment")
 	}

@@ -64,11 +64,13 @@ type Finding struct {
 	Done     calendar.Date  `json:"done" doc:"day on which it was fulfilled"`
 	DaysOver int            `json:"days_over" doc:"days after the due day, of the fulfilment or else of the as-of day"`
 	Message  string         `json:"message" doc:"what was found, in words"`
+	Missing  []string       `json:"missing,omitempty" doc:"what the records lack to decide it, of an unproven finding"`
 	Cite     string         `json:"cite" doc:"paragraph of the law"`
 	Remedy   string         `json:"remedy" doc:"what to do"`
 	Facts    map[string]any `json:"facts" doc:"numbers and words that decide, and the parameters used"`
 	Health   map[string]any `json:"health,omitempty" doc:"audiometric figures; only on request"`
 	Evidence []Evidence     `json:"evidence" doc:"records it rests on"`
+	Undone   bool           `json:"-"` // a gap because no record says that it was done
 	Accepted *Acceptance    `json:"accepted,omitempty" doc:"the employer has accepted it for a time; it is shown apart and never counted as met"`
 }
 

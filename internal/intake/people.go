@@ -34,7 +34,7 @@ func newPeople(list []program.Alias) *people {
 }
 
 // dayFields name the field that dates a record, where it is not date.
-var dayFields = map[record.Kind]string{"worker": "hired_on", "assignment": "from"}
+var dayFields = map[record.Kind]string{"worker": "hired_on", "assignment": "from", "examination": "offered_on"}
 
 // translate puts the id of the person in place of another id in a record.
 func (p *people) translate(r record.Record) {
@@ -48,7 +48,7 @@ func (p *people) translate(r record.Record) {
 		return
 	}
 	for _, a := range p.aliases[p.table.Text(r, p.id)] {
-		if a.Days == (calendar.Spell{}) || p.day >= 0 && a.Days.Contains(dayOf(p.table.Text(r, p.day))) {
+		if a.Days == (calendar.Spell{}) || p.day >= 0 && a.Days.Contains(dayIn(p.table, p.day, r)) {
 			a.used = true
 			p.now++
 			p.table.Set(r, p.id, a.ID)
@@ -68,6 +68,15 @@ func dayField(t *record.Table) int {
 		return t.Index(name)
 	}
 	return t.Index("date")
+}
+
+// dayIn gives the day of a record by the field that dates it; of an examination without an offer, the day on which it
+// was held.
+func dayIn(t *record.Table, field int, r record.Record) record.Date {
+	if e, ok := r.(*record.Examination); ok && !e.OfferedOn.Known() {
+		return e.AttendedOn
+	}
+	return dayOf(t.Text(r, field))
 }
 
 // dayOf gives the day of a date that was read; it is not known if the field is empty.

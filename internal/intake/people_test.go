@@ -34,6 +34,8 @@ func TestTranslate(t *testing.T) {
 		{&record.Training{WorkerID: "9"}, "9"},
 		{&record.Worker{WorkerID: "9", HiredOn: day("2023-01-01")}, "9-C"},
 		{&record.Assignment{WorkerID: "9", From: day("2021-01-01")}, "9-B"},
+		{&record.Examination{WorkerID: "9", AttendedOn: day("2021-01-01")}, "9-B"},
+		{&record.Examination{WorkerID: "9", OfferedOn: day("2021-01-01"), AttendedOn: day("2023-01-01")}, "9-B"},
 		{&record.WearCheck{WorkerID: "9", Date: day("2021-01-01")}, "9-B"},
 		{&record.Measurement{WorkerID: "AG-1", Date: day("2021-01-01")}, "000123"},
 	} {
@@ -42,7 +44,7 @@ func TestTranslate(t *testing.T) {
 		assert.Equal(t, c.want, table.Text(c.r, table.Index("worker_id")), "%s", c.r.Kind())
 	}
 	p.translate(&record.Group{Group: "9"}) // a kind without workers
-	assert.Equal(t, 8, p.now)
+	assert.Equal(t, 10, p.now)
 }
 
 // Every kind that names a worker is dated by a field that it has.

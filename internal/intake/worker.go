@@ -68,7 +68,7 @@ func (g *register) admitWorker(w *record.Worker) *record.Problem {
 // was employed on its day.
 func (g *register) doubted(p *person, worker string, r record.Record) *record.Problem {
 	if g.column.day >= 0 {
-		day := dayOf(g.table.Text(r, g.column.day))
+		day := dayIn(g.table, g.column.day, r)
 		if day.Known() && employed(p.employment, day) && !employed(p.doubts, day) {
 			return nil
 		}

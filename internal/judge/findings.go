@@ -119,14 +119,16 @@ func (c *check) listed(x *outcome) bool {
 }
 
 // brief says whether an outcome is only to be counted.
-func (c *check) brief(x *outcome) bool { return !c.listed(x) }
+func (c *check) brief(x *outcome) bool {
+	return !c.listed(x) || c.beside != "" && (x.status == finding.Met || x.status == finding.Lifted)
+}
 
 func (k *keeper) finding(d *bundle.Duty, x outcome, o *obligation, key string) finding.Finding {
 	subject := finding.Subject{Kind: k.file.Kind, ID: k.file.ID}
 	f := finding.Finding{
 		ID:   finding.Fingerprint(k.bench.site.ID, k.bench.bundle.ID, d.ID, subject, key),
 		Site: k.bench.site.ID, Bundle: k.bench.bundle.ID, Duty: d.ID, Topic: d.Topic, Subject: subject, Key: key,
-		Status: x.status, Severity: d.Severity, Due: x.due, Done: x.done, Message: x.message, Cite: d.Cite, Remedy: d.Remedy,
+		Status: x.status, Severity: d.Severity, Due: x.due, Done: x.done, Message: x.message, Missing: missingOf(&x, o), Cite: d.Cite, Remedy: d.Remedy,
 		Facts: map[string]any{}, Evidence: []finding.Evidence{},
 	}
 	if x.cite != "" {
@@ -138,14 +140,17 @@ func (k *keeper) finding(d *bundle.Duty, x outcome, o *obligation, key string) f
 	case x.status == finding.Gap && x.due.Known():
 		f.DaysOver = int(k.check.AsOf - x.due)
 	}
-	if o != nil {
+	f.Undone = x.status == finding.Gap && o != nil && (o.shape == once || o.shape == recurring) && !x.done.Known()
+	if o != nil && k.check.beside == "" {
 		maps.Copy(f.Facts, plain(o.facts))
 		if k.check.HealthDetail {
 			f.Health = plain(o.health)
 		}
 	}
 	x.parameterFacts(f.Facts)
-	f.Evidence = k.evidence(x.refs)
+	if k.check.beside == "" { // a switch shows no single finding
+		f.Evidence = k.evidence(x.refs)
+	}
 	return f
 }
 

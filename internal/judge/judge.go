@@ -40,8 +40,12 @@ type Options struct {
 
 	// keepRecords is set where whole records are to be shown.
 	keepRecords bool
+	// beside is a bundle by which every chosen site is judged beside the others; set for a switch.
+	beside string
 	// read, where set, takes the place of reading the program's files.
 	read func(ctx context.Context, emit func(record.Record) error) (*intake.Ledger, error)
+	// engines are prepared already, by id of the bundle.
+	engines map[string]Engine
 }
 
 // ErrNoFinding says that no finding has the id asked for.
@@ -163,14 +167,17 @@ func (c *check) choose() error {
 			}
 			problems.Errorf(diag.Position{}, remedy, "there is no bundle %q", c.Bundle)
 		}
-	} else {
-		problems = append(problems, c.Program.CheckBundles(c.Library.IDs())...)
 	}
+	var chosen program.Program
 	for i := range c.Program.Sites {
 		s := &c.Program.Sites[i]
 		if len(c.Sites) == 0 || slices.Contains(c.Sites, s.ID) {
 			c.sites = append(c.sites, s)
+			chosen.Sites = append(chosen.Sites, *s)
 		}
+	}
+	if c.Bundle == "" {
+		problems = append(problems, chosen.CheckBundles(c.Library.IDs())...)
 	}
 	problems = append(problems, c.checkChoices()...)
 	return problems.Err()
@@ -178,10 +185,14 @@ func (c *check) choose() error {
 
 // bundlesOf gives the bundles by which a site is judged.
 func (c *check) bundlesOf(s *program.Site) []string {
+	ids := s.Bundles
 	if c.Bundle != "" {
-		return []string{c.Bundle}
+		ids = []string{c.Bundle}
 	}
-	return s.Bundles
+	if c.beside != "" && !slices.Contains(ids, c.beside) {
+		ids = append(slices.Clone(ids), c.beside)
+	}
+	return ids
 }
 
 // prepare makes the engine of every bundle and the builder of every site under each.
@@ -192,9 +203,12 @@ func (c *check) prepare(ctx context.Context) error {
 		for _, id := range c.bundlesOf(s) {
 			b := c.Library[id]
 			if engines[id] == nil {
-				engine, err := NewEngine(ctx, b)
-				if err != nil {
-					return fmt.Errorf("the bundle %s cannot be prepared: %w", id, err)
+				engine := c.engines[id]
+				if engine == nil {
+					var err error
+					if engine, err = NewEngine(ctx, b); err != nil {
+						return fmt.Errorf("the bundle %s cannot be prepared: %w", id, err)
+					}
 				}
 				measures := b.Measures
 				measures.Hearing.Sums = c.HealthDetail
@@ -249,7 +263,7 @@ func (c *check) judgeAll(ctx context.Context) error {
 	}
 	return c.parallel(ctx, len(all), func(ctx context.Context, i int) error {
 		b := all[i]
-		files := slices.Concat(b.builder.Groups(b.usage), b.builder.Instruments(b.usage), b.builder.Rooms(b.usage), b.builder.Testers(b.usage))
+		files := slices.Concat(b.builder.Groups(b.usage), b.builder.Areas(b.usage), b.builder.Instruments(b.usage), b.builder.Rooms(b.usage), b.builder.Testers(b.usage))
 		files = append(files, b.builder.SiteDossier(b.usage))
 		for _, f := range files {
 			c.observeFile(b, f)

@@ -45,6 +45,8 @@ func eventDay(r record.Record) calendar.Date {
 		return r.Date
 	case *record.Calibration:
 		return r.Date
+	case *record.Examination:
+		return r.AttendedOn
 	case *record.RoomSurvey:
 		return r.Date
 	}

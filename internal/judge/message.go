@@ -2,6 +2,7 @@ package judge
 
 import (
 	"fmt"
+	"slices"
 	"strconv"
 	"strings"
 
@@ -77,12 +78,33 @@ func short(v float64) string {
 	return strconv.FormatFloat(v, 'f', -1, 64)
 }
 
+// lackWords begin the sentence that says what the records lack.
+const lackWords = "The records lack: "
+
 // cannotDecide says what the records lack.
 func cannotDecide(missing []string) string {
 	if len(missing) == 0 {
 		return "The records do not decide it"
 	}
-	return "The records lack: " + strings.Join(missing, "; ")
+	return lackWords + strings.Join(missing, "; ")
+}
+
+// missingOf gives what the records lack to decide an unproven outcome: the words of the rule, and behind them those of
+// the settling step, which stand in the message alone.
+func missingOf(x *outcome, o *obligation) []string {
+	at := strings.LastIndex(x.message, lackWords)
+	if x.status != finding.Unproven || at < 0 {
+		return nil
+	}
+	var out []string
+	if o != nil {
+		out = slices.Clone(o.missing)
+	}
+	rest := strings.TrimPrefix(x.message[at+len(lackWords):], strings.Join(out, "; "))
+	if rest = strings.TrimSuffix(strings.TrimPrefix(rest, "; "), "."); rest != "" {
+		out = append(out, rest)
+	}
+	return out
 }
 
 // words writes the name of a parameter as words.

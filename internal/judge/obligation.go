@@ -36,9 +36,12 @@ type obligation struct {
 	during  *calendar.Spell
 
 	within, every, first, lasts string // names of interval parameters
+	until, then                 string // interval parameters: how long every holds, and what holds afterwards
 	after, noSooner, on         calendar.Date
+	noLater, before, since      calendar.Date
 	by                          *dossier.Link
 	series                      []string // names of series that fulfil it
+	backwards                   bool     // whether it must be done before a day
 	touches                     string   // name of a series to be counted
 
 	value     float64
@@ -72,6 +75,10 @@ func readObligation(t *ast.Term) (*obligation, error) {
 	case r.has("every"):
 		o.shape = recurring
 		o.every, o.first, o.series, o.touches = r.text("every"), r.text("first"), r.texts("by"), r.text("touches")
+		o.until, o.then, o.since = r.text("until"), r.text("then"), r.day("since")
+		if (o.until == "") != (o.then == "") {
+			r.fail("until and then go together: how long every holds, and what holds afterwards")
+		}
 		if o.during == nil {
 			r.fail("a recurring obligation needs during, a stretch of days")
 		}
@@ -102,10 +109,11 @@ func readObligation(t *ast.Term) (*obligation, error) {
 		o.on = r.day("on")
 	case r.has("by"):
 		o.shape = once
-		if !r.has("after") {
-			r.fail("an obligation that is done once needs after, the day on which its time begins")
+		if r.has("after") == r.has("before") {
+			r.fail("an obligation that is done once needs after, the day on which its time begins, or before, the day by which it must be done")
 		}
 		o.within, o.after, o.noSooner = r.text("within"), r.day("after"), r.day("no_sooner_than")
+		o.before, o.noLater, o.backwards = r.day("before"), r.day("no_later_than"), r.has("before")
 		if value := r.term("by"); value != nil {
 			if _, isLink := value.Value.(ast.Object); isLink {
 				o.by = r.link("by")
@@ -124,8 +132,8 @@ func readObligation(t *ast.Term) (*obligation, error) {
 var (
 	fieldsOfAny   = []string{"key", "note", "because", "missing", "facts", "health", "during"}
 	fieldsOfShape = map[shape][]string{
-		once:      {"by", "after", "within", "no_sooner_than"},
-		recurring: {"every", "by", "first", "touches"},
+		once:      {"by", "after", "within", "no_sooner_than", "no_later_than", "before"},
+		recurring: {"every", "by", "first", "touches", "until", "then", "since"},
 		limit:     {"value", "on", "at_most", "below", "at_least", "above"},
 		condition: {"holds", "on", "for"},
 		opinion:   {"ask", "of", "by", "on"},

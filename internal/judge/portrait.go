@@ -108,6 +108,8 @@ func (c *check) portraitOf(b *bench, f *dossier.File) finding.Portrait {
 		a.instrument(d)
 	case *dossier.Room:
 		a.room(d)
+	case *dossier.Area:
+		a.area(d)
 	case *dossier.Tester:
 		a.tester(d)
 	case *dossier.Site:

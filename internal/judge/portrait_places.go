@@ -46,6 +46,18 @@ func (a *painter) group(d *dossier.Group) {
 	a.documents(d.Documents)
 }
 
+func (a *painter) area(d *dossier.Area) {
+	a.fact("Groups", strings.Join(d.Groups, ", "))
+	a.number("Workers", d.Workers)
+	for _, m := range d.Measurements {
+		a.linked(m.Date, "measurement", phrase("noise measurement", m.Type), plainState, m.Ref)
+	}
+	for _, c := range d.Controls {
+		a.linked(c.Date, "control", phrase(c.Type+" control", c.What), plainState, c.Ref)
+	}
+	a.documents(d.Documents)
+}
+
 func resultOf(m dossier.MeasuredLevel, ref string) finding.Result {
 	r := finding.Result{Date: m.Day, DB: tenths(m.DB), Record: ref, Current: m.Current, Known: "between"}
 	switch {

@@ -37,7 +37,7 @@ func (c *check) portraitOfWorker(b *bench, f *dossier.File, w *dossier.WorkerRec
 
 func (a *painter) exposureSpell(d *dossier.Worker, e dossier.Exposure) {
 	measures := a.bench.builder.Measures.Exposure
-	channel := measures.Levels[measures.Enrols].Channel
+	channel := measures.MainChannel(measures.Enrols)
 	label, grade := levelWords(e.Channels[channel], measures.Channels[channel].Kind == dossier.LevelChannel), plainState
 	on := func(spells []dossier.Spell) bool {
 		for _, s := range spells {
@@ -138,6 +138,14 @@ func (a *painter) workerEvents(d *dossier.Worker, w *dossier.WorkerRecords) {
 	}
 	for _, t := range w.FitTests {
 		a.event(t.Date, "fit-test", "fit test of "+t.ProtectorID, state(t.Passed), t)
+	}
+	for _, e := range w.Examinations {
+		switch {
+		case e.AttendedOn.Known():
+			a.event(e.AttendedOn, "test", words(e.Type), plainState, e)
+		case e.OfferedOn.Known():
+			a.event(e.OfferedOn, "test", words(e.Type)+" offered", plainState, e)
+		}
 	}
 	for _, c := range w.WearChecks {
 		a.event(c.Date, "wear-check", "look at whether protectors are worn", state(c.Worn), c)

@@ -98,6 +98,9 @@ func (s *settler) deadline(name string, start calendar.Date) (calendar.Date, use
 }
 
 func (s *settler) once(o *obligation) []outcome {
+	if o.backwards {
+		return s.beforehand(o)
+	}
 	key := o.keyOr(o.after)
 	done := o.by
 	if o.series != nil {
@@ -121,6 +124,9 @@ func (s *settler) once(o *obligation) []outcome {
 	due, u, problem := s.deadline(o.within, o.after)
 	if problem != "" {
 		return []outcome{unproven(o, key, problem)}
+	}
+	if o.noLater.Known() && o.noLater < due {
+		due = max(o.noLater, o.after)
 	}
 	out.due, out.params = due, []used{u}
 	if done == nil { // what is done is measured by the law's own time
@@ -193,7 +199,14 @@ func (s *settler) recurring(o *obligation) []outcome {
 		interval = o.first
 	}
 	var last string
+	change, problem := s.changes(o)
+	if problem != "" {
+		return append(out, unproven(o, o.keyOr(start), problem))
+	}
 	for {
+		if change.Known() && start >= change && (o.first == "" || last != "") {
+			interval = o.then
+		}
 		key := start.String()
 		if o.key != "" {
 			key = o.key + "/" + key

@@ -185,3 +185,65 @@ func TestWorkingDays(t *testing.T) {
 	assert.Equal(t, finding.Unproven, unknown[0].status)
 	assert.Contains(t, unknown[0].message, "working days are not known after 2026-12-31")
 }
+
+func TestDoneBeforeADay(t *testing.T) {
+	const open = `{"before": "2026-05-01", "within": "half_year", "by": "audiogram.valid"}`
+	for _, c := range []struct {
+		asOf, text, done, want string
+	}{
+		{"2026-06-30", open, "2025-11-01", "2026-05-01 met 2026-04-30 2025-11-01"},
+		{"2026-06-30", open, "2026-04-30", "2026-05-01 met 2026-04-30 2026-04-30"},
+		{"2026-06-30", open, "2026-05-01", "2026-05-01 late 2026-04-30 2026-05-01"},
+		{"2026-06-30", open, "2025-10-31", "2026-05-01 gap 2026-04-30 "},
+		{"2026-04-30", open, "2025-10-31", "2026-05-01 due 2026-04-30 "},
+		{"2026-05-01", `{"before": "2026-05-01", "by": null}`, "", "2026-05-01 gap 2026-04-30 "},
+		{"2026-06-30", `{"before": "2026-05-01", "by": {"date": "2001-01-01", "ref": "r"}}`, "", "2026-05-01 met 2026-04-30 2001-01-01"},
+		{"2026-06-30", `{"before": null, "by": null, "key": "k"}`, "", "k unproven  "},
+		{"2026-06-30", `{"before": "2026-05-01", "within": "working", "by": null}`, "", "2026-05-01 unproven  "},
+	} {
+		series := map[string][]string{}
+		if c.done != "" {
+			series["audiogram.valid"] = []string{c.done}
+		}
+		assert.Equal(t, []string{c.want}, statuses(settleText(t, c.asOf, c.text, series)), "%s %s", c.text, c.done)
+	}
+	early := settleText(t, "2026-06-30", open, map[string][]string{"audiogram.valid": {"2025-10-30", "2025-10-31"}})[0]
+	assert.Equal(t, map[string]any{"not_before": "2025-11-01", "done_too_early": "2025-10-31"}, early.facts)
+	assert.Equal(t, []string{"audiogram.valid@2025-10-31"}, early.refs)
+	ended := `{"before": "2026-05-01", "by": null, "during": {"from": "2026-01-01", "to": "2026-04-30"}}`
+	assert.Empty(t, settleText(t, "2026-06-30", ended, nil), "the last day, 30 April, is no day of the spell any more")
+}
+
+func TestNoLaterThanADay(t *testing.T) {
+	text := func(day string) string {
+		return `{"within": "posting_time", "after": "2026-01-10", "by": null, "no_later_than": ` + day + `}`
+	}
+	assert.Equal(t, []string{"2026-01-10 due 2026-02-01 "}, statuses(settleText(t, "2026-02-01", text(`"2026-02-01"`), nil)))
+	assert.Equal(t, []string{"2026-01-10 gap 2026-02-01 "}, statuses(settleText(t, "2026-02-02", text(`"2026-02-01"`), nil)))
+	assert.Equal(t, []string{"2026-01-10 gap 2026-02-09 "}, statuses(settleText(t, "2026-02-10", text(`"2026-03-01"`), nil)), "a later day gives no more time")
+	assert.Equal(t, []string{"2026-01-10 due 2026-02-09 "}, statuses(settleText(t, "2026-02-09", text(`null`), nil)))
+}
+
+func TestRecurringWithALaterInterval(t *testing.T) {
+	text := `{"every": "half_year", "until": "year", "then": "year", "by": "audiogram.valid", "during": {"from": "2020-01-01", "to": null}}`
+	tests := map[string][]string{"audiogram.valid": {"2020-07-01", "2020-12-31", "2021-06-30", "2022-06-30"}}
+	assert.Equal(t, []string{
+		"2020-01-01 met 2020-07-01 2020-07-01",
+		"2020-07-01 met 2021-01-01 2020-12-31",
+		"2020-12-31 met 2021-06-30 2021-06-30", // the clock starts a day before the change
+		"2021-06-30 met 2022-06-30 2022-06-30",
+		"2022-06-30 due 2023-06-30 ",
+	}, statuses(settleText(t, "2022-07-01", text, tests)))
+	since := `{"every": "half_year", "until": "year", "then": "year", "since": "2019-01-01", "by": "audiogram.valid", "during": {"from": "2020-01-01", "to": null}}`
+	assert.Equal(t, "2020-01-01 due 2021-01-01 ", statuses(settleText(t, "2020-02-01", since, nil))[0])
+	first := `{"first": "half_year", "every": "year", "until": "year", "then": "year", "since": "2010-01-01", "by": "audiogram.valid", "during": {"from": "2020-01-01", "to": null}}`
+	assert.Equal(t, "2020-01-01 due 2020-07-01 ", statuses(settleText(t, "2020-02-01", first, nil))[0], "the first interval stays the first")
+	for _, wrong := range []string{
+		`{"every": "year", "until": "year", "by": "audiogram.valid", "during": {"from": "2020-01-01", "to": null}}`,
+		`{"after": "2020-01-01", "before": "2021-01-01", "by": null}`,
+		`{"within": "year", "by": null}`,
+	} {
+		_, err := readObligation(ast.MustParseTerm(wrong))
+		assert.Error(t, err, wrong)
+	}
+}

@@ -82,8 +82,8 @@ func demoDesks(t *testing.T) []desk {
 					d.files = append(d.files, f)
 				}
 			}
-			d.files = slices.Concat(d.files, builder.Groups(usage), builder.Instruments(usage), builder.Rooms(usage),
-				builder.Testers(usage), []*dossier.File{builder.SiteDossier(usage)})
+			d.files = slices.Concat(d.files, builder.Groups(usage), builder.Areas(usage), builder.Instruments(usage),
+				builder.Rooms(usage), builder.Testers(usage), []*dossier.File{builder.SiteDossier(usage)})
 			desks = append(desks, d)
 		}
 	}

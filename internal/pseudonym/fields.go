@@ -10,7 +10,7 @@ import (
 
 // fields are the fields of records that hold an id of a person, or an id that may hold one.
 var fields = map[string]Kind{
-	"worker_id": Worker, "audiogram_id": Audiogram, "measurement_id": Measurement, "certificate": Certificate,
+	"worker_id": Worker, "audiogram_id": Audiogram, "measurement_id": Measurement, "examination_id": Examination, "certificate": Certificate,
 	"tester_id": Person, "reviewer": Person, "supervisor": Person, "by": Person, "fitted_by": Person,
 }
 

@@ -28,10 +28,11 @@ const (
 	Audiogram   Kind = "audiogram"
 	Measurement Kind = "measurement"
 	Certificate Kind = "certificate"
+	Examination Kind = "examination"
 )
 
 // letters begin the codes of each kind.
-var letters = map[Kind]byte{Worker: 'W', Person: 'P', Audiogram: 'A', Measurement: 'M', Certificate: 'C'}
+var letters = map[Kind]byte{Worker: 'W', Person: 'P', Audiogram: 'A', Measurement: 'M', Certificate: 'C', Examination: 'E'}
 
 const (
 	alphabet = "0123456789ABCDEFGHJKMNPQRSTVWXYZ" // Crockford's: without I, L, O and U

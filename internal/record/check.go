@@ -88,6 +88,14 @@ func (c *check) across(r Record) {
 	case *Audiogram:
 		c.notBefore("date", r.Date, "determined_on", r.DeterminedOn)
 		c.notBefore("date", r.Date, "reviewed_on", r.ReviewedOn)
+		c.notBefore("date", r.Date, "received_on", r.ReceivedOn)
+	case *Examination:
+		if !r.OfferedOn.Known() && !r.AttendedOn.Known() {
+			c.reject("offered_on", "", "Fill in offered_on, attended_on or both", "the examination was neither offered nor held on any day")
+		}
+		c.notBefore("offered_on", r.OfferedOn, "attended_on", r.AttendedOn)
+		c.notBefore("attended_on", r.AttendedOn, "results_on", r.ResultsOn)
+		c.notBefore("attended_on", r.AttendedOn, "certificate_on", r.CertificateOn)
 	case *ProtectorIssue:
 		c.order("date", r.Date, "returned_on", r.ReturnedOn)
 	case *WearCheck:
@@ -103,5 +111,6 @@ func (c *check) across(r Record) {
 		c.order("valid_from", r.ValidFrom, "valid_to", r.ValidTo)
 	case *Document:
 		c.notBefore("date", r.Date, "reviewed_on", r.ReviewedOn)
+		c.order("posted_on", r.PostedOn, "posted_to", r.PostedTo)
 	}
 }

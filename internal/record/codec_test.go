@@ -129,7 +129,7 @@ func sampleAudiogram() *Audiogram {
 		LeftRepeat: Threshold{Tenths: 150, State: audiometry.Measured}, RightRepeat: Threshold{State: audiometry.NotTested},
 		LeftStatedShift: Yes, RightStatedShift: No,
 		Masked: Yes, Earphones: "insert", FineSteps: No,
-		TesterID: "T-2", QuietHours: Num(14), QuietByProtectors: No, Mobile: No, DeterminedOn: mustDate("2025-03-12"), Reviewer: "AUD-1", ReviewedOn: mustDate("2025-03-12"),
+		TesterID: "T-2", QuietHours: Num(14), QuietByProtectors: No, Mobile: No, DeterminedOn: mustDate("2025-03-12"), ReceivedOn: mustDate("2025-03-12"), Reviewer: "AUD-1", ReviewedOn: mustDate("2025-03-12"),
 	}
 	for i := range a.Left {
 		a.Left[i] = audiometry.Threshold{Tenths: int16(50 * i), State: audiometry.Measured}

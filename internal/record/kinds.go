@@ -49,6 +49,8 @@ type Group struct {
 	Varied         Answer `field:"varied" doc:"whether the workers move about, levels vary much or impulses matter, so that area sampling is generally unsuitable"`
 	ShiftMinutes   Number `field:"shift_minutes,min=1,max=1440" doc:"length of the work shift, minutes"`
 	DaysPerWeek    Number `field:"days_per_week,min=0,max=7" doc:"days worked in a week"`
+	Impulsive      Answer `field:"impulsive" doc:"whether impulse or impact noise occurs, so that the peak must be known"`
+	DaysVary       Answer `field:"days_vary" doc:"whether the daily exposure varies markedly from one working day to the next"`
 }
 
 // Measurement is one noise measurement, or one dose channel of it. Channels of one measurement share
@@ -79,6 +81,9 @@ type Measurement struct {
 	MaxDBA           Number   `field:"max_dba,min=0,max=160" doc:"highest continuous level, A-weighted, slow, dB"`
 	PeakDB           Number   `field:"peak_db,min=0,max=190" doc:"peak sound pressure level, dB"`
 	PeakWeighting    string   `field:"peak_weighting,one=C|Z" doc:"weighting of the peak level: C, or Z for unweighted"`
+	MaxDBCFast       Number   `field:"max_dbc_fast,min=0,max=180" doc:"highest level of impact noise, C-weighted, fast, dB"`
+	ImpulseDBZ       Number   `field:"impulse_dbz,min=0,max=190" doc:"highest level of impact noise by an impulse detector, unweighted, dB"`
+	AccuracyClass    string   `field:"accuracy_class,one=1|2|3" doc:"accuracy class of the determination, where the law counts in such classes"`
 	Octave           *Octaves `field:"octave,min=-20,max=170" doc:"octave band level, dB"`
 	CheckBeforeDB    Number   `field:"check_before_db,min=60,max=130" doc:"calibrator check before the measurement, dB"`
 	CheckAfterDB     Number   `field:"check_after_db,min=60,max=130" doc:"calibrator check after the measurement, dB"`
@@ -106,6 +111,7 @@ type Change struct {
 	Area           string `field:"area" doc:"area concerned"`
 	What           string `field:"what" doc:"what was changed"`
 	RaisesExposure string `field:"raises_exposure,one=yes|no|unknown" doc:"whether the change raises noise exposure"`
+	IdentifiedOn   Date   `field:"identified_on" doc:"day on which the change was entered in the register as one that may raise exposure"`
 }
 
 // Notice is something that a worker was told.
@@ -113,7 +119,7 @@ type Notice struct {
 	Meta
 	WorkerID      string `field:"worker_id,required" doc:"id of the worker"`
 	Date          Date   `field:"date,required" doc:"day on which the worker was told"`
-	About         string `field:"about,required,like=exposure|shift|quiet_period|persistent_shift_lifted" doc:"what the worker was told about"`
+	About         string `field:"about,required,like=exposure|shift|quiet_period|persistent_shift_lifted|result|abnormal_result|corrective_action" doc:"what the worker was told about"`
 	MeasurementID string `field:"measurement_id" doc:"measurement that the notice is about"`
 	AudiogramID   string `field:"audiogram_id" doc:"audiogram that the notice is about"`
 	Written       Answer `field:"written" doc:"whether it was given in writing"`
@@ -142,6 +148,7 @@ type Audiogram struct {
 	QuietByProtectors Answer         `field:"quiet_by_protectors" doc:"whether hearing protectors were worn in place of the quiet period"`
 	Mobile            Answer         `field:"mobile" doc:"whether the test was made in a mobile test van"`
 	DeterminedOn      Date           `field:"determined_on" doc:"day on which the comparison with the baseline was made"`
+	ReceivedOn        Date           `field:"received_on" doc:"day on which the employer received the result and its interpretation"`
 	Reviewer          string         `field:"reviewer" doc:"id, or qualification, of the professional who reviewed the audiogram"`
 	ReviewedOn        Date           `field:"reviewed_on" doc:"day of the review"`
 }
@@ -153,7 +160,7 @@ type FollowUp struct {
 	AudiogramID string `field:"audiogram_id" doc:"audiogram that it follows from"`
 	Ear         string `field:"ear,one=left|right|both" doc:"ear concerned"`
 	Date        Date   `field:"date,required" doc:"day on which it was done or decided"`
-	Type        string `field:"kind,required,like=fitting|refitting|retraining|referral|referral_decision|medical_opinion|persistence_opinion|baseline_revision|invalidated|log_entry|log_removal" doc:"what was done or decided"`
+	Type        string `field:"kind,required,like=fitting|refitting|retraining|referral|referral_decision|medical_opinion|persistence_opinion|baseline_revision|invalidated|log_entry|log_removal|authority_report|protector_choice|controls_reviewed|assessment_reviewed|measures_reviewed|alternative_work|group_reviewed|worker_informed|history_forwarded|damage_found|damage_examined|damage_opinion" doc:"what was done or decided"`
 	Result      string `field:"result,like=work_related|not_work_related|persistent|not_persistent|improved|referral_needed|no_referral_needed" doc:"the outcome"`
 	By          string `field:"by" doc:"id, or qualification, of the person who did or decided it"`
 }
@@ -163,7 +170,7 @@ type Training struct {
 	Meta
 	WorkerID string `field:"worker_id,required" doc:"id of the worker"`
 	Date     Date   `field:"date,required" doc:"day of the session"`
-	Topics   List   `field:"topics,like=noise_effects|protectors|audiometry" doc:"topics covered, separated by semicolons"`
+	Topics   List   `field:"topics,like=noise_effects|protectors|audiometry|limit_values|assessment_results|damage_reporting|health_surveillance|safe_practices|measures|collective_results|law_in_general|noise_controls|medical_advice" doc:"topics covered, separated by semicolons"`
 	Language string `field:"language" doc:"language of the session"`
 	By       string `field:"by" doc:"id of the trainer"`
 }
@@ -193,6 +200,8 @@ type ProtectorIssue struct {
 	Date           Date   `field:"date,required" doc:"day on which it was handed over"`
 	ReturnedOn     Date   `field:"returned_on" doc:"day on which it was given back or used up"`
 	ChoicesOffered Number `field:"choices_offered,min=0,max=1000" doc:"number of suitable models to choose from"`
+	PlugsOffered   Number `field:"plugs_offered,min=0,max=1000" doc:"number of types of earplug to choose from"`
+	MuffsOffered   Number `field:"muffs_offered,min=0,max=1000" doc:"number of types of earmuff to choose from"`
 	FittedBy       string `field:"fitted_by" doc:"id of the person who made the initial fitting"`
 	Required       Answer `field:"required" doc:"whether the employer requires it to be worn"`
 }
@@ -274,12 +283,14 @@ type Tester struct {
 // Document is a paper or file that attests a duty.
 type Document struct {
 	Meta
-	Type       string `field:"kind,required,like=written_program|standard_posted|risk_assessment|control_programme|zone_signs|access_to_records|health_surveillance|protectors_available|attenuation_evaluation|area_sampling_equivalent|noise_records|injury_log" doc:"what it attests"`
+	Type       string `field:"kind,required,like=written_program|standard_posted|risk_assessment|control_programme|zone_signs|access_to_records|health_surveillance|protectors_available|attenuation_evaluation|area_sampling_equivalent|noise_records|injury_log|hearing_conservation_programme|monitoring_system|noise_measurement_report|noise_evaluation|means_register|noise_register|purchase_file|zone_plan|access_restriction|protector_selection|protector_maintenance|consultation|competence|surveillance_arrangement|health_records|records_kept|controls_posted|weekly_permission|exemption|rest_facilities|sensitive_workers|warning_signals|annual_report|analytical_report|calculator|schedule|booth_certificate|logbook|designation|protectors_on_request|limit_exceeded|transfer|confidentiality|instruction|advice" doc:"what it attests"`
 	Site       string `field:"site" doc:"site that it covers"`
 	Area       string `field:"area" doc:"area that it covers"`
 	Group      string `field:"group" doc:"group that it covers"`
 	Date       Date   `field:"date,required" doc:"its date"`
 	ReviewedOn Date   `field:"reviewed_on" doc:"day of the latest review"`
+	PostedOn   Date   `field:"posted_on" doc:"day from which it was posted or otherwise made known to the workers"`
+	PostedTo   Date   `field:"posted_to" doc:"last day on which it was posted; empty while it is"`
 	Covers     List   `field:"covers" doc:"what it covers, separated by semicolons"`
 }
 
@@ -293,7 +304,28 @@ type Control struct {
 	What        string `field:"what" doc:"the control"`
 	ReductionDB Number `field:"reduction_db,min=0,max=80" doc:"reduction reached or expected, dB"`
 	Feasible    string `field:"feasible,one=yes|no|studied" doc:"whether it was found feasible; studied while the finding is open"`
+	StartedOn   Date   `field:"started_on" doc:"day on which the work on it began"`
 	InstalledOn Date   `field:"installed_on" doc:"day on which it was put in place"`
+}
+
+// Examination is one offer of a hearing test or health appointment and what came of it, as an employer may know it:
+// days and outcome, without a threshold.
+type Examination struct {
+	Meta
+	ExaminationID string `field:"examination_id,required,id" doc:"id of the examination"`
+	WorkerID      string `field:"worker_id,required" doc:"id of the worker"`
+	Type          string `field:"kind,required,one=hearing_test|health_appointment" doc:"a hearing test, or an appointment with an occupational physician"`
+	Purpose       string `field:"purpose,one=baseline|periodic|retest|exit|on_request|illness|other" doc:"why it was offered"`
+	OfferedOn     Date   `field:"offered_on" doc:"day on which it was offered; empty where no offer is on record"`
+	Answer        string `field:"answer,one=accepted|declined|no_answer" doc:"what the worker answered to the offer"`
+	AttendedOn    Date   `field:"attended_on" doc:"day on which the worker was examined; empty while not examined"`
+	Result        string `field:"result,like=no_concern|early_signs|concern|worse|referred" doc:"the outcome as the clinic words it, without thresholds"`
+	Damage        Answer `field:"damage" doc:"whether hearing damage that can be identified was found"`
+	CertificateOn Date   `field:"certificate_on" doc:"day on which the certificate or statement of fitness was given to worker and employer"`
+	ResultsOn     Date   `field:"results_on" doc:"day on which the worker was told the results"`
+	NextDue       Date   `field:"next_due" doc:"day by which the physician wants the next one"`
+	AudiogramID   string `field:"audiogram_id" doc:"the audiogram that was made, where the program holds it"`
+	By            string `field:"by" doc:"id, or qualification, of the examiner"`
 }
 
 // Kind gives the record's kind.
@@ -310,6 +342,7 @@ func (*Training) Kind() Kind       { return "training" }
 func (*Protector) Kind() Kind      { return "protector" }
 func (*ProtectorIssue) Kind() Kind { return "protector_issue" }
 func (*FitTest) Kind() Kind        { return "fit_test" }
+func (*Examination) Kind() Kind    { return "examination" }
 func (*WearCheck) Kind() Kind      { return "wear_check" }
 func (*Instrument) Kind() Kind     { return "instrument" }
 func (*Calibration) Kind() Kind    { return "calibration" }
@@ -322,4 +355,5 @@ func (*Control) Kind() Kind        { return "control" }
 var prototypes = []Record{
 	&Worker{}, &Assignment{}, &Group{}, &Measurement{}, &Task{}, &Change{}, &Notice{}, &Audiogram{}, &FollowUp{}, &Training{},
 	&Protector{}, &ProtectorIssue{}, &FitTest{}, &WearCheck{}, &Instrument{}, &Calibration{}, &RoomSurvey{}, &Tester{}, &Document{}, &Control{},
+	&Examination{},
 }

@@ -55,7 +55,7 @@ var fileNames = map[string]Kind{
 	"changes": "change", "notices": "notice", "audiograms": "audiogram", "follow_ups": "follow_up", "trainings": "training",
 	"protectors": "protector", "protector_issues": "protector_issue", "fit_tests": "fit_test", "wear_checks": "wear_check",
 	"instruments": "instrument", "calibrations": "calibration", "room_surveys": "room_survey", "testers": "tester",
-	"documents": "document", "controls": "control",
+	"documents": "document", "controls": "control", "examinations": "examination",
 }
 
 // Kinds lists the record kinds in the order in which they are shown.

@@ -13,13 +13,13 @@ type Names struct {
 
 // subjects holds an empty dossier of each subject kind.
 var subjects = map[string]any{
-	dossier.KindWorker: dossier.Worker{}, dossier.KindGroup: dossier.Group{}, dossier.KindSite: dossier.Site{},
+	dossier.KindWorker: dossier.Worker{}, dossier.KindGroup: dossier.Group{}, dossier.KindArea: dossier.Area{}, dossier.KindSite: dossier.Site{},
 	dossier.KindInstrument: dossier.Instrument{}, dossier.KindRoom: dossier.Room{}, dossier.KindTester: dossier.Tester{},
 }
 
 // Subjects lists the subject kinds in the order in which they are shown.
 func Subjects() []string {
-	return []string{dossier.KindWorker, dossier.KindGroup, dossier.KindSite, dossier.KindInstrument, dossier.KindRoom, dossier.KindTester}
+	return []string{dossier.KindWorker, dossier.KindGroup, dossier.KindArea, dossier.KindSite, dossier.KindInstrument, dossier.KindRoom, dossier.KindTester}
 }
 
 // Dossier gives the schema of the dossiers of a subject kind, for any bundle, in the form that OPA's type

@@ -65,7 +65,7 @@ func (s *subject) add(f *finding.Finding) {
 }
 
 // kinds are the kinds of subjects, those of the place first.
-var kinds = []string{"site", "group", "instrument", "room", "tester", "worker"}
+var kinds = []string{"site", "area", "group", "instrument", "room", "tester", "worker"}
 
 func kindOrder(kind string) int { return slices.Index(kinds, kind) }
 

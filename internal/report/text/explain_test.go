@@ -9,6 +9,7 @@ import (
 	"hearduty/internal/calendar"
 	"hearduty/internal/finding"
 	"hearduty/internal/judge"
+	"hearduty/internal/report/rulebook"
 )
 
 var duty = &bundle.Duty{
@@ -36,26 +37,33 @@ var law = &bundle.Bundle{
 
 func TestBook(t *testing.T) {
 	var b bytes.Buffer
-	if err := Book(&b, law, calendar.MustParse("2026-06-30"), Format{}); err != nil {
+	if err := Book(&b, rulebook.Of(law, calendar.MustParse("2026-06-30")), Format{}); err != nil {
 		t.Fatal(err)
 	}
 	got := b.String()
 	for _, want := range []string{
-		"Country       XX\n", "- The act, Act 1\n", "Duties (1)\n\nAudiometry\n  annual-audiogram, 29 CFR 1910.95(g)(6), of each worker\n",
-		"  audiogram_interval = 12 months, from 1983-04-07, (g)(6)\n", "Not checked against the official text (1)\n- protector_variety, (i)(3)\n",
-		"  never: no value is in force on that day; what rests on it is unproven\n", "  annual: twelve_months or calendar_year; unless set, twelve_months, (g)(6)\n",
-		"- What is a year: Twelve months. (a letter)\n", "    Attested by a document.\n", "    Outside: because it is a definition.\n",
+		"A law\n\nBundle: xx-law\n", "\nCountry: XX\n", "- The act, Act 1\n", "Duties (1)\n----------\n", "\nAudiometry\n\n  Annual audiogram (annual-audiogram)\n    Asked: Every enrolled worker is tested",
+		"    When and how much: at least every 12 months: longest time between two\n      tests (audiogram_interval; (g)(6))\n", "  audiogram_interval: 12 months\n    Longest time between two tests. In force since 1983-04-07. By (g)(6). Read\n    in the official text. Used by annual-audiogram.\n",
+		"- The parameter protector_variety, 2 models ((i)(3); in force from 1983-04-07):\n", "  never: no value is in force; what rests on it is unproven\n",
+		"    Can be: twelve_months or calendar_year\n    Unless set: twelve_months\n    Paragraph: (g)(6)\n", "- What is a year: Twelve months. (a letter)\n",
+		"    Attested by a document.\n", "    Outside because it is a definition.\n",
 	} {
 		if !strings.Contains(got, want) {
 			t.Errorf("the book lacks %q:\n%s", want, got)
 		}
 	}
-	if strings.Index(got, "(g)(6): a test") > strings.Index(got, "(g)(10): shift") {
-		t.Error("(g)(10) stands before (g)(6)")
+}
+
+func TestLibrary(t *testing.T) {
+	var b bytes.Buffer
+	heads := []*bundle.Head{{ID: "xx-law", Revision: "7", About: law.About, Duties: 1}, {ID: "own", Revision: "8", About: law.About, Duties: 2, Place: "rules/own"}}
+	if err := Library(&b, heads, Format{}); err != nil {
+		t.Fatal(err)
 	}
-	b.Reset()
-	if err := Library(&b, bundle.Library{"xx-law": law}, Format{}); err != nil || !strings.Contains(b.String(), "Law, 1 duty, revision 7, last held against the text on 2026-12-01.") {
-		t.Errorf("%v\n%s", err, &b)
+	want := "xx-law\n  A law.\n  Law, 1 duty, revision 7, last held against the text on 2026-12-01.\n\n" +
+		"own\n  A law.\n  Law, 2 duties, revision 8, last held against the text on 2026-12-01.\n  Read from rules/own.\n"
+	if b.String() != want {
+		t.Errorf("want\n%s\ngot\n%s", want, &b)
 	}
 }
 

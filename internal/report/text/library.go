@@ -7,19 +7,21 @@ import (
 	"hearduty/internal/bundle"
 )
 
-// Library lists bundles, one paragraph each.
-func Library(w io.Writer, l bundle.Library, o Format) error {
+// Library lists bundles by what they say of themselves, one paragraph each.
+func Library(w io.Writer, heads []*bundle.Head, o Format) error {
 	p := newPage(w, o.Width, o.Colour)
-	for i, id := range l.IDs() {
-		b := l[id]
+	for i, h := range heads {
 		if i > 0 {
 			p.blank()
 		}
-		p.para(0, 2, id)
-		p.para(2, 2, sentence(b.About.Title))
-		p.para(2, 2, fmt.Sprintf("%s, %s, revision %s, last held against the text on %s.", upper(b.About.Kind), count(len(b.Duties), "duty", "duties"), b.Revision, b.About.CheckedOn))
+		p.para(0, 2, h.ID)
+		p.para(2, 2, sentence(h.About.Title))
+		p.para(2, 2, fmt.Sprintf("%s, %s, revision %s, last held against the text on %s.", upper(h.About.Kind), count(h.Duties, "duty", "duties"), h.Revision, h.About.CheckedOn))
+		if h.Place != "" {
+			p.para(2, 2, sentence("Read from "+h.Place))
+		}
 	}
-	if len(l) == 0 {
+	if len(heads) == 0 {
 		p.raw("There are no bundles.")
 	}
 	return p.flush()

@@ -10,7 +10,7 @@ import (
 // emptyDossiers gives a dossier of each subject kind in which nothing is known but the day.
 func emptyDossiers(b *bundle.Bundle) map[string]any {
 	out := map[string]any{
-		dossier.KindWorker: &dossier.Worker{}, dossier.KindGroup: &dossier.Group{}, dossier.KindSite: &dossier.Site{},
+		dossier.KindWorker: &dossier.Worker{}, dossier.KindGroup: &dossier.Group{}, dossier.KindArea: &dossier.Area{}, dossier.KindSite: &dossier.Site{},
 		dossier.KindInstrument: &dossier.Instrument{}, dossier.KindRoom: &dossier.Room{}, dossier.KindTester: &dossier.Tester{},
 	}
 	for _, d := range out {

@@ -1,0 +1,163 @@
+package finding
+
+import (
+	"cmp"
+	"maps"
+	"slices"
+)
+
+// stand is how a subject stands under a topic on one side, and by which duties.
+type stand struct {
+	word   string
+	duties map[[2]string]string // paragraphs, by bundle and duty
+}
+
+// stands gives how each subject stands under a topic on a side.
+func (s *switcher) stands(k side, topic string) map[Subject]stand {
+	out := map[Subject]stand{}
+	for _, f := range s.findings[k][topic] {
+		now, ok := out[f.Subject]
+		switch {
+		case !ok || urgencyOf(string(f.Status)) < urgencyOf(now.word):
+			now = stand{string(f.Status), map[[2]string]string{}}
+		case string(f.Status) != now.word:
+			continue
+		}
+		now.duties[[2]string{f.Bundle, f.Duty}] = f.Cite
+		out[f.Subject] = now
+	}
+	return out
+}
+
+func urgencyOf(standing string) int { return slices.Index(Standings, standing) }
+
+// absent gives how a subject stands on a side that has no finding about it.
+func (s *switcher) absent(k side, subject Subject) stand {
+	if subject.Kind == "worker" && slices.ContainsFunc(s.open[k][subject.ID], func(u *Unmeasured) bool { return u.EnrolsNow }) {
+		return stand{word: NotKnown}
+	}
+	return stand{word: NotOwed}
+}
+
+// moves gathers the subjects that stand otherwise on the new side, and counts the others.
+func (s *switcher) moves(topic string) (list []SwitchMove, same int) {
+	before, after := s.stands(oldSide, topic), s.stands(newSide, topic)
+	type key struct{ kind, before, after string }
+	made := map[key]*mover{}
+	for subject := range union(before, after) {
+		o, ok := before[subject]
+		if !ok {
+			o = s.absent(oldSide, subject)
+		}
+		n, ok := after[subject]
+		if !ok {
+			n = s.absent(newSide, subject)
+		}
+		if o.word == n.word {
+			same++
+			continue
+		}
+		k := key{subject.Kind, o.word, n.word}
+		if made[k] == nil {
+			made[k] = &mover{groups: map[string]int{}, duties: [2]map[[2]string]*SwitchDutyNumber{{}, {}}}
+		}
+		made[k].take(s, subject, o, n)
+	}
+	list = []SwitchMove{}
+	for k, m := range made {
+		list = append(list, m.move(k.kind, k.before, k.after))
+	}
+	slices.SortFunc(list, func(a, b SwitchMove) int {
+		return cmp.Or(cmp.Compare(slices.Index(changeOrder, a.Change), slices.Index(changeOrder, b.Change)), cmp.Compare(urgencyOf(a.After), urgencyOf(b.After)),
+			cmp.Compare(urgencyOf(a.Before), urgencyOf(b.Before)), cmp.Compare(a.Kind, b.Kind))
+	})
+	return list, same
+}
+
+var changeOrder = []string{Appears, Changes, Vanishes}
+
+func union[V any](a, b map[Subject]V) map[Subject]bool {
+	out := map[Subject]bool{}
+	for k := range a {
+		out[k] = true
+	}
+	for k := range b {
+		out[k] = true
+	}
+	return out
+}
+
+// mover gathers one move.
+type mover struct {
+	number   int
+	subjects []string
+	groups   map[string]int
+	duties   [2]map[[2]string]*SwitchDutyNumber
+}
+
+func (m *mover) take(s *switcher, subject Subject, o, n stand) {
+	m.number++
+	for k, st := range []stand{o, n} {
+		for duty, cite := range st.duties {
+			if m.duties[k][duty] == nil {
+				m.duties[k][duty] = &SwitchDutyNumber{Bundle: duty[0], Duty: duty[1], Cite: cite}
+			}
+			d := m.duties[k][duty]
+			d.Cite = min(d.Cite, cite) // findings of one duty may cite different paragraphs
+			d.Number++
+		}
+	}
+	open := s.open[newSide][subject.ID]
+	if subject.Kind != "worker" || len(open) == 0 || n.word != string(Unproven) && n.word != NotKnown {
+		m.subjects = append(m.subjects, subject.ID)
+		return
+	}
+	m.groups[foremost(open).Group]++
+}
+
+// foremost gives the group that matters most: the one of the as-of day, and of the level that enrols.
+func foremost(open []*Unmeasured) *Unmeasured {
+	weight := func(u *Unmeasured) int {
+		w := 0
+		if u.Now {
+			w += 2
+		}
+		if u.Enrols {
+			w++
+		}
+		return w
+	}
+	return slices.MinFunc(open, func(a, b *Unmeasured) int {
+		return cmp.Or(weight(b)-weight(a), cmp.Compare(a.Group, b.Group))
+	})
+}
+
+func (m *mover) move(kind, before, after string) SwitchMove {
+	change := Changes
+	switch {
+	case before == NotOwed:
+		change = Appears
+	case after == NotOwed:
+		change = Vanishes
+	}
+	slices.Sort(m.subjects)
+	return SwitchMove{Change: change, Kind: kind, Before: before, After: after, Number: m.number, Subjects: append([]string{}, m.subjects...), Groups: groupsOf(m.groups),
+		FromDuties: dutyNumbers(m.duties[oldSide]), ToDuties: dutyNumbers(m.duties[newSide])}
+}
+
+// groupsOf lists groups with their workers in order of id.
+func groupsOf(numbers map[string]int) []SwitchGroup {
+	out := []SwitchGroup{}
+	for _, group := range slices.Sorted(maps.Keys(numbers)) {
+		out = append(out, SwitchGroup{group, numbers[group]})
+	}
+	return out
+}
+
+func dutyNumbers(byID map[[2]string]*SwitchDutyNumber) []SwitchDutyNumber {
+	out := []SwitchDutyNumber{}
+	for _, key := range slices.SortedFunc(maps.Keys(byID), comparePairs) {
+		out = append(out, *byID[key])
+	}
+	return out
+}

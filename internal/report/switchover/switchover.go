@@ -1,0 +1,28 @@
+// Package switchover writes what changes where other bundles judge the same records: as text and as JSON.
+package switchover
+
+import (
+	"encoding/json"
+	"fmt"
+	"io"
+
+	"hearduty/internal/finding"
+	"hearduty/internal/report/text"
+)
+
+// Names lists the forms, the default first.
+var Names = []string{"text", "json"}
+
+// Write writes a switch in the form of that name. The style matters only to text.
+func Write(w io.Writer, s *finding.Switch, name string, style text.Format) error {
+	switch name {
+	case "text":
+		return text.Switch(w, s, style)
+	case "json":
+		e := json.NewEncoder(w)
+		e.SetEscapeHTML(false)
+		e.SetIndent("", "  ")
+		return e.Encode(s)
+	}
+	return fmt.Errorf("there is no form %q of a switch", name)
+}
