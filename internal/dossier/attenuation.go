@@ -45,12 +45,7 @@ func (b *Builder) attenuate(p *Protection, n noise) {
 		p.Exposure = record.Num(n.level)
 	}
 	r := byRating(measures, model, n)
-	allowance := 0.0
-	if measures.RealWorld != "" {
-		var ok bool
-		allowance, ok = b.Law.Number(measures.RealWorld, b.AsOf)
-		r.lack(ok, "value of %s on %s in the bundle", measures.RealWorld, b.AsOf)
-	}
+	allowance := b.allowance(model, &r)
 	if r.exposure.Known {
 		p.Exposure = r.exposure
 	}
@@ -78,6 +73,27 @@ func (b *Builder) attenuate(p *Protection, n noise) {
 		p.Working += fmt.Sprintf("; that is more than the %s dBA without the protector, so the rating shows no benefit", number(n.level))
 	}
 	p.Band = b.bandOf(level)
+}
+
+// allowance gives the dB that the measures take off for use outside the laboratory: those of the type of protector,
+// else those for all. Where the measures go by type and say nothing of this one, it is missing.
+func (b *Builder) allowance(model *record.Protector, r *route) float64 {
+	measures := b.Measures.Protection
+	name := measures.RealWorld
+	if by, ok := measures.RealWorldByType[model.Type]; ok {
+		name = by
+	}
+	switch {
+	case name != "":
+		db, ok := b.Law.Number(name, b.AsOf)
+		r.lack(ok, "value of %s on %s in the bundle", name, b.AsOf)
+		return db
+	case len(measures.RealWorldByType) > 0 && model.Type == "":
+		r.lack(false, "type of the protector %s, by which the allowance for use is taken", model.ProtectorID)
+	case len(measures.RealWorldByType) > 0:
+		r.lack(false, "allowance for use of a protector of the type %s in the bundle", model.Type)
+	}
+	return 0
 }
 
 // byRating estimates the level under a protector by the rating of the measures.

@@ -45,6 +45,11 @@ func (b *Builder) noiseOf(now *stretch) noise {
 	for _, rows := range measurements {
 		n.take(rows)
 	}
+	for i, ch := range b.channels.channels { // the peak that the law judges may be that of another measurement
+		if ch.Of == PeakDBC && now.on[i].src != nil && (!n.peak.Known || now.on[i].low > n.peak.Value) {
+			n.peak = record.Num(now.on[i].low)
+		}
+	}
 	if len(measurements) > 1 && n.how != "" {
 		n.how = fmt.Sprintf("the highest of %d measurements, ", len(measurements)) + n.how
 	}

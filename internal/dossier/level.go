@@ -27,7 +27,7 @@ func (r *reading) takeLevel(m *record.Measurement, t taken, note string, at work
 		r.notes = append(r.notes, fmt.Sprintf("the dose was taken with %s dB exchange rate; it cannot be converted into a level", number(t.scale.Exchange)))
 	case r.estimate.Known:
 	default:
-		r.takeEnergyDose(t)
+		r.takeEnergyDose(t, shiftOf(m, at))
 	}
 }
 
@@ -72,11 +72,18 @@ func lexLine(level string, minutes, lex float64) string {
 }
 
 // takeEnergyDose takes the level of a dose at 3 dB exchange, criterion + 10 lg(D/100): exactly if all levels
-// count, else as a lower bound, since levels below the threshold are lost.
-func (r *reading) takeEnergyDose(t taken) {
+// count, else as a lower bound, since levels below the threshold are lost. They can add no more than the threshold
+// itself, all the shift long, which gives an upper bound where no level was beyond the range of the dose.
+func (r *reading) takeEnergyDose(t taken, shift record.Number) {
 	level, ok := t.scale.TWA(t.pct)
 	if !ok {
-		r.notes = append(r.notes, "a dose of 0 % has no level")
+		most, known := mostWithQuiet(t, shift)
+		if !known || most >= r.high {
+			r.notes = append(r.notes, "a dose of 0 % has no level")
+			return
+		}
+		r.high = most
+		r.working = append(r.working[:0], t.working, "no level reached "+number(t.scale.Threshold)+" dBA, so that L_EX,8h is at most "+hundredth(most)+" dBA")
 		return
 	}
 	line := "L_EX,8h = " + number(t.scale.Criterion) + " + 10 lg(" + number(acoustics.RoundTenth(t.pct)) + "/100) = " + hundredth(level) + " dBA"
@@ -90,10 +97,64 @@ func (r *reading) takeEnergyDose(t taken) {
 			from = number(t.scale.Threshold) + " dBA"
 		}
 		line += "; the dose counts from " + from + " on, so that the level is at least that"
+		if most, ok := mostWithQuiet(t, shift); ok {
+			r.high = min(r.high, most)
+			line += ", and with " + number(t.scale.Threshold) + " dBA all the rest at most " + hundredth(most) + " dBA"
+		}
 	default:
 		return
 	}
 	r.working = append(r.working[:0], t.working, line)
+}
+
+// wholeRange is the level in dBA up to which a dose must count so that nothing is taken to lie above its range.
+const wholeRange = 140
+
+// mostWithQuiet gives the highest level that a dose at 3 dB exchange with a threshold allows: as if the levels that
+// were lost had all been at the threshold, all the shift long.
+func mostWithQuiet(t taken, shift record.Number) (float64, bool) {
+	if !t.thresholdKnown || t.scale.Threshold == 0 || !shift.Known || t.scale.Upper != 0 && t.scale.Upper < wholeRange {
+		return 0, false
+	}
+	return t.scale.TWA(t.pct + lostBelow(t.scale, shift.Value))
+}
+
+// lostBelow gives the dose in percent of the threshold level, all the shift long: no more is lost below it.
+func lostBelow(s acoustics.Scale, minutes float64) float64 {
+	if s.Threshold == 0 {
+		return 0
+	}
+	return s.DoseOfTWA(s.Threshold) * minutes / 480
+}
+
+// takeEnergyLevel takes an equivalent level as a dose at 3 dB exchange. It holds all levels, so that the dose from a
+// threshold on is at most that, and at least that less what the threshold itself would give all the shift long.
+func (r *reading) takeEnergyLevel(asked acoustics.Scale, m *record.Measurement, at workplace) {
+	part, note := portionOf(m)
+	shift := shiftOf(m, at)
+	if note == "" && !shift.Known {
+		note = "the length of the shift is not recorded"
+	}
+	if note != "" {
+		r.notes = append(r.notes, note)
+		return
+	}
+	minutes := shift.Value
+	if part.projected {
+		minutes = part.shift
+	}
+	dose := asked.DoseOfTWA(m.LAeqDBA.Value) * minutes / 480
+	found := bounds{max(0, dose-lostBelow(asked, minutes)), dose}
+	if r.exact() || found.high >= r.high {
+		return
+	}
+	r.bounds = found
+	line := "LAeq " + number(m.LAeqDBA.Value) + " dBA over " + hours(minutes) + " h, D = 100 · " + hours(minutes) + " h / 8 h · 10^((LAeq − " + number(asked.Criterion) +
+		")/10) = " + number(acoustics.RoundTenth(dose)) + " %"
+	if !found.exact() {
+		line += "; it holds levels below " + number(asked.Threshold) + " dBA, too, so that the dose from there on is at least " + number(acoustics.RoundTenth(found.low)) + " %"
+	}
+	r.working = append(r.working[:0], line)
 }
 
 // week turns a daily level into that of the week on a weekly channel, L_EX,w: 10 lg of a fifth of the sum over

@@ -146,6 +146,8 @@ func (c *channels) ofMeasurement(rows []*record.Measurement, at workplace) *resu
 				c.takeSample(on, m, at)
 			case c.isLevel(i):
 				on.takeLevel(m, t, note, at)
+			case c.scales[i].Exchange == equalEnergy && m.LAeqDBA.Known && note != "" && !m.DosePct.Known && !m.TWADBA.Known:
+				on.takeEnergyLevel(c.scales[i], m, at)
 			case note != "":
 				on.notes = append(on.notes, note)
 			default:

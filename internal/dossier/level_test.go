@@ -96,12 +96,14 @@ func TestLevelOfOneMeasurement(t *testing.T) {
 		"The shift of the group where the row has none": {[]*record.Measurement{but(base, func(m *record.Measurement) { m.LAeqDBA, m.ShiftMinutes = record.Num(85), record.Number{} })},
 			"86.76", "reached", "L_EX,8h = 85 + 10 lg(12 h / 8 h) = 86.76 dBA"},
 		"A dose at 3 dB exchange without threshold is exact": {[]*record.Measurement{dose(3, 0, 200)}, "88.01", "reached", "L_EX,8h = 85 + 10 lg(200/100) = 88.01 dBA"},
-		"With a threshold it is a lower bound, which may suffice": {[]*record.Measurement{dose(3, 80, 100)}, ">=85.00", "reached",
-			"the dose counts from 80 dBA on, so that the level is at least that"},
-		"Or not": {[]*record.Measurement{dose(3, 80, 99)}, ">=84.96", "unknown: the level on this channel is known only within bounds", ""},
+		"With a threshold it is a lower bound, which may suffice": {[]*record.Measurement{dose(3, 80, 100)}, "85.00 to 86.19", "reached",
+			"the dose counts from 80 dBA on, so that the level is at least that, and with 80 dBA all the rest at most 86.19 dBA"},
+		"A dose of nothing from 80 dBA on leaves at most 80 dBA": {[]*record.Measurement{dose(3, 80, 0)}, "<=80.00", "not reached", "no level reached 80 dBA"},
+		"A dose of a range that ends at 130 dBA is a lower bound alone": {[]*record.Measurement{but(dose(3, 80, 100), func(m *record.Measurement) { m.UpperDB = record.Num(130) })}, ">=85.00", "reached", ""},
+		"Or not": {[]*record.Measurement{dose(3, 80, 99)}, "84.96 to 86.16", "unknown: the level on this channel is known only within bounds", ""},
 		"So it is where the threshold is not recorded": {[]*record.Measurement{dose(3, -1, 99)}, ">=84.96", "unknown: the level on this channel is known only within bounds",
 			"an integration threshold that is not recorded"},
-		"Of two thresholds the higher bound counts": {[]*record.Measurement{dose(3, 80, 99), dose(3, 70, 101)}, ">=85.04", "reached", ""},
+		"Of two thresholds the higher bound counts": {[]*record.Measurement{dose(3, 80, 99), dose(3, 70, 101)}, "85.04 to 85.18", "reached", ""},
 		"The equivalent level counts before a dose": {[]*record.Measurement{dose(3, 80, 50), base}, "85.00", "reached", ""},
 		"In either order": {[]*record.Measurement{base, dose(3, 0, 50)}, "85.00", "reached", ""},
 		"A dose at 5 dB exchange is never converted": {[]*record.Measurement{dose(5, 0, 800)}, "unknown",
@@ -182,7 +184,7 @@ func TestWeeklyLevels(t *testing.T) {
 		m.LAeqDBA, m.CriterionDB, m.ExchangeDB, m.ThresholdDB, m.DosePct = record.Number{}, record.Num(85), record.Num(3), record.Num(80), record.Num(125)
 	})
 	lower := byLevel(85, weekly).judge(t, four, bound).group()
-	assert.Equal(t, ">=85.00", levelText(lower.Now.Channels["day"]), "a lower bound of the day gives one of the week")
+	assert.Equal(t, "85.00 to 85.98", levelText(lower.Now.Channels["day"]), "bounds of the day give those of the week")
 	assert.Equal(t, "L_EX,w = L_EX,8h + 10 lg(4/5), at least 85.00 dBA (4 days a week alike)", lower.Now.Channels["day"].Working[2])
 	g := group("g1")
 	g.DaysPerWeek, g.ShiftMinutes = record.Num(4), record.Num(600)

@@ -196,3 +196,30 @@ func TestTableOfTimes(t *testing.T) {
 	assert.False(t, l.AtMost.Known)
 	assert.Len(t, open(w.ExposureUnknown["action"]), 1, "at least 100 % may be more than 100 %")
 }
+
+// A level by equal energy tells a dose at 3 dB exchange within what the threshold itself would give: 100 % of 85 dBA for
+// 8 h (98-126, 1.1; secondary source), of which 80 dBA for 8 h is 31.6 %.
+func TestLevelAsADose(t *testing.T) {
+	a := byLevel(85, func(m *dossier.ExposureMeasures) {
+		m.Channels = map[string]dossier.Channel{"day": {CriterionDB: 85, ExchangeDB: 3, ThresholdDB: 80, UpperDB: 140}}
+	})
+	a.law = limits{osha(), 100}
+	for _, c := range []struct {
+		laeq, shift     float64
+		exposed, unsure int
+	}{
+		{84.9, 480, 0, 0}, {85, 480, 0, 1}, {86.1, 480, 0, 1}, {86.2, 480, 1, 0}, {88, 240, 0, 0}, {89, 240, 1, 0}, {84.8, 720, 0, 1}, {85, 720, 1, 0},
+	} {
+		m := leveled("m1", "2019-11-15", c.laeq)
+		m.ShiftMinutes = record.Num(c.shift)
+		w := a.judge(t, inGroup(nil, m)...).worker()
+		assert.Len(t, w.Exposed["action"], c.exposed, "%v dBA over %v min", c.laeq, c.shift)
+		assert.Len(t, open(w.ExposureUnknown["action"]), c.unsure, "%v dBA over %v min", c.laeq, c.shift)
+	}
+	both := leveled("m1", "2019-11-15", 86.2)
+	both.CriterionDB, both.ExchangeDB, both.ThresholdDB, both.DosePct = record.Num(85), record.Num(3), record.Num(80), record.Num(99)
+	assert.Empty(t, a.judge(t, inGroup(nil, both)...).worker().Exposed["action"], "the dose itself comes first")
+	part := leveled("m1", "2019-11-15", 95)
+	part.FullShift = record.No
+	assert.Len(t, open(a.judge(t, inGroup(nil, part)...).worker().ExposureUnknown["action"]), 1)
+}

@@ -168,7 +168,10 @@ type ProtectionMeasures struct {
 	Derating  string  `json:"derating,omitempty" enum:"niosh|csa" doc:"reduction of a noise reduction rating by type of protector"`
 	Percent   float64 `json:"percent,omitempty" doc:"percentage of wearers for whom octave band values are assumed; 84 if left out"`
 	RealWorld string  `json:"real_world,omitempty" doc:"parameter: dB added to the level at the ear for use outside the laboratory"`
-	Bands     string  `json:"bands,omitempty" doc:"parameter: action level, dBA, against which the level at the ear is graded from too little to too much protection"`
+	// RealWorldByType stands before RealWorld for the types that it names.
+	RealWorldByType map[string]string `json:"real_world_by_type,omitempty" doc:"parameter by type of protector, in place of one for all: dB added to the level at the ear for use outside the laboratory"`
+
+	Bands string `json:"bands,omitempty" doc:"parameter: action level, dBA, against which the level at the ear is graded from too little to too much protection"`
 }
 
 // TrainingMeasures say how training sessions are taken together.
