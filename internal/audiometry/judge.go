@@ -61,6 +61,8 @@ func (s Scheme) judge(baseline, current *Ear, aging []int, amountDB float64) Out
 		return s.singly(baseline, current, aging, limit)
 	case Adjacent:
 		return s.inPairs(baseline, current, aging, limit)
+	case Peak:
+		return s.peak(current, limit)
 	}
 	return undecided(s.Frequencies)
 }

@@ -36,7 +36,7 @@ func TestSchemeCheck(t *testing.T) {
 	}
 	two := []int{1000, 2000}
 	for want, s := range map[string]audiometry.Scheme{
-		`the scheme has the rule ""; write mean, any, adjacent or sum`:                      {Frequencies: two},
+		`the scheme has the rule ""; write mean, any, adjacent, sum or peak`:                {Frequencies: two},
 		`the scheme is of "hearing"; write change, level or ears`:                           {Rule: "any", Of: "hearing", Frequencies: two},
 		`the scheme has the baseline "old"; write standing, original, improved or previous`: {Rule: "any", Baseline: "old", Frequencies: two},
 		`the scheme names a baseline, but only a change has one`:                            {Rule: "any", Of: "level", Baseline: "original", Frequencies: two},

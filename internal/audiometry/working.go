@@ -56,7 +56,7 @@ func shownLevel(t Threshold) string {
 func (s Scheme) result(o Outcome, amountDB float64) string {
 	what := map[string]string{"": OfChange, OfChange: OfChange, OfLevel: OfLevel, OfEars: "difference"}[s.Of]
 	figure := map[string]string{
-		Mean: "average " + what, Total: "sum", Any: "largest " + what, Adjacent: "largest " + what + " of two neighbours",
+		Mean: "average " + what, Total: "sum", Any: "largest " + what, Adjacent: "largest " + what + " of two neighbours", Peak: "largest " + what,
 	}[s.Rule]
 	limit := "at least "
 	if s.Above != "" {

@@ -58,6 +58,8 @@ func (s *Source) mount(id, dir string) error {
 		switch {
 		case err != nil:
 			return refuse(shown, "", "it cannot be read: %v", err)
+		case entry.IsDir() && entry.Name() == ".git":
+			return fs.SkipDir
 		case entry.IsDir():
 			return nil
 		case !entry.Type().IsRegular():

@@ -19,6 +19,7 @@ type Bundle struct {
 	ID         string
 	Revision   string   // of the manifest
 	SHA256     string   // digest over the paths and contents of all its files, and of those of the bundles that it extends
+	Signature  string   // what is known of its signature, one of Signatures; empty if it comes from no shelf
 	Extends    []string // bundles that it extends, directly or through others, the nearest first
 	About      About
 	Parameters map[string]Parameter

@@ -101,8 +101,17 @@ func (b *Bundle) checkMeasures(file string, problems *diag.List) {
 	for _, s := range m.Hearing.Others {
 		needParameter(s.Parameter(), "hearing.others."+s.Name)
 	}
+	for _, name := range []string{m.Documents.PostedFor, m.Documents.Every, m.Documents.Short} {
+		needParameter(name, "documents")
+	}
+	if kind := m.Documents.Periodic; kind != "" && !slices.Contains(dossier.DocumentKinds(), kind) {
+		problems.Errorf(at, nearRemedy(kind, dossier.DocumentKinds()), "documents.periodic names %q, which is no kind of document", kind)
+	}
 	needParameter(m.Protection.RealWorld, "protection")
 	needParameter(m.Protection.Bands, "protection")
+	for _, kind := range slices.Sorted(maps.Keys(m.Protection.RealWorldByType)) {
+		needParameter(m.Protection.RealWorldByType[kind], "protection.real_world_by_type."+kind)
+	}
 	if _, ok := m.Exposure.Channels[m.Protection.Channel]; !ok && (m.Protection.Channel != "" || m.Protection.Rating != "") {
 		problems.Errorf(at, "Name one of the channels", "protection names the channel %q, which the measures do not have", m.Protection.Channel)
 	}

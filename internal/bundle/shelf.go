@@ -64,7 +64,10 @@ func newSlot(id string, fsys overlay, source *Source) *slot {
 		b, problems := Load(fsys, id)
 		problems = fsys.locate(problems)
 		if b != nil {
-			b.Warnings, b.places = problems, fsys.places
+			b.Warnings, b.places, b.Signature = problems, fsys.places, SignatureEmbedded
+			if source != nil {
+				b.Signature = source.signed[id]
+			}
 		}
 		return b, problems
 	})
@@ -129,6 +132,8 @@ type Head struct {
 	About    About
 	Duties   int    // number of duties, with those of the bundles that it extends
 	Place    string // where it was read from; empty if it is embedded
+
+	Signature string // one of Signatures
 }
 
 // Head reads what a bundle says of itself. No rule is compiled.
@@ -145,7 +150,10 @@ func (s *Shelf) Head(id string) (*Head, diag.List) {
 		return nil, problems
 	}
 	h := &Head{ID: id, Revision: l.revision, Extends: l.chain, About: l.about}
-	h.Place, _ = s.Outside(id)
+	h.Signature = SignatureEmbedded
+	if slot.source != nil {
+		h.Place, h.Signature = slot.source.place(id), slot.source.signed[id]
+	}
 	for what := range l.origin {
 		if strings.HasPrefix(what, "duty/") {
 			h.Duties++

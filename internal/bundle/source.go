@@ -26,14 +26,16 @@ type Source struct {
 	files  fstest.MapFS      // by folder of the bundle
 	bytes  int64             // of all files
 	places map[string]string // where a folder was read, by its name
+	signed map[string]string // what is known of its signature
 }
 
 // manifest is the file that makes a folder a bundle.
 const manifest = ".manifest"
 
 // OpenSource reads a folder or a .tar.gz that is one bundle or holds several, each in a folder of its own. Of a folder
-// that is one bundle, the bundles that it extends and the shared rules are taken from beside it, if they are there.
-func OpenSource(name string) (*Source, error) {
+// that is one bundle, the bundles that it extends and the shared rules are taken from beside it, if they are there. With
+// a key, whatever is read must be signed by it.
+func OpenSource(name string, key *Key) (*Source, error) {
 	info, err := os.Stat(name)
 	switch {
 	case errors.Is(err, fs.ErrNotExist):
@@ -41,7 +43,7 @@ func OpenSource(name string) (*Source, error) {
 	case err != nil:
 		return nil, refuse(name, "", "it cannot be read: %v", err)
 	}
-	s := &Source{Path: name, files: fstest.MapFS{}, places: map[string]string{}}
+	s := &Source{Path: name, files: fstest.MapFS{}, places: map[string]string{}, signed: map[string]string{}}
 	switch {
 	case info.IsDir():
 		err = s.readFolder()
@@ -60,6 +62,11 @@ func OpenSource(name string) (*Source, error) {
 		return nil, refuse(name, "Name a bundle that uses them", "it holds the rules that bundles share, and is no bundle")
 	}
 	slices.Sort(s.IDs)
+	for _, dir := range slices.Sorted(maps.Keys(s.places)) {
+		if s.signed[dir], err = s.signature(dir, key); err != nil {
+			return nil, err
+		}
+	}
 	return s, nil
 }
 
@@ -88,7 +95,9 @@ func (s *Source) readFolder() error {
 		}
 		for _, e := range entries {
 			dir := filepath.Join(s.Path, e.Name())
-			if _, err := os.Stat(filepath.Join(dir, manifest)); err != nil {
+			if there, err := isBundle(dir); err != nil {
+				return err
+			} else if !there {
 				continue
 			}
 			if err := s.mount(e.Name(), dir); err != nil {
@@ -112,14 +121,26 @@ func (s *Source) readFolder() error {
 	return s.neighbours(id, s.Path, filepath.Dir(whole))
 }
 
+// isBundle says whether there is a folder that holds a manifest. A link to one is refused.
+func isBundle(dir string) (bool, error) {
+	if _, err := os.Stat(filepath.Join(dir, manifest)); err != nil {
+		return false, nil
+	}
+	if info, err := os.Lstat(dir); err != nil || !info.IsDir() {
+		return false, refuse(dir, "Put a copy in its place, or name the folder that it leads to", "it is a link to a bundle, and links could lead anywhere")
+	}
+	return true, nil
+}
+
 // neighbours reads what lies beside a bundle and belongs to it: the shared rules, and the bundles that it extends.
 func (s *Source) neighbours(id, shown, parent string) error {
 	for _, name := range append(s.extends(id), commonDir) {
 		if s.has(name) || !plainName(name) {
 			continue
 		}
-		dir := filepath.Join(parent, name)
-		if _, err := os.Stat(filepath.Join(dir, manifest)); err != nil {
+		if there, err := isBundle(filepath.Join(parent, name)); err != nil {
+			return err
+		} else if !there {
 			continue
 		}
 		beside := filepath.Join(shown, "..", name)

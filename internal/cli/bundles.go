@@ -15,7 +15,7 @@ func (r *run) bundlesCommand() *cli.Command {
 		Name:        "bundles",
 		Usage:       "list the bundles",
 		Description: examples("A bundle holds the duties of one jurisdiction as rules and dated numbers.", "hearduty bundles"),
-		Flags:       []cli.Flag{policiesFlag(), outFlag(), widthFlag()},
+		Flags:       []cli.Flag{policiesFlag(), policiesKeyFlag(), outFlag(), widthFlag()},
 		Action: func(c *cli.Context) error {
 			if _, err := arguments(c, 0, 0); err != nil {
 				return err
@@ -48,7 +48,7 @@ func (r *run) bundleCommand() *cli.Command {
 		Flags: []cli.Flag{
 			&cli.StringFlag{Name: "as-of", Usage: "show the numbers in force on `DATE`", DefaultText: "today"},
 			&cli.StringFlag{Name: "format", Value: rulebook.Forms[0], Usage: "write the book as `NAME`: " + strings.Join(rulebook.Forms, ", ")},
-			policiesFlag(), outFlag(), widthFlag(),
+			policiesFlag(), policiesKeyFlag(), outFlag(), widthFlag(),
 		},
 		Action: r.bundle,
 	}

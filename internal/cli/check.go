@@ -28,7 +28,7 @@ func (r *run) checkCommand() *cli.Command {
 			"hearduty check --format json --out report.json --fail-on gap,unproven,reject",
 		),
 		Flags: []cli.Flag{
-			asOfFlag(), siteFlag(), bundleFlag(), policiesFlag(),
+			asOfFlag(), siteFlag(), bundleFlag(), policiesFlag(), policiesKeyFlag(),
 			&cli.StringFlag{Name: "format", Value: report.Names()[0], Usage: "write the report as `NAME`: " + strings.Join(report.Names(), ", ")},
 			outFlag(), rejectsFlag(), strictFlag(),
 			&cli.StringFlag{Name: "ahead", Value: "90d", Usage: "list what is due within `DAYS`"},

@@ -8,6 +8,8 @@ import (
 	"github.com/urfave/cli/v2"
 
 	"hearduty/internal/bundle"
+	"hearduty/internal/dossier"
+	"hearduty/internal/finding"
 	"hearduty/internal/program"
 	"hearduty/internal/report"
 	"hearduty/internal/report/change"
@@ -94,8 +96,10 @@ func candidates(app *cli.App, before []string, last string) []string {
 		return nil
 	}
 	switch command.Name {
-	case "bundle":
+	case "bundle", "rehearse":
 		return bundleIDs()
+	case "template":
+		return templateKinds
 	case "completion":
 		return shells
 	case "help":
@@ -111,6 +115,10 @@ func valuesOf(flag string, words []string, last string) []string {
 		return report.Names()
 	case "bundle":
 		return bundleIDs()
+	case "subject":
+		return dossier.Kinds
+	case "topic":
+		return finding.Topics
 	case "site":
 		return siteIDs(words)
 	case "fail-on":

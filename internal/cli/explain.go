@@ -22,7 +22,7 @@ func (r *run) explainCommand() *cli.Command {
 			"hearduty explain f-91425f4c",
 			"hearduty explain f-91425f4c plants --as-of 2026-06-30",
 		),
-		Flags:  []cli.Flag{asOfFlag(), siteFlag(), bundleFlag(), policiesFlag(), outFlag(), pseudonymsFlag(), healthFlag(), widthFlag(), parallelFlag()},
+		Flags:  []cli.Flag{asOfFlag(), siteFlag(), bundleFlag(), policiesFlag(), policiesKeyFlag(), outFlag(), pseudonymsFlag(), healthFlag(), widthFlag(), parallelFlag()},
 		Action: r.explain,
 	}
 }

@@ -15,18 +15,51 @@ func policiesFlag() cli.Flag {
 	return &cli.StringSliceFlag{Name: "policies", Usage: "take bundles from the folder or .tar.gz at `PATH`, too; can be repeated"}
 }
 
-// library gives the bundles that a command can use: the embedded ones and those of --policies. None of them is read
-// before it is taken, by id, from the shelf.
-func (r *run) library(c *cli.Context) (*bundle.Shelf, error) {
-	var sources []*bundle.Source
-	for _, path := range c.StringSlice("policies") {
-		source, err := bundle.OpenSource(path)
+// policiesKeyFlag lets a command verify the signatures of bundles that are not embedded.
+func policiesKeyFlag() cli.Flag {
+	return &cli.StringFlag{Name: "policies-key", Usage: "verify the signatures of these bundles with the public key or secret in `FILE`"}
+}
+
+// sources opens what --policies names, and more paths besides.
+func sources(c *cli.Context, more ...string) ([]*bundle.Source, error) {
+	var key *bundle.Key
+	paths := append(c.StringSlice("policies"), more...)
+	if file := c.String("policies-key"); file != "" {
+		if len(paths) == 0 {
+			return nil, usage("--policies-key is given, but no bundle that it could verify", "Name the bundle with --policies, or leave out the key")
+		}
+		var err error
+		if key, err = bundle.ReadKey(file); err != nil {
+			return nil, err
+		}
+	}
+	var out []*bundle.Source
+	for _, path := range paths {
+		source, err := bundle.OpenSource(path, key)
 		if err != nil {
 			return nil, err
 		}
-		sources = append(sources, source)
+		out = append(out, source)
 	}
-	return r.shelf(sources)
+	return out, nil
+}
+
+// library gives the bundles that a command can use: the embedded ones and those of --policies. None of them is read
+// before it is taken, by id, from the shelf.
+func (r *run) library(c *cli.Context) (*bundle.Shelf, error) {
+	list, err := sources(c)
+	if err != nil {
+		return nil, err
+	}
+	shelf, err := bundle.NewShelf(list...)
+	if err != nil {
+		return nil, err
+	}
+	for _, id := range shelf.Replaced() {
+		place, _ := shelf.Outside(id)
+		fmt.Fprintf(r.stderr, "The bundle in %s takes the place of the embedded bundle %s.\n", place, id)
+	}
+	return shelf, nil
 }
 
 // taken reads the bundles that the chosen sites of a program name, those named besides, and no others.
@@ -47,17 +80,4 @@ func taken(shelf *bundle.Shelf, p *program.Program, sites []string, more ...stri
 	}
 	add(more)
 	return shelf.Take(ids...)
-}
-
-// shelf puts sources on a shelf, and tells which embedded bundles they replace.
-func (r *run) shelf(sources []*bundle.Source) (*bundle.Shelf, error) {
-	shelf, err := bundle.NewShelf(sources...)
-	if err != nil {
-		return nil, err
-	}
-	for _, id := range shelf.Replaced() {
-		place, _ := shelf.Outside(id)
-		fmt.Fprintf(r.stderr, "The bundle in %s takes the place of the embedded bundle %s.\n", place, id)
-	}
-	return shelf, nil
 }

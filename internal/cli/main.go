@@ -112,7 +112,7 @@ func (r *run) app() *cli.App {
 			"A bundle is a reading of the law; local codes govern, and licensed professionals decide.",
 		Commands: []*cli.Command{
 			r.checkCommand(), r.intakeCommand(), r.bundlesCommand(), r.bundleCommand(), r.explainCommand(), r.compareCommand(), r.switchCommand(), r.demoCommand(),
-			r.sampleCommand(), r.rehearseCommand(), r.keyCommand(), r.completionCommand(), r.helpCommand(),
+			r.sampleCommand(), r.rehearseCommand(), r.templateCommand(), r.keyCommand(), r.completionCommand(), r.helpCommand(),
 		},
 		// A help command of our own keeps the library from adding its help flag.
 		Flags:           []cli.Flag{cli.HelpFlag},

@@ -28,7 +28,7 @@ func (r *run) rehearseCommand() *cli.Command {
 		Flags: []cli.Flag{
 			&cli.StringFlag{Name: "duty", Usage: "try only the duty `NAME`, such as fit-tested"},
 			&cli.StringFlag{Name: "cases", Usage: "judge only the law cases of files whose names fit `PATTERN`"},
-			policiesFlag(), outFlag(),
+			policiesFlag(), policiesKeyFlag(), outFlag(),
 		},
 		Action: r.rehearse,
 	}
@@ -71,25 +71,22 @@ func (r *run) rehearse(c *cli.Context) error {
 // bundleToRehearse loads the bundle that an argument names, and no other but those that it extends.
 func (r *run) bundleToRehearse(c *cli.Context, name string) (*bundle.Bundle, error) {
 	id := name
-	var sources []*bundle.Source
-	for _, path := range c.StringSlice("policies") {
-		source, err := bundle.OpenSource(path)
-		if err != nil {
-			return nil, err
-		}
-		sources = append(sources, source)
-	}
+	var more []string
 	if isPath(name) {
-		source, err := bundle.OpenSource(name)
-		if err != nil {
-			return nil, err
-		}
-		if len(source.IDs) > 1 {
-			return nil, usage(fmt.Sprintf("%s holds %d bundles, and one is rehearsed at a time", name, len(source.IDs)), "Write the folder of one of them: %s", strings.Join(source.IDs, ", "))
-		}
-		id, sources = source.IDs[0], append(sources, source)
+		more = append(more, name)
 	}
-	shelf, err := bundle.NewShelf(sources...)
+	list, err := sources(c, more...)
+	if err != nil {
+		return nil, err
+	}
+	if len(more) > 0 {
+		ids := list[len(list)-1].IDs
+		if len(ids) > 1 {
+			return nil, usage(fmt.Sprintf("%s holds %d bundles, and one is rehearsed at a time", name, len(ids)), "Name one of them: %s", strings.Join(ids, ", "))
+		}
+		id = ids[0]
+	}
+	shelf, err := bundle.NewShelf(list...)
 	if err != nil {
 		return nil, err
 	}

@@ -30,7 +30,7 @@ func (r *run) sampleCommand() *cli.Command {
 			"hearduty sample --found sheet.csv",
 			"hearduty sample --faulty 2 --of 38 --population 104",
 		),
-		Flags: append(append([]cli.Flag{asOfFlag(), siteFlag(), bundleFlag(), policiesFlag()}, drawFlags()...), append(foundFlags(),
+		Flags: append(append([]cli.Flag{asOfFlag(), siteFlag(), bundleFlag(), policiesFlag(), policiesKeyFlag()}, drawFlags()...), append(foundFlags(),
 			&cli.StringFlag{Name: "format", Value: pull.Names()[0], Usage: "write the sheet as `NAME`: " + strings.Join(pull.Names(), ", ")},
 			outFlag(), widthFlag(), parallelFlag(), pseudonymsFlag())...),
 		Action: r.sample,

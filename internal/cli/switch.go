@@ -145,5 +145,5 @@ func moved(s *finding.Switch) string {
 			}
 		}
 	}
-	return fmt.Sprintf("by subject and topic, findings appear %d times, change %d times and vanish %d times", numbers[finding.Appears], numbers[finding.Changes], numbers[finding.Vanishes])
+	return fmt.Sprintf("counted by subject and topic, %d appear, %d change and %d vanish", numbers[finding.Appears], numbers[finding.Changes], numbers[finding.Vanishes])
 }

@@ -78,7 +78,7 @@ func (b *book) put(r record.Record) {
 
 // write writes the program file and the records, those of a day in the order of their days, and then the same as exports.
 func (b *book) write(dir string) error {
-	if err := writeProgram(dir, demoProgram); err != nil {
+	if err := writeProgram(dir, demoProgram, ""); err != nil {
 		return err
 	}
 	if err := writeAccepted(dir); err != nil {

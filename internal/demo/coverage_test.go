@@ -16,7 +16,7 @@ const law = "us-osha-general-industry"
 // judged judges a program under the law of the demo.
 func judged(t *testing.T, dir string) (*bundle.Bundle, *finding.Report) {
 	t.Helper()
-	library, err := bundle.Embedded()
+	library, err := bundle.Embedded(law)
 	require.NoError(t, err)
 	p := sources(dir, "kiln-hill", "larch-street")
 	for i := range p.Sites {

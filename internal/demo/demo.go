@@ -10,6 +10,7 @@ package demo
 import (
 	"os"
 	"path/filepath"
+	"slices"
 	"strings"
 
 	"hearduty/internal/calendar"
@@ -52,17 +53,27 @@ const demoProgram = `# The demo program of hearduty: an invented firm, invented 
 program: Harrow & Slate hearing conservation
 as_of: 2026-06-30
 accepted: accepted.yaml
-sites:
+` + demoSites
+
+// demoSites are the sites of the demo program.
+const demoSites = `sites:
   - {id: kiln-hill, name: Kiln Hill foundry, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
   - {id: larch-street, name: Larch Street joinery, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
 `
 
-// writeProgram writes program.yaml: the head, and the record files of all kinds.
-func writeProgram(dir, head string) error {
+// kinds lists the record kinds that a program of this package holds. What was offered, and what came of it, is kept
+// apart from hearing tests only where the law asks about offers, which that of these sites does not.
+func kinds() []record.Kind {
+	return slices.DeleteFunc(record.Kinds(), func(k record.Kind) bool { return k == "examination" })
+}
+
+// writeProgram writes program.yaml: the head, the record files of all kinds, and more of them.
+func writeProgram(dir, head, more string) error {
 	var text strings.Builder
 	text.WriteString(head + "records:\n")
-	for _, k := range record.Kinds() {
+	for _, k := range kinds() {
 		text.WriteString("  - records/" + csvName(k) + "\n")
 	}
+	text.WriteString(more)
 	return os.WriteFile(filepath.Join(dir, "program.yaml"), []byte(text.String()), 0o644)
 }

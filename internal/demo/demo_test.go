@@ -12,8 +12,6 @@ import (
 	"testing"
 
 	"github.com/stretchr/testify/require"
-
-	"hearduty/internal/record"
 )
 
 var update = flag.Bool("update", false, "write testdata/demo anew")
@@ -99,8 +97,8 @@ func TestEveryRecordKindIsPresent(t *testing.T) {
 			records++
 		}
 	}
-	require.Equal(t, len(record.Kinds()), records, "a file of records that is of no kind")
-	for _, k := range record.Kinds() {
+	require.Equal(t, len(kinds()), records, "a file of records that is of no kind")
+	for _, k := range kinds() {
 		text := files["records/"+csvName(k)]
 		require.Greater(t, len(regexp.MustCompile(`(?m)^.+$`).FindAllString(text, 3)), 1, "%s has no row", k)
 		require.True(t, strings.Contains(files["program.yaml"], "  - records/"+csvName(k)+"\n"), k)

@@ -20,10 +20,7 @@ const exportsProgram = `
 program: Harrow & Slate hearing conservation
 as_of: 2026-06-30
 accepted: accepted.yaml
-sites:
-  - {id: kiln-hill, name: Kiln Hill foundry, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
-  - {id: larch-street, name: Larch Street joinery, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
-records:
+` + demoSites + `records:
   - {file: exports/roster.csv, map: maps/roster.yaml}
   - {file: exports/units.json, map: maps/units.yaml}
   - {file: exports/dosimetry.txt, map: maps/dosimetry.yaml}

@@ -18,7 +18,7 @@ func sources(dir string, sites ...string) *program.Program {
 	for _, id := range sites {
 		p.Sites = append(p.Sites, program.Site{ID: id, Country: "US", Region: "OH"})
 	}
-	for _, k := range record.Kinds() {
+	for _, k := range kinds() {
 		shown := "records/" + csvName(k)
 		p.Sources = append(p.Sources, program.Source{Path: filepath.Join(dir, shown), Shown: shown, Kind: k})
 	}

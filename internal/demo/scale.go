@@ -27,7 +27,7 @@ func WriteScale(dir string, workers int) error {
 		return errors.New("the number of workers must be 1 or more")
 	}
 	return publish(dir, func(temporary string) error {
-		if err := writeProgram(temporary, scaleProgram(workers)); err != nil {
+		if err := writeProgram(temporary, scaleProgram(workers), ""); err != nil {
 			return err
 		}
 		t, err := createTables(temporary)

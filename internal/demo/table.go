@@ -35,7 +35,7 @@ func createTables(dir string) (*tables, error) {
 	if err := os.Mkdir(folder, 0o755); err != nil {
 		return nil, err
 	}
-	for _, k := range record.Kinds() {
+	for _, k := range kinds() {
 		columns, _ := record.TableOf(k)
 		file, err := os.Create(filepath.Join(folder, csvName(k)))
 		if err != nil {
@@ -56,7 +56,7 @@ func (t *tables) put(r record.Record) {
 
 // close finishes all files, and gives the first error of the whole writing.
 func (t *tables) close() error {
-	for _, k := range record.Kinds() {
+	for _, k := range kinds() {
 		one := t.byKind[k]
 		if one == nil {
 			continue

@@ -39,6 +39,13 @@ type Spell struct {
 	Current bool `json:"current" doc:"whether the as-of day lies in it"`
 }
 
+// Absence is a stretch of days between two employments at the site.
+type Absence struct {
+	From   Date          `json:"from" doc:"first day away"`
+	To     Date          `json:"to" doc:"first day back"`
+	Months record.Number `json:"months" doc:"its length in months: whole months, and each further day as 1/31 of one"`
+}
+
 // Place is the site at which the subject is judged.
 type Place struct {
 	ID      string `json:"id" doc:"id of the site"`
@@ -59,6 +66,8 @@ type Worker struct {
 	Common
 	JobTitle        string        `json:"job_title" doc:"job classification"`
 	Employed        []Spell       `json:"employed" doc:"stretches of employment at this site"`
+	Absences        []Absence     `json:"absences" doc:"stretches between two employments at this site, oldest first"`
+	Departures      []Departure   `json:"departures" doc:"ends of employment at this site"`
 	OnRoll          record.Answer `json:"on_roll" doc:"whether the employer's own roll has the worker in the program"`
 	Exposures       []Exposure    `json:"exposures" doc:"noise exposure, stretch by stretch"`
 	ExposureWorking []string      `json:"exposure_working" doc:"how the exposure on the channel that enrols came about, stretch by stretch: the days, what decides, and the sums with their numbers"`
@@ -139,6 +148,9 @@ type Result struct {
 	Dose     record.Number `json:"dose_pct" doc:"dose, percent"`
 	LevelDBA record.Number `json:"level_dba" doc:"level, dBA, where the channel is one of levels"`
 	Notice   *Link         `json:"notice" doc:"the worker was told of it"`
+	Written  record.Answer `json:"written" doc:"whether that notice was given in writing"`
+	Levels   []string      `json:"levels" doc:"names of the exposure levels of the bundle that it reaches"`
+	Before   *Link         `json:"told_before" doc:"a written notice of an earlier result at the same levels that spares another one on the day since which it concerns the worker; null where the bundle knows no such rule"`
 }
 
 // Protection is the hearing protector at hand and what it leaves of the noise.
@@ -154,6 +166,8 @@ type Protection struct {
 	PlugsOffered   record.Number `json:"plugs_offered" doc:"number of types of earplug to choose from"`
 	MuffsOffered   record.Number `json:"muffs_offered" doc:"number of types of earmuff to choose from"`
 	Class          string        `json:"class" doc:"class or grade of the label"`
+	Certificate    string        `json:"certificate" doc:"number of the certificate of approval"`
+	CertifiedTo    Date          `json:"certified_to" doc:"last day of validity of that certificate; null where it is not limited or not recorded"`
 	UnderPAR       record.Number `json:"under_par_db" doc:"8-hour level less the personal attenuation rating of the latest fit test, dBA"`
 	Peak           record.Number `json:"peak_dbc" doc:"C-weighted peak without the protector, dB"`
 	PeakUnder      record.Number `json:"peak_under_dbc" doc:"highest estimate of that peak under the protector over the kinds of impulse (EN 458, from memory), dB"`
@@ -191,4 +205,6 @@ type Training struct {
 	Link
 	Topics []string `json:"topics" doc:"topics of that session and of the sessions in the year before it"`
 	Silent bool     `json:"topics_unrecorded" doc:"whether none of these sessions names its topics"`
+
+	Certified record.Answer `json:"certified" doc:"whether the employer certified date and type of the latest session"`
 }

@@ -43,7 +43,9 @@ func (b *Builder) examinations(w *WorkerRecords, h *hearing, refs Refs, series m
 	}
 	for _, t := range h.tests {
 		if t.counts() {
-			add(testOffered, t.rec.Date, t.ref)
+			if t.retestOf == nil {
+				add(testOffered, t.rec.Date, t.ref)
+			}
 			add(testDone, t.rec.Date, t.ref)
 		}
 	}
@@ -56,9 +58,11 @@ func (b *Builder) examinations(w *WorkerRecords, h *hearing, refs Refs, series m
 		if e.Type == "health_appointment" {
 			offered, attended = appointmentOffered, appointmentAttended
 		}
-		if e.OfferedOn.Known() {
+		switch {
+		case offered == testOffered && e.Purpose == "retest": // the retest stands in for a test that was offered
+		case e.OfferedOn.Known():
 			add(offered, e.OfferedOn, ref)
-		} else {
+		default:
 			add(offered, e.AttendedOn, ref)
 		}
 		add(attended, e.AttendedOn, ref)

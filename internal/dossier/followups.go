@@ -161,7 +161,7 @@ func (h *hearing) revisions() []Revision {
 		if f.Type != "baseline_revision" || !h.b.here(h.w, f.Date) {
 			continue
 		}
-		r := Revision{Link: *link(h.refs, f, f.Date), Ears: []string{}, Unfounded: []string{}, Undecided: []string{}, By: h.b.Registers.professionOf(f.By), ByRecorded: f.By != ""}
+		r := Revision{Link: *link(h.refs, f, f.Date), Ears: []string{}, Unfounded: []string{}, Undecided: []string{}, Result: f.Result, By: h.b.Registers.professionOf(f.By), ByRecorded: f.By != ""}
 		for _, ear := range []string{"left", "right"} {
 			if f.Ear == ear || f.Ear == "both" || f.Ear == "" {
 				r.Ears = append(r.Ears, ear)

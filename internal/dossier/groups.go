@@ -88,6 +88,7 @@ func (b *Builder) group(id string, u *Usage) *File {
 	if tasks := until(b.Registers.tasksOf[id], b.AsOf, func(t *record.Task) Date { return t.Date }); len(tasks) > 0 {
 		d.TaskDay = link(refs, tasks[0], tasks[0].Date)
 	}
+	d.Evaluations = b.evaluations(d, refs)
 	b.changes(d, refs)
 	d.Controls = []Control{}
 	for _, c := range b.Registers.controlsOf(id, d.Area, b.AsOf) {
@@ -122,7 +123,7 @@ func (b *Builder) documents(file *File, fits func(*record.Document) bool) []Docu
 		}
 		d := Document{
 			Link: *link(file.Refs, doc, doc.Date), Type: doc.Type, Covers: emptyNotNil([]string(doc.Covers)),
-			ReviewedOn: b.past(doc.ReviewedOn), PostedOn: b.past(doc.PostedOn), PostedTo: doc.PostedTo,
+			ReviewedOn: b.past(doc.ReviewedOn), PostedOn: b.past(doc.PostedOn), PostedTo: doc.PostedTo, PostUntil: b.postUntil(doc),
 		}
 		out = append(out, d)
 		name := documentSeries + doc.Type
@@ -148,7 +149,7 @@ func (b *Builder) measurements(id string, rows []*record.Measurement, refs Refs)
 		first := rows[0]
 		m := Measurement{
 			Link: *link(refs, first, first.Date), ID: first.MeasurementID, Type: first.Type, FullShift: first.FullShift,
-			Instrument: first.InstrumentID, ObserversInvited: first.ObserversInvited,
+			Instrument: first.InstrumentID, Doses: []DoseRange{}, ObserversInvited: first.ObserversInvited,
 		}
 		for _, row := range rows[:n] {
 			b.takeRow(&m, row, i)
@@ -172,7 +173,7 @@ func (b *Builder) takeRow(m *Measurement, row *record.Measurement, channel int) 
 		if !m.Dosed || row.ThresholdDB.Known && (!m.Threshold.Known || row.ThresholdDB.Value < m.Threshold.Value) {
 			m.Threshold, m.Upper = row.ThresholdDB, row.UpperDB
 		}
-		m.Dosed = true
+		m.Dosed, m.Doses = true, append(m.Doses, DoseRange{row.ThresholdDB, row.UpperDB})
 	}
 	if row.MaxDBA.Known && (!m.MaxDBA.Known || row.MaxDBA.Value > m.MaxDBA.Value) {
 		m.MaxDBA = row.MaxDBA
@@ -187,6 +188,9 @@ func (b *Builder) takeRow(m *Measurement, row *record.Measurement, channel int) 
 	}
 	if row.LAeqDBA.Known {
 		m.Levelled = true
+	}
+	if row.Method != "" {
+		m.Method = row.Method
 	}
 	if row.ObserversInvited != record.Unanswered {
 		m.ObserversInvited = row.ObserversInvited
@@ -229,6 +233,7 @@ func (b *Builder) changes(d *Group, refs Refs) {
 				change.Enrolling = true
 			}
 		}
+		change.PeriodEnds, change.PeriodShort = b.periodOf(d.Evaluations, c.Date)
 		d.Changes = append(d.Changes, change)
 	}
 }
@@ -249,9 +254,10 @@ func (b *Builder) covers(doc *record.Document, d *Group) bool {
 func (b *Builder) SiteDossier(u *Usage) *File {
 	refs := NewRefs()
 	d := &Site{
-		Common: b.common(b.Place.ID), Workers: u.Workers, EnrolledNow: u.EnrolledNow, EnrolledEver: u.Enrolled,
+		Common: b.common(b.Place.ID), Workers: u.Workers, EnrolledNow: u.EnrolledNow, EnrolledEver: u.Enrolled, LevelsNow: slices.AppendSeq([]string{}, maps.Keys(u.levelsNow)),
 		MissingMeasurements: []Dangling{}, Documents: []Document{}, LogYears: []LogYear{},
 	}
+	slices.Sort(d.LevelsNow)
 	seen := map[string]bool{}
 	for _, id := range b.groupIDs(u) {
 		for _, m := range b.measurementsOf(u, id) {

@@ -45,8 +45,10 @@ type Audiogram struct {
 	Mobile            record.Answer `json:"mobile" doc:"made in a mobile test van"`
 	EarsWithResult    int           `json:"ears_with_result" doc:"number of ears with any result"`
 	// Schemes has one entry for each of the other schemes of the bundle's measures.
-	Schemes map[string]Judged `json:"schemes" doc:"what the other schemes of the bundle say of the test"`
-	Hearing *Hearing          `json:"hearing" doc:"the audiometric figures of the comparison; null if the test is not to be compared, or figures are not shown"`
+	BaselineLeft  string            `json:"baseline_left" doc:"reference of the audiogram in force as the left ear's baseline when a later test was made; null for others"`
+	BaselineRight string            `json:"baseline_right" doc:"the same of the right ear"`
+	Schemes       map[string]Judged `json:"schemes" doc:"what the other schemes of the bundle say of the test"`
+	Hearing       *Hearing          `json:"hearing" doc:"the audiometric figures of the comparison; null if the test is not to be compared, or figures are not shown"`
 }
 
 // Judged says what a scheme finds in the ears of one test.
@@ -147,6 +149,7 @@ type Revision struct {
 	Ears       []string `json:"ears" doc:"ears whose baseline was moved"`
 	Unfounded  []string `json:"unfounded" doc:"ears moved that show neither a shift nor an improvement"`
 	Undecided  []string `json:"undecided" doc:"ears moved whose thresholds allow no comparison"`
+	Result     string   `json:"result" doc:"why the baseline was moved, such as persistent, improved or new_baseline; null if not recorded"`
 	By         string   `json:"by" doc:"profession of who decided; null if not known"`
 	ByRecorded bool     `json:"by_recorded" doc:"whether the record names who decided"`
 	Hearing    Hearing  `json:"hearing" doc:"the audiometric figures"`

@@ -18,6 +18,8 @@ type Measures struct {
 	Protection ProtectionMeasures `json:"protection" doc:"how the attenuation of protectors is estimated"`
 	Training   TrainingMeasures   `json:"training" doc:"how training sessions are taken together"`
 
+	Documents DocumentMeasures `json:"documents,omitzero" doc:"how long evaluations hold and reports are posted, for a law that sets such times"`
+
 	WorkingDays *WorkingDays `json:"working_days,omitempty" doc:"which days are working days, for a law that counts in them"`
 }
 
@@ -69,6 +71,8 @@ type ExposureMeasures struct {
 	Strategy string               `json:"strategy,omitempty" enum:"job|full_day" doc:"how samples were taken, where several is sampled (ISO 9612): over jobs or over full days"`
 	Decision string               `json:"decision,omitempty" enum:"best|upper|zones" doc:"what of an uncertain level is compared: the best estimate, its upper limit, or three zones, of which the middle one decides nothing; the best estimate if left out"`
 	Note     string               `json:"note,omitempty" doc:"reading of the law behind these choices"`
+
+	NoticeLasts string `json:"notice_lasts,omitempty" doc:"parameter: time for which a written notice of an exposure spares another one of an exposure at the same levels"`
 }
 
 // The kinds of channels.
@@ -146,7 +150,9 @@ type HearingMeasures struct {
 // test that shows it.
 type ShiftMeasure struct {
 	audiometry.Scheme
-	Retest string `json:"retest" doc:"parameter: time within which a retest may stand in for the test"`
+	Retest     string `json:"retest" doc:"parameter: time within which a retest may stand in for the test"`
+	RetestFrom string `json:"retest_from,omitempty" enum:"test|received" doc:"day on which that time begins: the test, or the day on which the employer received its result; the test if left out"`
+	RetestOnce bool   `json:"retest_once,omitempty" doc:"whether only the first retest may stand in for the test"`
 }
 
 // RecordMeasure is the hearing level of the recording rule, over the frequencies of the shift.

@@ -23,6 +23,7 @@ type Group struct {
 	Unknown        map[string][]Open  `json:"exposure_unknown" doc:"stretches in which it is not known whether the level is reached, with the reason"`
 	Changes        []Change           `json:"changes" doc:"changes of production, process, equipment or controls, oldest first"`
 	Controls       []Control          `json:"controls" doc:"noise controls and studies of them, oldest first"`
+	Evaluations    []Evaluation       `json:"evaluations" doc:"documents of the kind that the bundle's measures call periodic, with the period of each, oldest first"`
 	Documents      []Document         `json:"documents" doc:"documents of the group, of its area, and of the whole site"`
 }
 
@@ -36,6 +37,8 @@ type Measurement struct {
 	Dosed            bool          `json:"dosed" doc:"whether a dose was taken with the criterion level and exchange rate of the bundle's enrolling channel"`
 	Threshold        record.Number `json:"threshold_db" doc:"integration threshold of that dose, dBA"`
 	Upper            record.Number `json:"upper_db" doc:"upper end of the range of that dose, dBA"`
+	Doses            []DoseRange   `json:"doses" doc:"range of each dose with these settings, in the order of the records"`
+	Method           string        `json:"method" doc:"slow, fast or integrating"`
 	MaxDBA           record.Number `json:"max_dba" doc:"highest continuous level, dBA slow"`
 	PeakDB           record.Number `json:"peak_db" doc:"peak sound pressure level, dB"`
 	PeakWeighting    string        `json:"peak_weighting" doc:"C, or Z for unweighted"`
@@ -52,16 +55,24 @@ type Measurement struct {
 	Repeated         bool          `json:"repeated" doc:"whether a later measurement gives the dose on the enrolling channel exactly"`
 }
 
+// DoseRange is the range of levels that a dose holds.
+type DoseRange struct {
+	Threshold record.Number `json:"threshold_db" doc:"integration threshold, dBA"`
+	Upper     record.Number `json:"upper_db" doc:"upper end of the range, dBA"`
+}
+
 // Change is a change that may alter exposure.
 type Change struct {
 	Link
-	ID         string `json:"id" doc:"id of the change"`
-	What       string `json:"what" doc:"what was changed"`
-	Raises     string `json:"raises_exposure" doc:"yes, no or unknown; null if not recorded"`
-	Identified Date   `json:"identified_on" doc:"day on which it was entered in the register"`
-	Measured   *Link  `json:"measured" doc:"the first measurement since the change"`
-	Evaluated  *Link  `json:"evaluated" doc:"the first evaluation of protector attenuation since the change"`
-	Enrolling  bool   `json:"enrolling" doc:"whether the group was at or above the level that enrols on that day, or has been found so since"`
+	ID          string        `json:"id" doc:"id of the change"`
+	What        string        `json:"what" doc:"what was changed"`
+	Raises      string        `json:"raises_exposure" doc:"yes, no or unknown; null if not recorded"`
+	Identified  Date          `json:"identified_on" doc:"day on which it was entered in the register"`
+	Measured    *Link         `json:"measured" doc:"the first measurement since the change"`
+	Evaluated   *Link         `json:"evaluated" doc:"the first evaluation of protector attenuation since the change"`
+	PeriodEnds  Date          `json:"period_ends" doc:"end of the period of the latest evaluation on or before that day: the day by which the next one is due or, if it was made earlier, its day"`
+	PeriodShort record.Answer `json:"period_short" doc:"whether that period ends sooner than the time that the bundle's measures name after the change"`
+	Enrolling   bool          `json:"enrolling" doc:"whether the group was at or above the level that enrols on that day, or has been found so since"`
 }
 
 // Control is a noise control or the study of one.
@@ -82,6 +93,7 @@ type Document struct {
 	ReviewedOn Date     `json:"reviewed_on" doc:"day of the latest review"`
 	PostedOn   Date     `json:"posted_on" doc:"day from which it was posted or otherwise made known"`
 	PostedTo   Date     `json:"posted_to" doc:"last day on which it was posted; null while it is"`
+	PostUntil  Date     `json:"post_until" doc:"last day of the time for which it is to stay posted, by the parameter that the bundle's measures name; null where they name none"`
 }
 
 // Site is the dossier of one site.
@@ -90,6 +102,7 @@ type Site struct {
 	Workers             int        `json:"workers" doc:"number of workers employed on the as-of day"`
 	EnrolledNow         int        `json:"enrolled_now" doc:"number of workers enrolled on the as-of day"`
 	EnrolledEver        int        `json:"enrolled_ever" doc:"number of workers ever enrolled"`
+	LevelsNow           []string   `json:"levels_now" doc:"names of the exposure levels of the bundle at or above which a worker is on the as-of day"`
 	Measurements        int        `json:"measurements" doc:"number of noise measurements of the site"`
 	LatestMeasurement   *Link      `json:"latest_measurement" doc:"the latest of them"`
 	MissingMeasurements []Dangling `json:"missing_measurements" doc:"measurements that other records refer to but that are not in the records"`

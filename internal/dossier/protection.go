@@ -34,6 +34,7 @@ func (b *Builder) protection(w *WorkerRecords, now *stretch, h *hearing, inform 
 	test := b.fit(p, w, issue, h, refs)
 	noise := b.noiseOf(now)
 	p.PlugsOffered, p.MuffsOffered, p.Class, p.Types = issue.PlugsOffered, issue.MuffsOffered, b.modelOf(issue.ProtectorID).Class, []string{}
+	p.Certificate, p.CertifiedTo = b.modelOf(issue.ProtectorID).Certificate, b.modelOf(issue.ProtectorID).CertifiedTo
 	for _, i := range held {
 		p.Types = append(p.Types, b.modelOf(i.ProtectorID).Type)
 	}

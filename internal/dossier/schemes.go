@@ -57,11 +57,12 @@ func (h *hearing) baselines(kind string, t *test) [2]*test {
 }
 
 // revised gives the baseline of each ear that is in force when a test is made: the first one, or the
-// audiogram that a decision before the test has put in its place, for improvement only if asked for.
+// audiogram that a decision before the test has put in its place, for improvement, or anew after a long absence,
+// only if asked for.
 func (h *hearing) revised(t *test, improvedOnly bool) [2]*test {
 	base := [2]*test{h.baseline, h.baseline}
 	for _, f := range h.follow {
-		if f.Type != "baseline_revision" || f.Date > t.rec.Date || improvedOnly && f.Result != "improved" {
+		if f.Type != "baseline_revision" || f.Date > t.rec.Date || improvedOnly && f.Result != "improved" && f.Result != "new_baseline" {
 			continue
 		}
 		to := h.find(f.AudiogramID)

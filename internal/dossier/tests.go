@@ -122,17 +122,28 @@ func (h *hearing) pairRetests() {
 		if !h.comparable(t) {
 			continue
 		}
-		within, ok := h.b.Law.Interval(h.b.Measures.Hearing.Shift.Retest, first.rec.Date)
+		begins := h.retestFrom(first)
+		within, ok := h.b.Law.Interval(h.b.Measures.Hearing.Shift.Retest, begins)
 		if !ok {
 			continue
 		}
-		if last, err := within.After(first.rec.Date, nil); err == nil && t.rec.Date <= last {
+		once := h.b.Measures.Hearing.Shift.RetestOnce && first.replacedBy != nil
+		if last, err := within.After(begins, nil); err == nil && t.rec.Date <= last && !once {
 			t.retestOf = first
 			first.replacedBy = t
 		} else {
 			first = t
 		}
 	}
+}
+
+// retestFrom gives the day on which the time for a retest begins. As long as the law counts from a receipt that is
+// not on record, that is not known, and no retest stands in for the test.
+func (h *hearing) retestFrom(first *test) Date {
+	if h.b.Measures.Hearing.Shift.RetestFrom == "received" {
+		return h.past(first.rec.ReceivedOn)
+	}
+	return first.rec.Date
 }
 
 // comparable says whether the test has every threshold that a comparison needs, in both ears.
@@ -232,6 +243,10 @@ func (h *hearing) audiograms(compared map[*test]*comparison, lacks func(*test) [
 			EarsWithResult: earsWithResult(t.rec), CannotCompare: []string{}, RecordLacks: lacks(t), Schemes: h.judged(t),
 		}
 		a.NotTested, a.NotRecorded = h.required(t.rec)
+		if t.later {
+			base := h.revised(t.original(), false)
+			a.BaselineLeft, a.BaselineRight = base[0].ref, base[1].ref
+		}
 		if h.b.Measures.Hearing.Afterwards {
 			a.FollowUps, a.Notices = h.afterwards(t)
 		}

@@ -17,6 +17,7 @@ type Usage struct {
 	Workers     int // employed on the as-of day
 	EnrolledNow int
 	Enrolled    int // ever
+	levelsNow   map[string]bool
 	audiometers map[string]*used
 	rooms       map[string]*used
 	testers     map[string]*used
@@ -65,7 +66,7 @@ func NewUsage() *Usage {
 	return &Usage{
 		audiometers: map[string]*used{}, rooms: map[string]*used{}, testers: map[string]*used{},
 		members: map[string]int{}, holders: map[string]int{}, loose: map[string][]*record.Measurement{},
-		logs: map[int]*logYear{}, missing: map[string]Dangling{}, missingRec: map[string]record.Record{},
+		levelsNow: map[string]bool{}, logs: map[int]*logYear{}, missing: map[string]Dangling{}, missingRec: map[string]record.Record{},
 	}
 }
 
@@ -87,6 +88,11 @@ func (u *Usage) Add(b *Builder, w *WorkerRecords, d *Worker) {
 	for _, s := range d.Enrolled {
 		if s.Current {
 			u.EnrolledNow++
+		}
+	}
+	for level, spells := range d.Exposed {
+		if !u.levelsNow[level] && slices.ContainsFunc(spells, func(s Spell) bool { return s.Current }) {
+			u.levelsNow[level] = true
 		}
 	}
 	u.addTests(b, w)

@@ -17,7 +17,7 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 		return nil
 	}
 	refs := NewRefs()
-	d := &Worker{Common: b.common(w.ID), Employed: b.spells(employed)}
+	d := &Worker{Common: b.common(w.ID), Employed: b.spells(employed), Absences: absences(employed)}
 	for _, e := range w.Employments {
 		if e.Site == b.Place.ID {
 			d.JobTitle, d.OnRoll = e.JobTitle, e.InProgram
@@ -51,6 +51,7 @@ func (b *Builder) Worker(w *WorkerRecords) *File {
 	d.Training, d.ProtectorTraining = b.training(w, refs)
 	series := b.workerSeries(w, h, enrolled, refs)
 	d.Examinations, d.Told = b.examinations(w, h, refs, series), b.told(w, refs)
+	d.Departures = b.departures(employed, series)
 	file := &File{Kind: KindWorker, ID: w.ID, Site: b.Place.ID, Input: d, Series: series, Refs: refs}
 	h.observe(file)
 	b.observeEmployment(file, w)
@@ -140,14 +141,15 @@ func (b *Builder) results(w *WorkerRecords, pieces []stretch, refs Refs) []Resul
 		seen[src], days[src.day] = true, true
 		r := Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: max(src.day, p.From)}
 		shown := b.channels.level(channel, &k)
-		r.Dose, r.LevelDBA = shown.DosePct, shown.LevelDBA
+		r.Dose, r.LevelDBA, r.Levels = shown.DosePct, shown.LevelDBA, b.levelsOf(p.on, r.Since)
 		out = append(out, r)
 	}
 	if b.Measures.Exposure.Several == "highest" {
 		out = b.otherResults(out, w, pieces, days, refs)
 	}
 	for i := range out {
-		out[i].Notice = b.resultNotice(w, &out[i], refs)
+		out[i].Notice, out[i].Written = b.resultNotice(w, &out[i], refs)
+		out[i].Before = b.toldBefore(out[:i], &out[i])
 	}
 	return out
 }
@@ -178,7 +180,7 @@ func (b *Builder) otherResults(out []Result, w *WorkerRecords, pieces []stretch,
 			}
 			days[r.day] = true
 			shown := b.channels.level(found.channel, &on[found.channel])
-			out = append(out, Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: src.day, Dose: shown.DosePct, LevelDBA: shown.LevelDBA})
+			out = append(out, Result{Ref: refs.Of(src.rec), ID: src.id, Date: src.day, Since: src.day, Dose: shown.DosePct, LevelDBA: shown.LevelDBA, Levels: b.levelsOf(on, r.day)})
 		}
 	}
 	slices.SortStableFunc(out, func(x, y Result) int { return int(x.Since) - int(y.Since) })
@@ -187,7 +189,7 @@ func (b *Builder) otherResults(out []Result, w *WorkerRecords, pieces []stretch,
 
 // resultNotice finds the notice of a result: one that names a measurement of that day, or names none and
 // was given since the result concerns the worker.
-func (b *Builder) resultNotice(w *WorkerRecords, r *Result, refs Refs) *Link {
+func (b *Builder) resultNotice(w *WorkerRecords, r *Result, refs Refs) (*Link, record.Answer) {
 	ids := []string{r.ID}
 	for _, a := range w.Assignments {
 		if h := b.histories[a.Group]; h != nil {
@@ -203,10 +205,10 @@ func (b *Builder) resultNotice(w *WorkerRecords, r *Result, refs Refs) *Link {
 			continue
 		}
 		if n.MeasurementID != "" && slices.Contains(ids, n.MeasurementID) || n.MeasurementID == "" && n.Date >= r.Since {
-			return link(refs, n, n.Date)
+			return link(refs, n, n.Date), n.Written
 		}
 	}
-	return nil
+	return nil, record.Unanswered
 }
 
 // recordLacks lists what the audiometric record of a test lacks of the contents that a law may ask for.
@@ -240,7 +242,7 @@ func (b *Builder) training(w *WorkerRecords, refs Refs) (*Training, *Link) {
 		return nil, nil
 	}
 	last := w.Trainings[len(w.Trainings)-1]
-	out := &Training{Link: *link(refs, last, last.Date), Topics: []string{}, Silent: true}
+	out := &Training{Link: *link(refs, last, last.Date), Topics: []string{}, Silent: true, Certified: last.Certified}
 	var protectors *Link
 	for _, s := range w.Trainings {
 		if s.Topics.Has("protectors") {

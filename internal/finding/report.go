@@ -75,10 +75,22 @@ type Bundle struct {
 	Title     string   `json:"title"`
 	Revision  string   `json:"revision"`
 	SHA256    string   `json:"sha256" doc:"digest of the bundle's files"`
+	Signature string   `json:"signature,omitempty" doc:"whether the bundle is built into the program (embedded), its signature was verified with a key (verified), it has one that no key was given for (not checked), or it has none (unsigned)"`
 	Kind      string   `json:"kind" doc:"law, guidance, practice or company"`
 	CheckedOn string   `json:"checked_on" doc:"day on which it was last held against the text"`
 	Cautions  []string `json:"cautions"`
 }
+
+// SignatureWords says of a bundle that is not built into the program what is known of its signature. Of one that is, it
+// says nothing.
+func SignatureWords(signature string) string {
+	return map[string]string{
+		"verified": "not embedded, signature verified", "not checked": "not embedded, signature not checked", "unsigned": "not embedded, unsigned",
+	}[signature]
+}
+
+// SignatureWords says what must be known of where the bundle comes from, if anything.
+func (b Bundle) SignatureWords() string { return SignatureWords(b.Signature) }
 
 // Input is one file of the ledger: rows read = accepted + rejected + not data.
 type Input = intake.Input

@@ -43,7 +43,6 @@ type SwitchSite struct {
 	Topics   []SwitchTopic    `json:"topics" doc:"the topics under which either side has a finding"`
 	Exposure []SwitchExposure `json:"exposure" doc:"groups whose exposure the new law cannot take from the records, once each"`
 	Acts     []SwitchAct      `json:"acts" doc:"what the new law asks to be done in a time that is over, and no record says that it was done"`
-	Kinds    []SwitchKind     `json:"kinds" doc:"kinds of record that the new law's open duties rest on and of which none was read"`
 	Needs    []SwitchNeed     `json:"needs" doc:"what else the records lack for the new law to be decided"`
 }
 
@@ -140,18 +139,23 @@ func (v *SwitchValue) Differs() bool {
 	return false
 }
 
-// SwitchExposure is a group whose exposure on a channel of the new law the records do not tell.
+// SwitchExposure is a group whose exposure the records do not tell as the new law takes it.
 type SwitchExposure struct {
-	Bundle  string   `json:"bundle"`
-	Group   string   `json:"group" doc:"id of the group; empty for workers in no group"`
-	Channel string   `json:"channel" doc:"how the new law takes exposure, by name"`
-	Taken   string   `json:"taken" doc:"the same in words"`
-	Levels  []string `json:"levels" doc:"levels of the new law of which it is not known whether they are reached"`
-	Enrols  bool     `json:"enrols" doc:"whether the level that enrols is among them"`
-	Workers int      `json:"workers" doc:"number of workers concerned, on whatever days"`
-	Now     int      `json:"now" doc:"number of them concerned on the as-of day"`
-	Before  int      `json:"before" doc:"number of them whose exposure the old law cannot tell either"`
-	Reasons []string `json:"reasons" doc:"why it is not known"`
+	Bundle  string          `json:"bundle"`
+	Group   string          `json:"group" doc:"id of the group; empty for workers in no group"`
+	Enrols  bool            `json:"enrols" doc:"whether it is not known whether the level that enrols is reached"`
+	Workers int             `json:"workers" doc:"number of workers concerned, on whatever days"`
+	Now     int             `json:"now" doc:"number of them concerned on the as-of day"`
+	Before  int             `json:"before" doc:"number of them whose exposure the old law cannot tell either"`
+	Wanted  []SwitchMeasure `json:"wanted" doc:"what has to be measured"`
+	Reasons []string        `json:"reasons" doc:"why it is not known"`
+}
+
+// SwitchMeasure is a channel of exposure, with the levels that are held against it.
+type SwitchMeasure struct {
+	Channel string   `json:"channel" doc:"its name; several where any of them can reach the level"`
+	Taken   string   `json:"taken" doc:"how exposure is taken, in words"`
+	Levels  []string `json:"levels" doc:"levels of which it is not known whether they are reached"`
 }
 
 // New says whether the old law knows the exposure of any of the workers.
@@ -164,14 +168,9 @@ type SwitchAct struct {
 	Title    string           `json:"title"`
 	Cite     string           `json:"cite"`
 	Evidence []string         `json:"evidence" doc:"kinds of record that prove it"`
+	Unread   []string         `json:"unread" doc:"those of these kinds of which no record was read at all"`
 	Subjects []SwitchSubjects `json:"subjects" doc:"the subjects for whom it is not done, by kind"`
 	Before   int              `json:"before" doc:"number of them for whom a duty of the same name of the old side is not done either"`
-}
-
-// SwitchKind is a kind of record of which none was read.
-type SwitchKind struct {
-	Kind   string             `json:"kind" doc:"kind of record"`
-	Duties []SwitchDutyNumber `json:"duties" doc:"duties that it proves, with the number of subjects for whom they are a gap or unproven"`
 }
 
 // SwitchNeed is a thing that the records lack for the new law to be decided.

@@ -87,7 +87,7 @@ func newSwitcher(j *Judged, at *Site) *switcher {
 
 func (s *switcher) site() SwitchSite {
 	out := SwitchSite{ID: s.at.ID, Name: s.at.Name, Workers: s.at.Workers, From: s.bundles[oldSide], To: s.bundles[newSide], Totals: s.numbers(""),
-		Topics: []SwitchTopic{}, Exposure: s.exposure(), Acts: s.acts(), Kinds: s.kinds(), Needs: s.needs()}
+		Topics: []SwitchTopic{}, Exposure: s.exposure(), Acts: s.acts(), Needs: s.needs()}
 	for _, topic := range Topics {
 		if len(s.findings[oldSide][topic])+len(s.findings[newSide][topic]) > 0 {
 			out.Topics = append(out.Topics, s.topic(topic))

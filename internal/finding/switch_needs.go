@@ -6,39 +6,51 @@ import (
 	"slices"
 )
 
+// exposed gathers what of the exposure of a group the new law cannot take from the records.
+type exposed struct {
+	SwitchExposure
+	levels             map[[2]string][]string // by channel and how it is taken
+	all, now, newcomer map[string]bool        // workers; those of the as-of day; those whose exposure the old law can tell
+}
+
 // exposure tells once a group what of its exposure the new law cannot take from the records.
 func (s *switcher) exposure() []SwitchExposure {
-	type key struct{ bundle, group, channel string }
-	type seen struct{ all, now, unknownBefore map[string]bool }
-	made, people := map[key]*SwitchExposure{}, map[key]seen{}
+	made := map[[2]string]*exposed{}
 	for _, list := range s.open[newSide] {
 		for _, u := range list {
-			k := key{u.Bundle, u.Group, u.Channel}
-			e := made[k]
-			if e == nil {
-				e = &SwitchExposure{Bundle: u.Bundle, Group: u.Group, Channel: u.Channel, Taken: u.Taken}
-				made[k], people[k] = e, seen{map[string]bool{}, map[string]bool{}, map[string]bool{}}
+			key := [2]string{u.Group, u.Bundle}
+			if made[key] == nil {
+				made[key] = &exposed{SwitchExposure{Bundle: u.Bundle, Group: u.Group}, map[[2]string][]string{}, map[string]bool{}, map[string]bool{}, map[string]bool{}}
 			}
-			e.Levels, e.Reasons, e.Enrols = append(e.Levels, u.Levels...), append(e.Reasons, u.Reasons...), e.Enrols || u.Enrols
-			people[k].all[u.Worker] = true
-			if u.Now {
-				people[k].now[u.Worker] = true
-			}
-			if u.Other {
-				people[k].unknownBefore[u.Worker] = true
-			}
+			made[key].take(u)
 		}
 	}
 	out := []SwitchExposure{}
-	for k, e := range made {
-		e.Workers, e.Now, e.Before = len(people[k].all), len(people[k].now), len(people[k].unknownBefore)
-		e.Levels, e.Reasons = distinct(e.Levels), distinct(e.Reasons)
-		out = append(out, *e)
+	for _, key := range slices.SortedFunc(maps.Keys(made), comparePairs) {
+		out = append(out, made[key].told())
 	}
-	slices.SortFunc(out, func(a, b SwitchExposure) int {
-		return cmp.Or(cmp.Compare(a.Group, b.Group), cmp.Compare(a.Bundle, b.Bundle), cmp.Compare(a.Channel, b.Channel))
-	})
 	return out
+}
+
+func (e *exposed) take(u *Unmeasured) {
+	channel := [2]string{u.Channel, u.Taken}
+	e.levels[channel] = append(e.levels[channel], u.Levels...)
+	e.Reasons, e.Enrols = append(e.Reasons, u.Reasons...), e.Enrols || u.Enrols
+	e.all[u.Worker] = true
+	if u.Now {
+		e.now[u.Worker] = true
+	}
+	if !u.Other {
+		e.newcomer[u.Worker] = true
+	}
+}
+
+func (e *exposed) told() SwitchExposure {
+	e.Workers, e.Now, e.Before, e.Reasons = len(e.all), len(e.now), len(e.all)-len(e.newcomer), distinct(e.Reasons)
+	for _, channel := range slices.SortedFunc(maps.Keys(e.levels), comparePairs) {
+		e.Wanted = append(e.Wanted, SwitchMeasure{channel[0], channel[1], distinct(e.levels[channel])})
+	}
+	return e.SwitchExposure
 }
 
 // distinct sorts words and leaves out repeats.
@@ -46,9 +58,6 @@ func distinct(list []string) []string {
 	slices.Sort(list)
 	return append([]string{}, slices.Compact(list)...)
 }
-
-// added says whether a finding is one of the new side alone.
-func (s *switcher) added(f *Finding) bool { return !slices.Contains(s.bundles[oldSide], f.Bundle) }
 
 // undone gives the subjects for whom no record of a side says that a duty was done, by bundle and duty.
 func (s *switcher) undone(k side) map[[2]string]map[Subject]bool {
@@ -79,9 +88,14 @@ func (s *switcher) acts() []SwitchAct {
 	}
 	out := []SwitchAct{}
 	for key, who := range s.undone(newSide) {
-		a := SwitchAct{Bundle: key[0], Duty: key[1], Evidence: []string{}, Subjects: s.subjects(who)}
+		a := SwitchAct{Bundle: key[0], Duty: key[1], Evidence: []string{}, Unread: []string{}, Subjects: s.subjects(who)}
 		if d := s.duties[key]; d != nil {
 			a.Title, a.Cite, a.Evidence = d.Title, d.Cite, append(a.Evidence, d.Evidence...)
+		}
+		for _, kind := range a.Evidence {
+			if s.Records[kind] == 0 {
+				a.Unread = append(a.Unread, kind)
+			}
 		}
 		for subject := range who {
 			if before[key[1]][subject] {
@@ -98,46 +112,6 @@ func (s *switcher) acts() []SwitchAct {
 
 // Number counts the subjects of all kinds.
 func (a *SwitchAct) Number() int { return numberOf(a.Subjects) }
-
-// kinds lists the kinds of record of which none was read, and which prove duties that are open on the new side.
-func (s *switcher) kinds() []SwitchKind {
-	type key struct {
-		kind string
-		duty [2]string
-	}
-	subjects := map[key]map[Subject]bool{}
-	for _, list := range s.findings[newSide] {
-		for _, f := range list {
-			duty := [2]string{f.Bundle, f.Duty}
-			d := s.duties[duty]
-			if d == nil || f.Status != Gap && f.Status != Unproven || !s.added(f) {
-				continue
-			}
-			for _, kind := range d.Evidence {
-				if s.Records[kind] > 0 {
-					continue
-				}
-				k := key{kind, duty}
-				if subjects[k] == nil {
-					subjects[k] = map[Subject]bool{}
-				}
-				subjects[k][f.Subject] = true
-			}
-		}
-	}
-	byKind := map[string]map[[2]string]*SwitchDutyNumber{}
-	for k, who := range subjects {
-		if byKind[k.kind] == nil {
-			byKind[k.kind] = map[[2]string]*SwitchDutyNumber{}
-		}
-		byKind[k.kind][k.duty] = &SwitchDutyNumber{Bundle: k.duty[0], Duty: k.duty[1], Cite: s.duties[k.duty].Cite, Number: len(who)}
-	}
-	out := []SwitchKind{}
-	for _, kind := range slices.Sorted(maps.Keys(byKind)) {
-		out = append(out, SwitchKind{kind, dutyNumbers(byKind[kind])})
-	}
-	return out
-}
 
 // lacking is a thing that the findings of a bundle lack, with what they are about.
 type lacking struct {

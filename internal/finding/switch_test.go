@@ -123,7 +123,7 @@ func TestSwitchExposureOnceAGroup(t *testing.T) {
 	j.Report.Findings = append(j.Report.Findings, stands("old", "roll", "enrolment", "X", Met), stands("new", "roll", "enrolment", "X", Unproven, missing("an exposure")))
 	j.Unmeasured = append(j.Unmeasured, Unmeasured{Site: "a", Bundle: "old", Worker: "X", Group: "other", Enrols: true, Now: true, EnrolsNow: true})
 	site := onlySite(t, j)
-	assert.Equal(t, []SwitchExposure{{Bundle: "new", Group: "press", Channel: "action", Taken: "a dose", Levels: []string{"action", "limit"}, Enrols: true, Workers: 20, Now: 19, Before: 3, Reasons: []string{"3 dB"}}},
+	assert.Equal(t, []SwitchExposure{{Bundle: "new", Group: "press", Enrols: true, Workers: 20, Now: 19, Before: 3, Wanted: []SwitchMeasure{{"action", "a dose", []string{"action", "limit"}}}, Reasons: []string{"3 dB"}}},
 		site.Exposure)
 	assert.True(t, site.Exposure[0].New())
 	assert.Equal(t, []SwitchNeed{{Bundle: "new", Lacks: "an exposure", Duties: []string{"roll"},
@@ -159,14 +159,21 @@ func TestSwitchNeeds(t *testing.T) {
 	}, onlySite(t, j).Needs)
 }
 
-// TestSwitchKinds: a kind of record of which there is none is named where it proves an open duty of the new law.
-func TestSwitchKinds(t *testing.T) {
-	j := judged(stands("new", "fit-test", "protectors", "1", Gap), stands("new", "fit-test", "protectors", "1", Gap), stands("new", "fit-test", "protectors", "2", Met),
-		stands("old", "posting", "information", "a", Gap, about("site", "a")))
-	j.Records["protector_issue"] = 4
-	assert.Equal(t, []SwitchKind{{"fit_test", []SwitchDutyNumber{{"new", "fit-test", "N 3", 1}}}}, onlySite(t, j).Kinds)
-	j.Records["fit_test"] = 1
-	assert.Empty(t, onlySite(t, j).Kinds)
+// TestSwitchActs: what no record shows to be done is told once a duty, with the kinds of record of which there is none.
+func TestSwitchActs(t *testing.T) {
+	undone := func(f *Finding) { f.Undone = true }
+	j := judged(stands("new", "fit-test", "protectors", "1", Gap, undone), stands("new", "fit-test", "protectors", "1", Gap, undone), stands("new", "fit-test", "protectors", "2", Met),
+		stands("new", "test", "audiometry", "1", Gap, undone), stands("new", "test", "audiometry", "2", Gap, undone), stands("old", "test", "audiometry", "1", Gap, undone),
+		stands("old", "posting", "information", "a", Gap, about("site", "a"), undone), stands("new", "roll", "enrolment", "1", Gap))
+	j.Records = map[string]int{"protector_issue": 4, "audiogram": 1}
+	j.Groups[[2]string{"a", "2"}] = "press"
+	worker := func(groups ...SwitchGroup) []SwitchSubjects {
+		return []SwitchSubjects{{"worker", len(groups), []string{}, groups}}
+	}
+	assert.Equal(t, []SwitchAct{
+		{"new", "fit-test", "Fit test", "N 3", []string{"fit_test", "protector_issue"}, []string{"fit_test"}, worker(SwitchGroup{"", 1}), 0},
+		{"new", "test", "Test", "N 1", []string{"audiogram"}, []string{}, worker(SwitchGroup{"", 1}, SwitchGroup{"press", 1}), 1},
+	}, onlySite(t, j).Acts)
 }
 
 // TestSwitchSharedBundle: a bundle of both sides is no news.
@@ -174,7 +181,6 @@ func TestSwitchSharedBundle(t *testing.T) {
 	j := judged(stands("new", "fit-test", "protectors", "1", Gap), stands("old", "test", "audiometry", "1", Met))
 	j.From["a"] = []string{"old", "new"}
 	site := onlySite(t, j)
-	assert.Empty(t, site.Kinds)
 	assert.Equal(t, map[Status]int{Gap: 1, Met: 1}, site.Totals.From)
 	assert.Equal(t, map[Status]int{Gap: 1}, site.Totals.To)
 	assert.Equal(t, 1, site.Topics[1].Same)

@@ -2,7 +2,9 @@ package judge
 
 import (
 	"context"
+	"errors"
 	"fmt"
+	"slices"
 	"strings"
 	"sync"
 	"time"
@@ -33,8 +35,13 @@ type Answer struct {
 	Err         error       // the rule failed
 }
 
-// evaluationLimit is the time that the rules of one subject may take. A rule that does not end is cut off.
-const evaluationLimit = 20 * time.Second
+// evaluationLimit is the time that the rules of one subject may take. A rule that does not end is cut off; tests shorten
+// it.
+var evaluationLimit = 20 * time.Second
+
+// mostCutOff is how often a duty may be cut off. After that it is not tried again, so that the whole takes a bounded
+// time, too: every further subject has the error at once.
+const mostCutOff = 3
 
 // stock is OPA's own evaluator: one prepared query a subject kind and, once a rule fails, one a duty.
 type stock struct {
@@ -43,8 +50,12 @@ type stock struct {
 	kinds  map[string]*kindQuery
 
 	mu     sync.Mutex
-	single map[string]rego.PreparedEvalQuery
+	single map[string]rego.PreparedEvalQuery // by id of the duty
+	cutOff map[string]int                    // how often a duty was cut off, by its id
 }
+
+// errTooLong says that rules were cut off.
+var errTooLong = errors.New("the rules took longer than they may")
 
 type kindQuery struct {
 	duties []*bundle.Duty
@@ -54,7 +65,7 @@ type kindQuery struct {
 // NewEngine prepares the rules of a bundle for OPA's stock evaluator.
 func NewEngine(ctx context.Context, b *bundle.Bundle) (Engine, error) {
 	store := inmem.NewFromObjectWithOpts(b.Data, inmem.OptReturnASTValuesOnRead(true))
-	s := &stock{bundle: b, store: store, kinds: map[string]*kindQuery{}, single: map[string]rego.PreparedEvalQuery{}}
+	s := &stock{bundle: b, store: store, kinds: map[string]*kindQuery{}, single: map[string]rego.PreparedEvalQuery{}, cutOff: map[string]int{}}
 	for _, d := range b.Duties {
 		q := s.kinds[d.Subject]
 		if q == nil {
@@ -91,20 +102,18 @@ func (s *stock) Evaluate(ctx context.Context, kind string, input ast.Value) ([]A
 	if q == nil {
 		return nil, nil
 	}
-	answers, err := run(ctx, q.query, q.duties, input)
-	if err == nil {
-		return answers, nil
-	}
-	if ctx.Err() != nil {
-		return nil, ctx.Err()
-	}
-	answers = nil
-	for _, d := range q.duties {
-		var one []Answer
-		query, err := s.singleQuery(ctx, d)
+	if !s.anyGivenUp(q.duties) {
+		answers, err := run(ctx, q.query, q.duties, input)
 		if err == nil {
-			one, err = run(ctx, query, []*bundle.Duty{d}, input)
+			return answers, nil
 		}
+		if ctx.Err() != nil {
+			return nil, ctx.Err()
+		}
+	}
+	var answers []Answer
+	for _, d := range q.duties {
+		one, err := s.alone(ctx, d, input)
 		if ctx.Err() != nil {
 			return nil, ctx.Err()
 		}
@@ -115,6 +124,34 @@ func (s *stock) Evaluate(ctx context.Context, kind string, input ast.Value) ([]A
 	}
 	return answers, nil
 }
+
+// alone evaluates one duty, unless it was cut off too often.
+func (s *stock) alone(ctx context.Context, d *bundle.Duty, input ast.Value) ([]Answer, error) {
+	if s.anyGivenUp([]*bundle.Duty{d}) {
+		return nil, tooLong()
+	}
+	query, err := s.singleQuery(ctx, d)
+	if err != nil {
+		return nil, err
+	}
+	answers, err := run(ctx, query, []*bundle.Duty{d}, input)
+	if errors.Is(err, errTooLong) {
+		s.mu.Lock()
+		defer s.mu.Unlock()
+		s.cutOff[d.ID]++
+		return nil, tooLong()
+	}
+	return answers, err
+}
+
+// anyGivenUp says whether one of the duties is not tried any more.
+func (s *stock) anyGivenUp(duties []*bundle.Duty) bool {
+	s.mu.Lock()
+	defer s.mu.Unlock()
+	return len(s.cutOff) > 0 && slices.ContainsFunc(duties, func(d *bundle.Duty) bool { return s.cutOff[d.ID] >= mostCutOff })
+}
+
+func tooLong() error { return fmt.Errorf("the rules took longer than %s", evaluationLimit) }
 
 // singleQuery prepares the query of one duty the first time that it is needed.
 func (s *stock) singleQuery(ctx context.Context, d *bundle.Duty) (rego.PreparedEvalQuery, error) {
@@ -137,7 +174,7 @@ func run(ctx context.Context, query rego.PreparedEvalQuery, duties []*bundle.Dut
 	results, err := query.Eval(ctx, rego.EvalParsedInput(input), rego.EvalExternalCancel(cancel))
 	if err != nil {
 		if topdown.IsCancel(err) {
-			err = fmt.Errorf("the rules took longer than %s", evaluationLimit)
+			err = errTooLong
 		}
 		return nil, err
 	}

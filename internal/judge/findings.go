@@ -224,7 +224,7 @@ func (c *check) report() *finding.Report {
 			r.Remarks = append(r.Remarks, d.String())
 		}
 		r.Bundles = append(r.Bundles, finding.Bundle{
-			ID: b.ID, Title: b.About.Title, Revision: b.Revision, SHA256: b.SHA256, Kind: b.About.Kind,
+			ID: b.ID, Title: b.About.Title, Revision: b.Revision, SHA256: b.SHA256, Signature: b.Signature, Kind: b.About.Kind,
 			CheckedOn: b.About.CheckedOn, Cautions: b.About.Cautions,
 		})
 	}

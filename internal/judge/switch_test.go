@@ -126,12 +126,12 @@ func switched(t *testing.T, files map[string]string, from, to string, laws ...*b
 func TestSwitchNeedsAnotherExchangeRate(t *testing.T) {
 	s := switched(t, pressShop(), "", "five", law(t, "three", threeDB), law(t, "five", fiveDB))
 	site := s.Sites[0]
-	const taken = "a dose with criterion level 90 dBA, 5 dB exchange rate, from 80 dBA on"
+	wanted := []finding.SwitchMeasure{{Channel: "action", Taken: "a dose with criterion level 90 dBA, 5 dB exchange rate, from 80 dBA on", Levels: []string{"action"}}}
 	const reason = "the dose was taken with criterion level 85 dBA and 3 dB exchange rate, not 90 dBA and 5 dB; it cannot be converted"
 	assert.Equal(t, []finding.SwitchExposure{
-		{Bundle: "five", Group: "", Channel: "action", Taken: taken, Levels: []string{"action"}, Enrols: true, Workers: 1, Now: 1, Reasons: []string{reason}},
-		{Bundle: "five", Group: "press", Channel: "action", Taken: taken, Levels: []string{"action"}, Enrols: true, Workers: 6, Now: 5, Reasons: []string{reason}},
-		{Bundle: "five", Group: "yard", Channel: "action", Taken: taken, Levels: []string{"action"}, Enrols: true, Workers: 1, Now: 1, Before: 1, Reasons: []string{"there is no full-shift measurement"}},
+		{Bundle: "five", Group: "", Enrols: true, Workers: 1, Now: 1, Wanted: wanted, Reasons: []string{reason}},
+		{Bundle: "five", Group: "press", Enrols: true, Workers: 6, Now: 5, Wanted: wanted, Reasons: []string{reason}},
+		{Bundle: "five", Group: "yard", Enrols: true, Workers: 1, Now: 1, Before: 1, Wanted: wanted, Reasons: []string{"there is no full-shift measurement"}},
 	}, site.Exposure)
 	assert.Empty(t, site.Needs, "what is lacking of exposure is told by group")
 
@@ -228,6 +228,6 @@ func TestSwitchNeedsAnotherWeighting(t *testing.T) {
 	neither, press := site.Exposure[0], site.Exposure[1]
 	assert.Equal(t, "", neither.Group)
 	assert.False(t, neither.New())
-	assert.Equal(t, finding.SwitchExposure{Bundle: "weighted", Group: "press", Channel: "action", Taken: "the highest C-weighted peak", Levels: []string{"action"}, Enrols: true,
-		Workers: 6, Now: 5, Reasons: []string{"the peak level was taken with weighting Z, not C"}}, press)
+	assert.Equal(t, finding.SwitchExposure{Bundle: "weighted", Group: "press", Enrols: true, Workers: 6, Now: 5,
+		Wanted: []finding.SwitchMeasure{{Channel: "action", Taken: "the highest C-weighted peak", Levels: []string{"action"}}}, Reasons: []string{"the peak level was taken with weighting Z, not C"}}, press)
 }

@@ -160,8 +160,8 @@ type FollowUp struct {
 	AudiogramID string `field:"audiogram_id" doc:"audiogram that it follows from"`
 	Ear         string `field:"ear,one=left|right|both" doc:"ear concerned"`
 	Date        Date   `field:"date,required" doc:"day on which it was done or decided"`
-	Type        string `field:"kind,required,like=fitting|refitting|retraining|referral|referral_decision|medical_opinion|persistence_opinion|baseline_revision|invalidated|log_entry|log_removal|authority_report|protector_choice|controls_reviewed|assessment_reviewed|measures_reviewed|alternative_work|group_reviewed|worker_informed|history_forwarded|damage_found|damage_examined|damage_opinion" doc:"what was done or decided"`
-	Result      string `field:"result,like=work_related|not_work_related|persistent|not_persistent|improved|referral_needed|no_referral_needed" doc:"the outcome"`
+	Type        string `field:"kind,required,like=fitting|refitting|retraining|referral|referral_decision|medical_opinion|persistence_opinion|baseline_revision|invalidated|log_entry|log_removal|authority_report|protector_choice|controls_reviewed|assessment_reviewed|measures_reviewed|alternative_work|group_reviewed|worker_informed|history_forwarded|damage_found|damage_examined|damage_opinion|protector_unsuitable|evaluation_results" doc:"what was done or decided"`
+	Result      string `field:"result,like=work_related|not_work_related|persistent|not_persistent|improved|referral_needed|no_referral_needed|new_baseline|retest_possible|retest_not_possible" doc:"the outcome"`
 	By          string `field:"by" doc:"id, or qualification, of the person who did or decided it"`
 }
 
@@ -173,6 +173,8 @@ type Training struct {
 	Topics   List   `field:"topics,like=noise_effects|protectors|audiometry|limit_values|assessment_results|damage_reporting|health_surveillance|safe_practices|measures|collective_results|law_in_general|noise_controls|medical_advice" doc:"topics covered, separated by semicolons"`
 	Language string `field:"language" doc:"language of the session"`
 	By       string `field:"by" doc:"id of the trainer"`
+
+	Certified Answer `field:"certified" doc:"whether the employer certified date and type of the session in writing"`
 }
 
 // Protector is a model of hearing protector with its label and laboratory values.
@@ -188,6 +190,8 @@ type Protector struct {
 	L           Number   `field:"l,min=0,max=50" doc:"low-frequency attenuation value, dB"`
 	SLC80       Number   `field:"slc80,min=0,max=50" doc:"sound level conversion for 80 % of wearers, dB"`
 	Class       string   `field:"class" doc:"class or grade of the label"`
+	Certificate string   `field:"certificate" doc:"number of the certificate of approval, where the law asks for one, such as the CA of Brazil"`
+	CertifiedTo Date     `field:"certified_to" doc:"last day of validity of that certificate; empty where it is not limited"`
 	Mean        *Octaves `field:"mean,min=-10,max=80" doc:"mean attenuation in the octave band, dB"`
 	SD          *Octaves `field:"sd,min=0,max=30" doc:"standard deviation of the attenuation in the octave band, dB"`
 }
@@ -283,7 +287,7 @@ type Tester struct {
 // Document is a paper or file that attests a duty.
 type Document struct {
 	Meta
-	Type       string `field:"kind,required,like=written_program|standard_posted|risk_assessment|control_programme|zone_signs|access_to_records|health_surveillance|protectors_available|attenuation_evaluation|area_sampling_equivalent|noise_records|injury_log|hearing_conservation_programme|monitoring_system|noise_measurement_report|noise_evaluation|means_register|noise_register|purchase_file|zone_plan|access_restriction|protector_selection|protector_maintenance|consultation|competence|surveillance_arrangement|health_records|records_kept|controls_posted|weekly_permission|exemption|rest_facilities|sensitive_workers|warning_signals|annual_report|analytical_report|calculator|schedule|booth_certificate|logbook|designation|protectors_on_request|limit_exceeded|transfer|confidentiality|instruction|advice" doc:"what it attests"`
+	Type       string `field:"kind,required,like=written_program|standard_posted|risk_assessment|control_programme|zone_signs|access_to_records|health_surveillance|protectors_available|attenuation_evaluation|area_sampling_equivalent|noise_records|injury_log|hearing_conservation_programme|monitoring_system|noise_measurement_report|noise_evaluation|means_register|noise_register|purchase_file|zone_plan|access_restriction|protector_selection|protector_maintenance|consultation|competence|surveillance_arrangement|health_records|records_kept|controls_posted|weekly_permission|exemption|rest_facilities|sensitive_workers|warning_signals|annual_report|analytical_report|calculator|schedule|booth_certificate|logbook|designation|protectors_on_request|limit_exceeded|transfer|confidentiality|instruction|advice|test_procedure" doc:"what it attests"`
 	Site       string `field:"site" doc:"site that it covers"`
 	Area       string `field:"area" doc:"area that it covers"`
 	Group      string `field:"group" doc:"group that it covers"`

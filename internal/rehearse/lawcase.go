@@ -4,6 +4,8 @@ import (
 	"bytes"
 	"fmt"
 	"path"
+	"regexp"
+	"strconv"
 	"strings"
 
 	"gopkg.in/yaml.v3"
@@ -95,9 +97,24 @@ func strictly(text []byte, into any) error {
 	return decoder.Decode(into)
 }
 
+// yamlLine is what the YAML reader says of one line; unknownKey and otherKind are how it names what it reads into.
+var (
+	yamlLine   = regexp.MustCompile(`line (\d+): (.*)`)
+	unknownKey = regexp.MustCompile(`^field (.*) not found in type .*$`)
+	otherKind  = regexp.MustCompile(`^cannot unmarshal (.*) into .*$`)
+)
+
+// yamlFailure tells what is wrong with a YAML file, line by line.
 func (r *Result) yamlFailure(file string, err error) {
-	r.Failures = append(r.Failures, Failure{At: diag.Position{File: file}, What: "the YAML cannot be read", Actual: strings.TrimPrefix(err.Error(), "yaml: "),
-		Remedy: "Check the keys and the indentation"})
+	lines := yamlLine.FindAllStringSubmatch(err.Error(), -1)
+	if len(lines) == 0 {
+		lines = [][]string{{"", "0", strings.TrimPrefix(err.Error(), "yaml: ")}}
+	}
+	for _, m := range lines {
+		row, _ := strconv.Atoi(m[1])
+		what := otherKind.ReplaceAllString(unknownKey.ReplaceAllString(m[2], "the key $1 is not known here"), "$1 cannot stand here")
+		r.Failures = append(r.Failures, Failure{At: diag.Position{File: file, Line: row}, What: "the law cases cannot be read: " + what, Remedy: "Check the key, its value and the indentation"})
+	}
 }
 
 // records puts the records of a case behind those that it takes in by like, and reads them.

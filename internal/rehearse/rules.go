@@ -43,7 +43,7 @@ func (r *Result) rules(ctx context.Context, o Options) error {
 func (r *Result) stock() {
 	own := fstest.MapFS{}
 	for file, text := range r.Bundle.Files {
-		if rel, ok := strings.CutPrefix(file, r.Bundle.ID+"/"); ok && !opabundle.IsSignaturesFile(rel) {
+		if rel, ok := strings.CutPrefix(file, r.Bundle.ID+"/"); ok {
 			own[rel] = &fstest.MapFile{Data: text}
 		}
 	}

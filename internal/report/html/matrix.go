@@ -22,10 +22,12 @@ type matrixRow struct {
 // matrixCell has the numbers of the statuses that ask for something, the most urgent first, and of the rest.
 type matrixCell struct {
 	Topic  string
+	Bundle string // in the tables of bundles side by side
 	Worst  finding.Status
 	Number int // of the worst status
 	More   int // of the other statuses that ask for something
-	Words  string
+	Words  string // all statuses with their numbers
+	Rest   string // the same without the worst
 	Listed bool // whether the register lists any of them
 }
 
@@ -79,8 +81,53 @@ func cellOf(topic string, n map[finding.Status]int) matrixCell {
 			c.More += n[s]
 		}
 	}
-	c.Words = strings.Join(words, ", ")
+	c.Words, c.Rest = strings.Join(words, ", "), strings.Join(words[min(1, len(words)):], ", ")
 	return c
+}
+
+// linedUp is how a site that several bundles judge stands under each topic by each of them.
+type linedUp struct {
+	Site finding.Site
+	Rows []linedRow
+}
+
+type linedRow struct {
+	Topic string
+	Cells []matrixCell // one a bundle
+}
+
+// lineUp puts the bundles of each site that has several side by side.
+func (v *page) lineUp(findings []finding.Finding) {
+	numbers, listed := map[[3]string]map[finding.Status]int{}, map[[3]string]bool{}
+	for _, c := range v.R.Counts {
+		key := [3]string{c.Site, c.Bundle, c.Topic}
+		if numbers[key] == nil {
+			numbers[key] = map[finding.Status]int{}
+		}
+		numbers[key][c.Status] += c.Number
+	}
+	for i := range findings {
+		listed[[3]string{findings[i].Site, findings[i].Bundle, findings[i].Topic}] = true
+	}
+	for _, s := range v.R.Sites {
+		if len(s.Bundles) < 2 {
+			continue
+		}
+		at := linedUp{Site: s}
+		for _, topic := range v.Matrix.Topics {
+			row, some := linedRow{Topic: topic}, false
+			for _, bundle := range s.Bundles {
+				key := [3]string{s.ID, bundle, topic}
+				c := cellOf(topic, numbers[key])
+				c.Bundle, c.Listed = bundle, listed[key]
+				row.Cells, some = append(row.Cells, c), some || c.Worst != ""
+			}
+			if some {
+				at.Rows = append(at.Rows, row)
+			}
+		}
+		v.Lined = append(v.Lined, at)
+	}
 }
 
 // sheetLine is a line of the sign-off sheet.

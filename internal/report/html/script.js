@@ -108,7 +108,8 @@
       if (was) tr.nextSibling.remove(); else tr.after(details(l));
     });
     what.append(el("span", W[l.m], "msg"));
-    tr.append(el("td", W[l.c]));
+    const cite = tr.appendChild(el("td", W[l.c]));
+    if (D.several) cite.append(el("small", W[l.b]));
     return tr;
   }
   const escaped = (id) => id.replaceAll("~", "~0").replaceAll("/", "~1");

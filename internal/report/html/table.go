@@ -102,7 +102,8 @@ type dutyLine struct {
 }
 
 type data struct {
-	Says     string           `json:"says"` // how many findings are listed, and which
+	Says     string           `json:"says"`              // how many findings are listed, and which
+	Several  bool             `json:"several,omitempty"` // whether each finding says under which bundle it stands
 	Statuses []finding.Status `json:"statuses"`
 	Words    []string         `json:"words"`
 	Duties   []dutyLine       `json:"duties"`
@@ -110,8 +111,8 @@ type data struct {
 }
 
 // data gives the register as JSON. The encoder writes <, > and & in a form that cannot end the script.
-func (t *table) data(findings []finding.Finding, says string) (template.JS, error) {
-	d := data{Says: says, Statuses: finding.Statuses, Duties: []dutyLine{}, Lines: make([]line, 0, len(findings))}
+func (t *table) data(findings []finding.Finding, says string, several bool) (template.JS, error) {
+	d := data{Says: says, Several: several, Statuses: finding.Statuses, Duties: []dutyLine{}, Lines: make([]line, 0, len(findings))}
 	at := map[[4]string]int{}
 	dutyAt := func(f *finding.Finding) int {
 		key := [4]string{f.Bundle, f.Duty, f.Topic, f.Severity}

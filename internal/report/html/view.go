@@ -20,6 +20,7 @@ type page struct {
 	Health   bool
 	Statuses []statusCount
 	Matrix   matrix
+	Lined    []linedUp
 	Soon     []horizon
 	Cut      int // findings left out
 	First    []row
@@ -54,6 +55,7 @@ func view(r *finding.Report) (*page, error) {
 	v.Listed = len(findings)
 	v.statuses(findings)
 	v.matrixOf(findings)
+	v.lineUp(findings)
 	v.subjects(findings)
 	v.soon()
 	v.memory()
@@ -70,7 +72,7 @@ func view(r *finding.Report) (*page, error) {
 	t := newTable(r, v.titles)
 	v.First = t.first(findings, 50)
 	var err error
-	v.Data, err = t.data(findings, v.Says())
+	v.Data, err = t.data(findings, v.Says(), v.Several())
 	return v, err
 }
 
@@ -113,6 +115,9 @@ func (v *page) statuses(findings []finding.Finding) {
 
 // Title gives the title of a finding's duty.
 func (v *page) Title(f *finding.Finding) string { return v.titles.Of(f) }
+
+// Several says whether findings stand under several bundles, so that each must say under which.
+func (v *page) Several() bool { return len(v.R.Bundles) > 1 }
 
 // Says says how many findings the page lists, and which.
 func (v *page) Says() string {

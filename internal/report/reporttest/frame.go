@@ -20,8 +20,8 @@ func frame() *finding.Report {
 			{ID: "larch-street", Bundles: []string{law}, Workers: 1},
 		},
 		Bundles: []finding.Bundle{
-			{ID: law, Title: "United States, federal OSHA, general industry", Revision: "2026-12-01", SHA256: strings.Repeat("ab", 32), Kind: "law", CheckedOn: "2026-12-01", Cautions: []string{"State plans may ask for more."}},
-			{ID: company, Title: "Quieter than the law", Revision: "3", Kind: "company", CheckedOn: "2026-01-01"},
+			{ID: law, Title: "United States, federal OSHA, general industry", Revision: "2026-12-01", SHA256: strings.Repeat("ab", 32), Signature: "embedded", Kind: "law", CheckedOn: "2026-12-01", Cautions: []string{"State plans may ask for more."}},
+			{ID: company, Title: "Quieter than the law", Revision: "3", Signature: "unsigned", Kind: "company", CheckedOn: "2026-01-01"},
 		},
 		Inputs: []finding.Input{
 			{File: "records/audiograms.csv", Kind: "audiogram", SHA256: strings.Repeat("cd", 32), Rows: 413, Accepted: 411, Rejected: 1, NotData: 1, Records: 411},

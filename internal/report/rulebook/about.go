@@ -3,6 +3,7 @@ package rulebook
 import (
 	"strings"
 
+	"hearduty/internal/bundle"
 	"hearduty/internal/report/phrase"
 )
 
@@ -12,6 +13,14 @@ var kinds = map[string]string{
 	"guidance": "guidance: an authority recommends it as a way to comply; it does not bind by itself",
 	"practice": "practice: what a professional body or a standard recommends; it binds nobody unless a law, a contract or the employer says so",
 	"company":  "company: a standard that a company sets for itself; a finding under it is no breach of the law",
+}
+
+// signatures says what is known of a bundle's signature.
+var signatures = map[string]string{
+	bundle.SignatureEmbedded:   "none is needed: the bundle is built into the program",
+	bundle.SignatureVerified:   "it fits the key that was given",
+	bundle.SignatureNotChecked: "there is one, but no key to check it with was given",
+	bundle.SignatureNone:       "the bundle is not signed",
 }
 
 func (m *maker) head() []Row {
@@ -24,18 +33,18 @@ func (m *maker) head() []Row {
 	if !ok {
 		kind = a.Kind
 	}
-	return rows(
+	return append(rows(
 		row("Bundle", m.ID),
 		row("Authority", a.Authority),
 		row("Country", where),
 		row("Kind", kind),
-		row("Extends", with(strings.Join(m.Extends, ", "), ": what they ask holds here, too, unless this bundle says otherwise")),
+		row("Extends", with(strings.Join(m.Extends, ", "), ": what is asked there holds here, too, unless this bundle says otherwise")),
 		row("Drops", with(strings.Join(a.Drops, ", "), ": asked by a bundle that is extended, but not here")),
 		row("Judges from", a.InForce),
 		row("Checked on", with(a.CheckedOn, ", the day on which it was last held against the text")),
 		row("Shown as of", with(m.day.String(), ": the numbers are those in force on that day")),
 		row("Revision", m.Revision),
-	)
+	), m.rest(*a)...)
 }
 
 // with adds words to a text, unless there is none.

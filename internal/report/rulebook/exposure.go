@@ -29,23 +29,25 @@ func (m *maker) exposure() Section {
 		row("Strategy", map[string]string{"job": "samples are taken over jobs (ISO 9612)", "full_day": "samples are taken over full days (ISO 9612)"}[e.Strategy]),
 		row("Uncertain levels", uncertain(e)),
 		Row{"Margins", m.margins()},
+		row("Notices", m.noticeLasts()),
 		row("Note", phrase.Sentence(e.Note)),
 	)}
+	s.Rows = append(s.Rows, m.rest(e)...)
 	levels := Section{Title: fmt.Sprintf("Exposure levels (%d)", len(e.Levels))}
 	for _, name := range slices.Sorted(maps.Keys(e.Levels)) {
 		enrols := ""
 		if name == e.Enrols {
 			enrols = "whoever reaches it belongs in the program, and the duties for workers in the program begin"
 		}
-		levels.Entries = append(levels.Entries, Entry{Title: name, Rows: rows(
+		levels.Entries = append(levels.Entries, Entry{Title: name, Rows: append(rows(
 			row("Reached", m.reached(name, 0)),
 			row("On what terms", m.terms(name)),
 			row("What follows", enrols),
-		)})
+		), m.rest(e.Levels[name])...)})
 	}
 	channels := Section{Title: fmt.Sprintf("Ways in which exposure is expressed (%d)", len(e.Channels))}
 	for _, name := range slices.Sorted(maps.Keys(e.Channels)) {
-		channels.Entries = append(channels.Entries, channelEntry(name, e.Channels[name]))
+		channels.Entries = append(channels.Entries, m.channel(name, e.Channels[name]))
 	}
 	for _, part := range []Section{levels, channels} {
 		if len(part.Entries) > 0 {
@@ -86,12 +88,20 @@ func (m *maker) margins() []string {
 	return out
 }
 
+func (m *maker) noticeLasts() string {
+	name := m.Measures.Exposure.NoticeLasts
+	if name == "" {
+		return ""
+	}
+	return "a written notice of an exposure spares another one of an exposure at the same levels for " + m.plain(name)
+}
+
 // plain writes a parameter's value on the day with its name.
 func (m *maker) plain(name string) string {
 	p := m.Parameters[name]
 	v, ok := p.At(m.day)
 	if !ok {
-		return fmt.Sprintf("%s, of which no value is in force on %s", name, m.day)
+		return fmt.Sprintf("%s (no value in force on %s)", name, m.day)
 	}
 	return amount(p, v) + " (" + name + ")"
 }
@@ -192,7 +202,7 @@ func figure(of string) string {
 	return "highest " + spaced(of)
 }
 
-func channelEntry(name string, c dossier.Channel) Entry {
+func (m *maker) channel(name string, c dossier.Channel) Entry {
 	db := func(x float64, unit, more string) string {
 		if x == 0 {
 			return ""
@@ -213,7 +223,7 @@ func channelEntry(name string, c dossier.Channel) Entry {
 	for _, l := range c.Durations {
 		table = append(table, finding.Words(l.DBA)+" dBA for "+finding.Words(l.Minutes)+" minutes")
 	}
-	return Entry{Title: name, Rows: rows(
+	return Entry{Title: name, Rows: append(rows(
 		row("Expressed as", kind),
 		row("Criterion level", db(c.CriterionDB, "dBA", " for 8 hours is a dose of 100 %")),
 		row("Exchange rate", db(c.ExchangeDB, "dB", " more halves the time that is permitted")),
@@ -221,5 +231,5 @@ func channelEntry(name string, c dossier.Channel) Entry {
 		row("Range up to", db(c.UpperDB, "dBA", "")),
 		row("Permitted in a day", with(strings.Join(table, ", "), "; a level between two rows takes the higher one (used where the day is described by tasks)")),
 		row("Paragraph", c.Cite),
-	)}
+	), m.rest(c)...)}
 }

@@ -8,6 +8,7 @@ import (
 	"strings"
 
 	"hearduty/internal/audiometry"
+	"hearduty/internal/dossier"
 )
 
 func (m *maker) hearing() Section {
@@ -22,7 +23,7 @@ func (m *maker) hearing() Section {
 	if h.Shift.Rule == "" {
 		s.Notes = []string{"The bundle knows no threshold shift by which a worker's tests are compared with a baseline."}
 	} else {
-		s.Entries = append(s.Entries, m.scheme("The threshold shift", h.Shift.Scheme, row("Retest", m.retest(h.Shift.Retest))))
+		s.Entries = append(s.Entries, m.scheme("The threshold shift", h.Shift.Scheme, append(rows(row("Retest", m.retest(&h.Shift))), m.rest(h.Shift)...)...))
 	}
 	for _, other := range h.Others {
 		s.Entries = append(s.Entries, m.scheme("Also judged: "+spaced(other.Name), other))
@@ -35,21 +36,34 @@ func (m *maker) hearing() Section {
 	if a := h.AgeCorrection; a != nil {
 		s.Entries = append(s.Entries, Entry{Title: "Correction for age", Rows: rows(
 			row("Applied where", "the site elects "+a.Choice),
-			row("How", "what age alone explains between baseline and test, by the table of the law, is taken off the later test: "+ageTable(&a.AgeTable)),
+			row("How", "what age alone explains between baseline and test, by the table of the law, is taken off the later test; a younger age has the first value of the table, an older one the last: "+ageTable(&a.AgeTable)),
 			row("Paragraph", a.Cite),
 		)})
+	}
+	if a := h.AgeCorrection; a != nil {
+		for _, sex := range slices.Sorted(maps.Keys(a.Values)) {
+			s.Parts = append(s.Parts, Section{Title: "Correction for age, " + sex + ": dB by age in years and frequency in Hz", Table: ages(a.FromAge, a.Values[sex])})
+		}
 	}
 	if h.Afterwards {
 		s.Rows = append(s.Rows, row("After a test", "all that was done and told after each test is looked at"))
 	}
+	s.Rows = append(s.Rows, m.rest(h)...)
 	return s
 }
 
-func (m *maker) retest(parameter string) string {
-	if parameter == "" {
+func (m *maker) retest(s *dossier.ShiftMeasure) string {
+	if s.Retest == "" {
 		return ""
 	}
-	return "one " + m.limit("within", parameter) + " of the test may stand in for it (" + parameter + ")"
+	which, from, comma := "one ", "the test", ""
+	if s.RetestOnce {
+		which, comma = "the first one only, ", ","
+	}
+	if s.RetestFrom == "received" {
+		from = "the day on which the employer received its result"
+	}
+	return which + m.limit("within", s.Retest) + " of " + from + comma + " may stand in for the test (" + s.Retest + ")"
 }
 
 // scheme tells one scheme by which hearing tests are judged.
@@ -67,7 +81,7 @@ func (m *maker) scheme(title string, s audiometry.Scheme, more ...Row) Entry {
 		row("Compared with", compared),
 		row("Confirmation", confirm),
 		row("Paragraph", s.Cite),
-	), rows(more...)...)}
+	), append(m.rest(s), more...)...)}
 }
 
 // shown says when a test shows what a scheme looks for.
@@ -88,9 +102,10 @@ func (m *maker) shown(s audiometry.Scheme) string {
 		audiometry.Mean:     "averaged over " + hertz(s.Frequencies, "and") + ", is " + amount,
 		audiometry.Any:      "at any one of " + hertz(s.Frequencies, "or") + ", is " + amount,
 		audiometry.Adjacent: "at two neighbours of " + hertz(s.Frequencies, "and") + ", is " + amount + " at both",
+		audiometry.Peak:     "at any one of " + hertz(s.Frequencies, "or") + ", is " + amount + " and higher than at all of " + hertz(s.Over, "and"),
 		audiometry.Total:    "added up over " + hertz(s.Frequencies, "and") + ", is " + amount,
 	}[s.Rule]
-	if len(s.Frequencies) == 1 {
+	if len(s.Frequencies) == 1 && s.Rule != audiometry.Peak {
 		how = "at " + hertz(s.Frequencies, "and") + ", is " + amount
 	}
 	if how == "" {
@@ -123,7 +138,30 @@ func ageTable(t *audiometry.AgeTable) string {
 	if len(frequencies) > 0 {
 		last += len(t.Values[sexes[0]][frequencies[0]]) - 1
 	}
-	return fmt.Sprintf("values for %s, from age %d to %d in steps of a year, at %s", list(sexes, "and"), t.FromAge, last, hertz(frequencies, "and"))
+	return fmt.Sprintf("values for %s, from age %d to %d in steps of a year, at %s; they stand below", list(sexes, "and"), t.FromAge, last, hertz(frequencies, "and"))
+}
+
+// ages writes the values of one sex as a table, one row a year of age.
+func ages(from int, values map[int][]int) Table {
+	t := Table{Figures: true, Columns: []Column{{"Age", ""}}}
+	frequencies := slices.Sorted(maps.Keys(values))
+	years := 0
+	for _, hz := range frequencies {
+		t.Columns = append(t.Columns, Column{strconv.Itoa(hz), ""})
+		years = max(years, len(values[hz]))
+	}
+	for i := range years {
+		cells := []string{strconv.Itoa(from + i)}
+		for _, hz := range frequencies {
+			cell := ""
+			if i < len(values[hz]) {
+				cell = strconv.Itoa(values[hz][i])
+			}
+			cells = append(cells, cell)
+		}
+		t.Rows = append(t.Rows, cells)
+	}
+	return t
 }
 
 func hertz(frequencies []int, last string) string {

@@ -1,6 +1,7 @@
 package rulebook
 
 import (
+	"encoding/json"
 	"fmt"
 	"maps"
 	"slices"
@@ -100,7 +101,20 @@ func (m *maker) measured() map[string][]string {
 		put(h.Recordable.AtLeast, "the recording rule")
 	}
 	put(p.RealWorld, "the rating of protectors")
+	for _, kind := range slices.Sorted(maps.Keys(p.RealWorldByType)) {
+		put(p.RealWorldByType[kind], "the rating of protectors of the type "+spaced(kind))
+	}
 	put(p.Bands, "the grading of protection")
+	for _, name := range []string{m.Measures.Documents.PostedFor, m.Measures.Documents.Every, m.Measures.Documents.Short} {
+		put(name, "the time for which documents hold")
+	}
+	put(e.NoticeLasts, "the time for which a notice holds")
+	text, _ := json.Marshal(m.Measures)
+	for name := range m.Parameters { // named in a part of the measures that is not known here
+		if out[name] == nil && strings.Contains(string(text), `:"`+name+`"`) {
+			put(name, "the measures")
+		}
+	}
 	return out
 }
 
@@ -110,7 +124,7 @@ func (m *maker) choices() Section {
 		c := m.Choices[name]
 		values := make([]string, len(c.Values))
 		for i, v := range c.Values {
-			values[i] = fmt.Sprint(v)
+			values[i] = elected(v)
 		}
 		readers := []string{}
 		for _, d := range m.Duties {
@@ -124,10 +138,21 @@ func (m *maker) choices() Section {
 		s.Entries = append(s.Entries, Entry{Title: upper(spaced(name)) + " (" + name + ")", Rows: rows(
 			row("What", phrase.Sentence(c.About)),
 			row("Can be", list(values, "or")),
-			row("Unless set", fmt.Sprint(c.Default)),
+			row("Unless set", elected(c.Default)),
 			row("Paragraph", c.Cite),
 			row("Bears on", strings.Join(readers, ", ")),
 		)})
 	}
 	return s
+}
+
+// elected writes what a choice can be as the program file has it, behind a word for true and false.
+func elected(v any) string {
+	switch v {
+	case true:
+		return "yes (true)"
+	case false:
+		return "no (false)"
+	}
+	return fmt.Sprint(v)
 }

@@ -2,6 +2,8 @@ package rulebook
 
 import (
 	"fmt"
+	"maps"
+	"slices"
 	"strings"
 
 	"hearduty/internal/finding"
@@ -35,12 +37,21 @@ func (m *maker) protection() Section {
 	if p.Percent != 0 {
 		s.Rows = append(s.Rows, row("Wearers", "attenuation that "+finding.Words(p.Percent)+" % of wearers reach is assumed"))
 	}
-	if p.RealWorld != "" {
-		s.Rows = append(s.Rows, row("Use outside the laboratory", m.plain(p.RealWorld)+" are added to the level at the ear"))
+	var outside []string
+	for _, kind := range slices.Sorted(maps.Keys(p.RealWorldByType)) {
+		outside = append(outside, spaced(kind)+": "+m.plain(p.RealWorldByType[kind])+" are added to the level at the ear")
 	}
+	switch {
+	case p.RealWorld != "" && len(outside) > 0:
+		outside = append(outside, "any other type: "+m.plain(p.RealWorld)+" are added to the level at the ear")
+	case p.RealWorld != "":
+		outside = []string{m.plain(p.RealWorld) + " are added to the level at the ear"}
+	}
+	s.Rows = append(s.Rows, rows(Row{"Use outside the laboratory", outside})...)
 	if p.Bands != "" {
 		s.Rows = append(s.Rows, row("Too little or too much", "the level at the ear is graded against the action level of "+m.plain(p.Bands)))
 	}
+	s.Rows = append(s.Rows, m.rest(p)...)
 	return s
 }
 
@@ -52,12 +63,14 @@ func otherwise(words map[string]string, word string) string {
 	return spaced(word)
 }
 
-// otherMeasures tells how training adds up and which days are working days.
+// otherMeasures tells how training adds up, how long documents hold and which days are working days.
 func (m *maker) otherMeasures() Section {
-	s := Section{Title: "Training and working days"}
+	s := Section{Title: "Training, documents and working days"}
 	if t := m.Measures.Training.TopicsOver; t.Count > 0 {
 		s.Rows = append(s.Rows, row("Training", "the topics of sessions add up over "+t.String()+" before the latest one"))
 	}
+	s.Rows = append(append(s.Rows, m.rest(m.Measures.Training)...), m.documents()...)
+	s.Rows = append(s.Rows, m.rest(m.Measures)...)
 	w := m.Measures.WorkingDays
 	if w == nil {
 		return s
@@ -75,5 +88,25 @@ func (m *maker) otherMeasures() Section {
 	if len(w.Holidays) == 0 {
 		s.Rows = append(s.Rows, row("Holidays", fmt.Sprintf("none are listed up to %s", w.KnownUntil)))
 	}
+	s.Rows = append(s.Rows, m.rest(*w)...)
 	return s
+}
+
+// documents tells how long what documents attest holds.
+func (m *maker) documents() []Row {
+	d := m.Measures.Documents
+	posted, period, short := "", "", ""
+	if d.PostedFor != "" {
+		posted = "a report stays posted for " + m.plain(d.PostedFor)
+	}
+	if d.Periodic != "" {
+		period = "a document of the kind " + d.Periodic + " begins a period"
+	}
+	if d.Every != "" {
+		period += " of " + m.plain(d.Every) + ", at whose end the next one is due"
+	}
+	if d.Short != "" {
+		short = "a period that ends sooner than " + m.plain(d.Short) + " after a change is short"
+	}
+	return append(rows(row("Posting", posted), row("Periods", period), row("Short periods", short)), m.rest(d)...)
 }

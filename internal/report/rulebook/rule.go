@@ -21,6 +21,8 @@ type rule struct {
 	levels    []string // exposure levels that it reads
 	enrolled  bool     // whether it reads the time in the program
 	shifts    bool     // whether it reads shifts of hearing
+	backwards bool     // whether it asks for something before a day
+	forwards  bool     // whether it asks for something after a day
 	recorded  bool     // whether it reads the tests that meet the numbers of the recording rule
 }
 
@@ -32,7 +34,9 @@ func readRule(d *bundle.Duty) *rule {
 	}
 	for _, one := range r.parsed.Rules {
 		if one.Head.Ref()[0].String() == "not_owed" && one.Head.Key != nil {
-			add(&r.quiet, said(one.Head.Key))
+			for _, reason := range r.reasons(one.Head.Key) {
+				add(&r.quiet, reason)
+			}
 		}
 	}
 	ast.WalkTerms(r.parsed, func(t *ast.Term) bool {
@@ -48,13 +52,19 @@ func readRule(d *bundle.Duty) *rule {
 }
 
 func (r *rule) object(o ast.Object) {
-	text := func(key string) string { return said(o.Get(ast.StringTerm(key))) }
-	if reason := text("lifted"); reason != "" {
-		add(&r.lifted, reason+source(text("cite")))
+	if o.Get(ast.StringTerm("before")) != nil {
+		r.backwards = true
 	}
-	if question := text("ask"); question != "" {
-		if of := text("of"); of != "" {
-			question += " (to be answered by: " + of + ")"
+	if o.Get(ast.StringTerm("after")) != nil {
+		r.forwards = true
+	}
+	text := func(key string) []string { return r.reasons(o.Get(ast.StringTerm(key))) }
+	for _, reason := range text("lifted") {
+		add(&r.lifted, reason+source(strings.Join(text("cite"), ", ")))
+	}
+	for _, question := range text("ask") {
+		if of := text("of"); len(of) > 0 {
+			question += " (to be answered by: " + strings.Join(of, ", or ") + ")"
 		}
 		add(&r.questions, question)
 	}
@@ -87,6 +97,23 @@ func add(to *[]string, s string) {
 	if s != "" && !slices.Contains(*to, s) {
 		*to = append(*to, s)
 	}
+}
+
+// workedOut stands for a text that only the run of a rule gives.
+const workedOut = "as its rule works out from the records"
+
+// reasons gives what a term can say: its own text, those of rules of its name, or that it is worked out.
+func (r *rule) reasons(t *ast.Term) []string {
+	if t == nil {
+		return nil
+	}
+	if s := said(t); s != "" {
+		return []string{s}
+	}
+	if texts := r.texts(t); len(texts) > 0 {
+		return texts
+	}
+	return []string{workedOut}
 }
 
 var verb = regexp.MustCompile(`%[-+# 0-9.]*[a-z]`)
@@ -127,7 +154,7 @@ func (r *rule) uses(known map[string]bundle.Parameter) []use {
 			value.Foreach(func(k, v *ast.Term) {
 				key, _ := k.Value.(ast.String)
 				role := string(key)
-				if role == "within" && value.Get(ast.StringTerm("before")) != nil {
+				if role == "within" && r.backwards && (!r.forwards || value.Get(ast.StringTerm("before")) != nil) {
 					role = ahead
 				}
 				if roles[role] != "" {

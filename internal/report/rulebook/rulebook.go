@@ -49,15 +49,16 @@ type Row struct {
 	Texts []string
 }
 
-// Table holds rows of equal length.
+// Table holds rows of equal length. A table of figures has short cells only, which stand below each other in text, too.
 type Table struct {
+	Figures bool
 	Columns []Column
 	Rows    [][]string
 }
 
 // pruned leaves out the columns of which every cell is empty.
 func (t Table) pruned() Table {
-	out := Table{Rows: make([][]string, len(t.Rows))}
+	out := Table{Figures: t.Figures, Rows: make([][]string, len(t.Rows))}
 	for i, c := range t.Columns {
 		if !slices.ContainsFunc(t.Rows, func(cells []string) bool { return cells[i] != "" }) {
 			continue
@@ -84,7 +85,7 @@ type maker struct {
 
 // Of makes the book of a bundle with the numbers in force on a day.
 func Of(b *bundle.Bundle, day calendar.Date) *Book {
-	return compose(b, day, Row{"SHA-256", []string{b.SHA256}})
+	return compose(b, day, rows(row("Signature", otherwise(signatures, b.Signature)), row("SHA-256", b.SHA256))...)
 }
 
 // Kept makes the book that is kept in the bundle's folder. It has the numbers in force on the day on which the bundle was

@@ -1,6 +1,8 @@
 package rulebook_test
 
 import (
+	"testing/fstest"
+
 	"bytes"
 	"flag"
 	"os"
@@ -13,11 +15,28 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"hearduty/internal/bundle"
+	"hearduty/internal/bundle/bundletest"
+	"hearduty/internal/diag"
 	"hearduty/internal/report/rulebook"
 	"hearduty/internal/report/text"
+	"hearduty/policies"
 )
 
 var update = flag.Bool("update", false, "write the golden files anew")
+
+// embedded loads the bundles that are built in. One that is broken fails the test and does not hide the others.
+func embedded(t *testing.T) bundle.Library {
+	t.Helper()
+	ids, err := bundle.Folders(policies.FS)
+	require.NoError(t, err)
+	out := bundle.Library{}
+	for _, id := range ids {
+		if one, err := bundle.Embedded(id); assert.NoError(t, err) {
+			out[id] = one[id]
+		}
+	}
+	return out
+}
 
 func textOf(t *testing.T, b *rulebook.Book, width int) string {
 	t.Helper()
@@ -52,8 +71,7 @@ func TestBookGolden(t *testing.T) {
 }
 
 func TestTextFitsItsWidth(t *testing.T) {
-	library, err := bundle.Embedded()
-	require.NoError(t, err)
+	library := embedded(t)
 	for _, id := range library.IDs() {
 		for _, width := range []int{40, 80} {
 			for line := range strings.Lines(textOf(t, rulebook.Of(library[id], day("2026-06-30")), width)) {
@@ -67,8 +85,7 @@ func TestTextFitsItsWidth(t *testing.T) {
 
 // TestBooksAreCurrent holds the books in the folders of the bundles to what the bundles say.
 func TestBooksAreCurrent(t *testing.T) {
-	library, err := bundle.Embedded()
-	require.NoError(t, err)
+	library := embedded(t)
 	for _, id := range library.IDs() {
 		book, err := rulebook.Kept(library[id])
 		require.NoError(t, err)
@@ -108,4 +125,57 @@ func TestKeptBookStaysTheSame(t *testing.T) {
 	assert.Contains(t, printed, "- **Shown as of:** 2026-01-01:")
 	assert.NotContains(t, printed, b.SHA256)
 	assert.Contains(t, markdownOf(t, rulebook.Of(b, day("2026-01-01"))), "- **SHA-256:** "+b.SHA256+"\n")
+}
+
+// TestCalendarYears tells years that end on 31 December from other years.
+func TestCalendarYears(t *testing.T) {
+	for count, want := range map[string]map[string]string{
+		"1": {"every": "at least once in each calendar year", "within": "by the end of the calendar year after", "for": "until the end of the calendar year after"},
+		"2": {"every": "at least once in every 2 calendar years", "within": "by the end of the 2nd calendar year after", "for": "until the end of the 2nd calendar year after"},
+		"3": {"within": "by the end of the 3rd calendar year after"},
+		"5": {"for": "until the end of the 5th calendar year after"},
+		"0": {"within": "by the end of the calendar year:"},
+	} {
+		for role, words := range want {
+			fields := map[string]string{
+				"every": `"during": {"from": input.as_of, "to": null}, "by": [], "every"`, "within": `"after": input.as_of, "by": null, "within"`, "for": `"holds": true, "for"`,
+			}[role]
+			b := small(t, func(files fstest.MapFS) {
+				bundletest.Change(files, "small/parameters/data.yaml", "value: {days: 30}", "value: {calendar_years: "+count+"}")
+				bundletest.Change(files, "small/duty/posting/posting.rego", "\"after\": input.as_of,\n\t\"within\": \"posting_time\",\n\t\"by\": null,\n", fields+": \"posting_time\",\n")
+			})
+			assert.Contains(t, whenOf(t, rulebook.Of(b, day("2026-06-30")))[0], words)
+		}
+	}
+}
+
+// TestOddBundles looks at what no embedded bundle has.
+func TestOddBundles(t *testing.T) {
+	b := small(t)
+	b.About.Kind, b.About.Drops, b.Extends = "treaty", []string{"old-duty", "old_number"}, []string{"base"}
+	b.Warnings.Warnf(diag.Position{}, "", "dose asks for less than the bundle that is extended: from 2000-01-01 90 in place of 50")
+	b.Measures.Hearing.Shift.Retest = ""
+	duty := *b.Duties[0]
+	duty.Subject, duty.Evidence, duty.From, duty.Text = "vessel", []string{"new_kind"}, "base", "package duty.posting\n\nobligations contains {"
+	b.Duties = []*bundle.Duty{&duty}
+	printed := textOf(t, rulebook.Of(b, day("2026-06-30")), 1000)
+	for _, want := range []string{
+		"\nKind: treaty\n", "\nDrops: old-duty, old_number: asked by a bundle that is extended, but not here\n",
+		"\nExtends: base: what is asked there holds here, too, unless this bundle says otherwise\n",
+		"Where it may ask for less than a bundle that it extends\n-------------------------------------------------------\n- Dose asks for less than the bundle that is extended: from 2000-01-01 90 in place of 50.\n",
+		"Of whom: the employer, for each vessel\n", "Proven by: new kind\n", "Comes from: base, which this bundle extends\n", "When and how much: its rule cannot be read: ",
+	} {
+		assert.Contains(t, printed, want)
+	}
+	assert.NotContains(t, printed, "Retest:")
+	b.About.CheckedOn = "soon"
+	_, err := rulebook.Kept(b)
+	assert.Error(t, err)
+}
+
+// TestBookIsNoPartOfItsBundle: the book lies in the bundle's folder and changes nothing there.
+func TestBookIsNoPartOfItsBundle(t *testing.T) {
+	without := small(t)
+	beside := small(t, func(files fstest.MapFS) { files["small/"+rulebook.FileName] = &fstest.MapFile{Data: []byte("# Book")} })
+	assert.Equal(t, without.SHA256, beside.SHA256)
 }

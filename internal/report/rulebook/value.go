@@ -74,7 +74,7 @@ func (m *maker) limit(role, name string) string {
 	p := m.Parameters[name]
 	v, ok := p.At(m.day)
 	if !ok {
-		return fmt.Sprintf("%s what %s says, of which no value is in force on %s", roles[role], name, m.day)
+		return fmt.Sprintf("%s %s (no value in force on %s)", roles[role], name, m.day)
 	}
 	return bound(role, p, v)
 }

@@ -3,6 +3,7 @@ package rulebook_test
 import (
 	"regexp"
 	"slices"
+	"strconv"
 	"strings"
 	"testing"
 
@@ -54,8 +55,7 @@ func shown(s string) string {
 // TestBothFormsSayAll holds the forms to the book: whatever it says stands in each of them.
 func TestBothFormsSayAll(t *testing.T) {
 	books := map[string]*rulebook.Book{"small": rulebook.Of(small(t), day("2026-06-30"))}
-	library, err := bundle.Embedded()
-	require.NoError(t, err)
+	library := embedded(t)
 	for id, b := range library {
 		books[id] = rulebook.Of(b, day("2026-06-30"))
 	}
@@ -70,8 +70,7 @@ func TestBothFormsSayAll(t *testing.T) {
 
 // TestBookIsWhole asks the book of every embedded bundle for all that the bundle holds.
 func TestBookIsWhole(t *testing.T) {
-	library, err := bundle.Embedded()
-	require.NoError(t, err)
+	library := embedded(t)
 	for id, b := range library {
 		book := rulebook.Of(b, day("2026-06-30"))
 		all := strings.Join(told(book), "\n")
@@ -103,11 +102,14 @@ func TestBookIsWhole(t *testing.T) {
 
 // holdDuties asks for every duty, with each parameter that its rule names in any way.
 func holdDuties(t *testing.T, b *bundle.Bundle, book *rulebook.Book) {
-	entries := map[string]string{}
+	entries, when := map[string]string{}, map[string]string{}
 	for _, s := range book.Sections {
 		for _, part := range s.Parts {
 			for _, e := range part.Entries {
 				for _, r := range e.Rows {
+					if r.Label == "When and how much" {
+						when[e.Title] = strings.Join(r.Texts, "\n")
+					}
 					entries[e.Title] += r.Label + ": " + strings.Join(r.Texts, "\n") + "\n"
 				}
 			}
@@ -123,7 +125,7 @@ func holdDuties(t *testing.T, b *bundle.Bundle, book *rulebook.Book) {
 		}
 		for name := range b.Parameters {
 			named := strings.Contains(d.Text, `"`+name+`"`) || regexp.MustCompile(`data\.parameters\.`+name+`\b`).MatchString(d.Text)
-			assert.Equal(t, named, regexp.MustCompile(`\(`+name+`[;)]|no value of `+name+` `).MatchString(entry), "%s: %s", d.ID, name)
+			assert.Equal(t, named, regexp.MustCompile(`\(`+name+`[;)]|no value of `+name+` `).MatchString(when[d.Title+" ("+d.ID+")"]), "%s: %s", d.ID, name)
 		}
 	}
 }
@@ -165,8 +167,7 @@ func holdTables(t *testing.T, b *bundle.Bundle, book *rulebook.Book) {
 
 // TestDoubtsAreListed asks for every value that was not read in the official text.
 func TestDoubtsAreListed(t *testing.T) {
-	library, err := bundle.Embedded()
-	require.NoError(t, err)
+	library := embedded(t)
 	library["small"] = small(t)
 	for id, b := range library {
 		book := rulebook.Of(b, day("2026-06-30"))
@@ -183,4 +184,39 @@ func TestDoubtsAreListed(t *testing.T) {
 			}
 		}
 	}
+}
+
+// TestAgeTables holds the printed tables of the correction for age to the values that tests are corrected by.
+func TestAgeTables(t *testing.T) {
+	seen := 0
+	for id, b := range embedded(t) {
+		a := b.Measures.Hearing.AgeCorrection
+		if a == nil {
+			continue
+		}
+		for _, s := range rulebook.Of(b, day("2026-06-30")).Sections {
+			for _, part := range s.Parts {
+				if !part.Table.Figures {
+					continue
+				}
+				sex, _, _ := strings.Cut(strings.TrimPrefix(part.Title, "Correction for age, "), ":")
+				for i, row := range part.Table.Rows {
+					want := []string{strconv.Itoa(a.FromAge + i)}
+					for _, c := range part.Table.Columns[1:] {
+						hz, err := strconv.Atoi(c.Title)
+						require.NoError(t, err)
+						want = append(want, strconv.Itoa(a.Values[sex][hz][i]))
+					}
+					assert.Equal(t, want, row, "%s, %s", id, sex)
+					seen += len(row) - 1
+				}
+			}
+		}
+		for _, values := range a.Values {
+			for _, of := range values {
+				seen -= len(of)
+			}
+		}
+	}
+	assert.Zero(t, seen, "values that no table shows")
 }

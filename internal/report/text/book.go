@@ -63,8 +63,13 @@ func bookRows(p *page, indent int, rows []rulebook.Row) {
 	}
 }
 
-// bookTable writes each row of a table as running text: the first two cells as a title, the others as sentences.
+// bookTable writes each row of a table as running text: the first two cells as a title, the others as sentences. Only
+// figures stand below each other.
 func bookTable(p *page, t *rulebook.Table) {
+	if t.Figures {
+		bookFigures(p, t)
+		return
+	}
 	for _, cells := range t.Rows {
 		p.para(2, 4, cells[0]+": "+cells[1])
 		var sentences []string
@@ -75,4 +80,31 @@ func bookTable(p *page, t *rulebook.Table) {
 		}
 		p.para(4, 4, strings.Join(sentences, " "))
 	}
+}
+
+func bookFigures(p *page, t *rulebook.Table) {
+	line := func(cells []string) {
+		s := ""
+		for i, cell := range cells {
+			s += "  " + padLeft(cell, cellWidth(t, i))
+		}
+		p.raw(s)
+	}
+	heads := make([]string, len(t.Columns))
+	for i, c := range t.Columns {
+		heads[i] = c.Title
+	}
+	line(heads)
+	for _, row := range t.Rows {
+		line(row)
+	}
+}
+
+// cellWidth gives the columns that the widest cell of a table's column takes.
+func cellWidth(t *rulebook.Table, column int) int {
+	n := cells(t.Columns[column].Title)
+	for _, row := range t.Rows {
+		n = max(n, cells(row[column]))
+	}
+	return n
 }

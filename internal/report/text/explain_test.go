@@ -56,12 +56,12 @@ func TestBook(t *testing.T) {
 
 func TestLibrary(t *testing.T) {
 	var b bytes.Buffer
-	heads := []*bundle.Head{{ID: "xx-law", Revision: "7", About: law.About, Duties: 1}, {ID: "own", Revision: "8", About: law.About, Duties: 2, Place: "rules/own"}}
+	heads := []*bundle.Head{{ID: "xx-law", Revision: "7", About: law.About, Duties: 1}, {ID: "own", Revision: "8", About: law.About, Duties: 2, Place: "rules/own", Signature: bundle.SignatureNotChecked}}
 	if err := Library(&b, heads, Format{}); err != nil {
 		t.Fatal(err)
 	}
 	want := "xx-law\n  A law.\n  Law, 1 duty, revision 7, last held against the text on 2026-12-01.\n\n" +
-		"own\n  A law.\n  Law, 2 duties, revision 8, last held against the text on 2026-12-01.\n  Read from rules/own.\n"
+		"own\n  A law.\n  Law, 2 duties, revision 8, last held against the text on 2026-12-01.\n  Read from rules/own. Not embedded, signature not checked.\n"
 	if b.String() != want {
 		t.Errorf("want\n%s\ngot\n%s", want, &b)
 	}

@@ -3,6 +3,7 @@
 package text
 
 import (
+	"cmp"
 	"fmt"
 	"io"
 	"slices"
@@ -51,9 +52,17 @@ func head(p *page, r *finding.Report) {
 	p.para(0, 0, r.Program)
 	p.raw("As of " + r.AsOf.String())
 	for _, b := range r.Bundles {
-		p.para(0, 2, fmt.Sprintf("Judged by %s: %s. Revision %s, %s, last held against the text on %s.", b.ID, b.Title, b.Revision, b.Kind, b.CheckedOn))
+		p.para(0, 2, fmt.Sprintf("Judged by %s: %s. Revision %s, %s, last held against the text on %s.", b.ID, b.Title, b.Revision, b.Kind, b.CheckedOn)+signature(b.Signature))
 	}
 	p.raw(strings.TrimSpace(r.Tool.Name + " " + r.Tool.Version))
+}
+
+// signature is a sentence about a bundle that is not built into the program.
+func signature(state string) string {
+	if words := finding.SignatureWords(state); words != "" {
+		return " " + sentence(upper(words))
+	}
+	return ""
 }
 
 // columns of the table of counts, as far as they are open or can be seen later.
@@ -70,13 +79,17 @@ func table(p *page, r *finding.Report, site finding.Site) {
 		p.para(2, 4, "Choices: "+choices(site.Choices))
 	}
 	bundles := site.Bundles
+	if len(bundles) > 1 {
+		sideBySide(p, r, site)
+		bundles = nil
+	}
 	if _, own := tally(r, site.ID, finding.OfProgram); len(own) > 0 {
 		bundles = append(slices.Clone(bundles), finding.OfProgram)
 	}
 	for _, bundle := range bundles {
 		numbers, topics := tally(r, site.ID, bundle)
 		if len(topics) == 0 {
-			p.para(2, 2, bundle+": no duty is owed, or none could be judged.")
+			p.para(2, 2, bundle+nothingOwed)
 			continue
 		}
 		if bundle == finding.OfProgram {
@@ -139,14 +152,16 @@ func tally(r *finding.Report, site, bundle string) (map[string]map[finding.Statu
 		}
 		numbers[c.Topic][c.Status] += c.Number
 	}
-	slices.SortFunc(topics, func(a, b string) int {
-		if d := slices.Index(finding.Topics, a) - slices.Index(finding.Topics, b); d != 0 {
-			return d
-		}
-		return strings.Compare(a, b)
-	})
+	slices.SortFunc(topics, compareTopics)
 	return numbers, topics
 }
+
+// compareTopics puts topics in the order of a program's year.
+func compareTopics(a, b string) int {
+	return cmp.Or(slices.Index(finding.Topics, a)-slices.Index(finding.Topics, b), strings.Compare(a, b))
+}
+
+const nothingOwed = ": no duty is owed, or none could be judged."
 
 // meaning says in words what a status stands for; the order is that of finding.Statuses.
 var meaning = map[finding.Status]string{

@@ -18,7 +18,7 @@ func Library(w io.Writer, heads []*bundle.Head, o Format) error {
 		p.para(2, 2, sentence(h.About.Title))
 		p.para(2, 2, fmt.Sprintf("%s, %s, revision %s, last held against the text on %s.", upper(h.About.Kind), count(h.Duties, "duty", "duties"), h.Revision, h.About.CheckedOn))
 		if h.Place != "" {
-			p.para(2, 2, sentence("Read from "+h.Place))
+			p.para(2, 2, sentence("Read from "+h.Place)+signature(h.Signature))
 		}
 	}
 	if len(heads) == 0 {

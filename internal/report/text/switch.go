@@ -15,7 +15,7 @@ func Switch(w io.Writer, s *finding.Switch, o Format) error {
 	p.para(0, 0, s.Program)
 	p.para(0, 2, "What changes under another law, as of "+s.AsOf.String())
 	for _, b := range s.Bundles {
-		p.para(0, 2, fmt.Sprintf("%s: %s. Revision %s, %s, last held against the text on %s.", b.ID, b.Title, b.Revision, b.Kind, b.CheckedOn))
+		p.para(0, 2, fmt.Sprintf("%s: %s. Revision %s, %s, last held against the text on %s.", b.ID, b.Title, b.Revision, b.Kind, b.CheckedOn)+signature(b.Signature))
 	}
 	switchLevels(p, s)
 	for i := range s.Sites {
@@ -80,11 +80,7 @@ func switchTable(p *page, site *finding.SwitchSite) {
 		return
 	}
 	if p.width >= tableWidth {
-		line := padRight("", switchColumn)
-		for _, status := range columns {
-			line += padLeft(string(status), columnWidth(status))
-		}
-		p.raw(line)
+		statusHeads(p)
 	}
 	for i := range site.Topics {
 		t := &site.Topics[i]
@@ -93,34 +89,13 @@ func switchTable(p *page, site *finding.SwitchSite) {
 	switchRows(p, "in all", site.Totals)
 }
 
-const switchColumn = 16
-
-// switchRows writes two rows of the table, one a side, or on a narrow page two lines of words.
+// switchRows writes two rows of the table, one a side.
 func switchRows(p *page, title string, n finding.SwitchNumbers) {
-	for i, numbers := range []map[finding.Status]int{n.From, n.To} {
-		mark := "AB"[i : i+1]
-		if p.width < tableWidth {
-			words := inWords(numbers)
-			if words == "" {
-				words = "nothing"
-			}
-			p.para(2, 4, title+", "+mark+": "+words)
-			continue
-		}
-		first := title
-		if i > 0 {
-			first = ""
-		}
-		line := "  " + padRight(fit(first, switchColumn-4), switchColumn-3) + mark
-		for _, status := range columns {
-			cell := "-"
-			if k := numbers[status]; k > 0 {
-				cell = fmt.Sprint(k)
-			}
-			line += padLeft(cell, columnWidth(status))
-		}
-		p.raw(line)
+	statusRow(p, title, "A", n.From)
+	if p.width >= tableWidth {
+		title = ""
 	}
+	statusRow(p, title, "B", n.To)
 }
 
 // StandingWords says how a subject stands.
@@ -168,7 +143,7 @@ func switchTopic(p *page, site *finding.SwitchSite, t *finding.SwitchTopic) {
 			last = m.Change
 			p.para(2, 4, upper(m.Change)+":")
 		}
-		p.item(2, "- ", SwitchMove(m))
+		p.item(2, "- ", switchMove(m))
 	}
 	if t.Same > 0 {
 		p.para(2, 4, "Stands the same: "+count(t.Same, "subject", "subjects")+".")
@@ -215,8 +190,8 @@ func OneSided(t *finding.SwitchTopic) []string {
 	return nil
 }
 
-// SwitchMove tells of the subjects that stand otherwise.
-func SwitchMove(m *finding.SwitchMove) string {
+// switchMove tells of the subjects that stand otherwise.
+func switchMove(m *finding.SwitchMove) string {
 	text := fmt.Sprintf("%s, %s before, %s now", count(m.Number, m.Kind, m.Kind+"s"), StandingWords(m.Before), StandingWords(m.After))
 	before, now := "", ""
 	if !quiet(m.Before) && len(m.FromDuties) > 0 {

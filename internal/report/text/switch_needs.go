@@ -7,56 +7,51 @@ import (
 	"hearduty/internal/finding"
 )
 
-// switchNeeds tells what the new law needs that the records lack: of exposure once a group, of anything else once a
-// thing.
+// switchNeeds tells what the new law needs that the records lack.
 func switchNeeds(p *page, site *finding.SwitchSite) {
 	p.heading(yellow, site.ID+": what the new law needs that the records lack")
-	n := 0
-	tell := func(list []string) {
-		for _, text := range list {
-			p.item(2, "- ", text)
-			n++
-		}
+	list := SwitchNeeds(site)
+	for _, text := range list {
+		p.item(2, "- ", text)
 	}
-	tell(SwitchExposures(site))
-	for i := range site.Kinds {
-		tell([]string{SwitchKind(&site.Kinds[i])})
+	if len(list) == 0 {
+		p.para(2, 4, "Nothing: no finding of the new law is unproven, and nothing that it asks for in time is left undone.")
 	}
+}
+
+// SwitchNeeds tells what the new law needs that the records lack: of exposure once a group, of what must be done once a
+// duty, and of anything else once a thing. What the old law lacks as well is told in one sentence.
+func SwitchNeeds(site *finding.SwitchSite) []string {
+	out := switchExposures(site)
 	var both []string
 	for i := range site.Acts {
 		if a := &site.Acts[i]; a.Before < a.Number() {
-			tell([]string{SwitchAct(a)})
+			out = append(out, switchAct(a))
 		} else {
 			both = append(both, fmt.Sprintf("a record for %s (%s)", a.Duty, subjectNumbers(a.Subjects)))
 		}
 	}
 	for i := range site.Needs {
 		if need := &site.Needs[i]; need.Before < need.Number() {
-			tell([]string{SwitchNeed(need)})
+			out = append(out, switchNeed(need))
 		} else {
 			both = append(both, fmt.Sprintf("%s (%s)", needWords(need), subjectNumbers(need.Subjects)))
 		}
 	}
 	if len(both) > 0 {
-		tell([]string{"The old law lacks the same of: " + strings.Join(both, "; ") + "."})
+		out = append(out, "The old law lacks the same of: "+strings.Join(both, "; ")+".")
 	}
-	if n == 0 {
-		p.para(2, 4, "Nothing: no finding of the new law is unproven, and no kind of record is missing.")
-	}
+	return out
 }
 
-// SwitchExposures tells of each group whose exposure the new law cannot take from the records and the old one can, and
+// switchExposures tells of each group whose exposure the new law cannot take from the records and the old one can, and
 // in one sentence of those that neither can.
-func SwitchExposures(site *finding.SwitchSite) []string {
+func switchExposures(site *finding.SwitchSite) []string {
 	var out, neither []string
-	told := map[string]bool{} // a group stands once a channel
 	for i := range site.Exposure {
 		e := &site.Exposure[i]
 		if !e.New() {
-			if !told[e.Group] {
-				neither = append(neither, groupWords(e.Group))
-			}
-			told[e.Group] = true
+			neither = append(neither, groupWords(e.Group))
 			continue
 		}
 		out = append(out, switchExposure(e))
@@ -76,42 +71,42 @@ func groupWords(group string) string {
 
 func switchExposure(e *finding.SwitchExposure) string {
 	text := upper(groupWords(e.Group)) + ", " + count(e.Workers, "worker", "workers")
+	if e.Group == "" {
+		text = count(e.Workers, "worker", "workers") + " in no group"
+	}
 	if e.Now != e.Workers {
 		text += fmt.Sprintf(" (%d of them now)", e.Now)
 	}
-	text += ": it is not known whether exposure reaches the level " + strings.Join(e.Levels, " or ") + " of " + e.Bundle
-	text += ", which is taken as " + e.Taken + ": " + strings.Join(e.Reasons, "; ")
+	var wanted []string
+	for _, m := range e.Wanted {
+		wanted = append(wanted, fmt.Sprintf("the level %s of %s, which is taken as %s", strings.Join(m.Levels, " or "), e.Bundle, m.Taken))
+	}
+	text += ": it is not known whether exposure reaches " + strings.Join(wanted, ", or ") + ": " + strings.Join(shortened(e.Reasons), "; ")
 	if e.Before > 0 {
-		text += fmt.Sprintf(". Of %s of them the old law cannot tell either", fmt.Sprint(e.Before))
+		text += fmt.Sprintf("; for %d of them the old law cannot tell either", e.Before)
 	}
 	return sentence(text)
 }
 
-// SwitchKind tells of a kind of record of which none was read.
-func SwitchKind(k *finding.SwitchKind) string {
-	var parts []string
-	for _, d := range k.Duties {
-		parts = append(parts, fmt.Sprintf("%s (%s), open for %s", d.Duty, d.Cite, count(d.Number, "subject", "subjects")))
+// switchAct tells of a duty that no record shows to be done.
+func switchAct(a *finding.SwitchAct) string {
+	spaced := func(kinds []string) string { return strings.ReplaceAll(strings.Join(kinds, " or "), "_", " ") }
+	text := fmt.Sprintf("A record that %s (%s) was done, such as %s: %s", a.Duty, a.Cite, spaced(a.Evidence), subjectWords(a.Subjects))
+	if len(a.Unread) > 0 {
+		text += "; no record of the kind " + spaced(a.Unread) + " was read at all"
 	}
-	return sentence("No record of the kind " + strings.ReplaceAll(k.Kind, "_", " ") + " was read; it proves " + strings.Join(parts, ", "))
-}
-
-// SwitchAct tells of a duty that no record shows to be done.
-func SwitchAct(a *finding.SwitchAct) string {
-	var kinds []string
-	for _, k := range a.Evidence {
-		kinds = append(kinds, strings.ReplaceAll(k, "_", " "))
-	}
-	text := fmt.Sprintf("A record that %s (%s) was done, such as %s: %s", a.Duty, a.Cite, strings.Join(kinds, " or "), subjectWords(a.Subjects))
 	if a.Before > 0 {
 		text += fmt.Sprintf("; the old law lacks the same for %d of them", a.Before)
 	}
 	return sentence(text)
 }
 
-// SwitchNeed tells of a thing that the records lack.
-func SwitchNeed(n *finding.SwitchNeed) string {
-	text := upper(needWords(n)) + ": " + subjectWords(n.Subjects) + ", for " + strings.Join(n.Duties, ", ")
+// switchNeed tells of a thing that the records lack.
+func switchNeed(n *finding.SwitchNeed) string {
+	text := upper(needWords(n)) + ": " + subjectWords(n.Subjects)
+	if n.Lacks != "" {
+		text += ", for " + strings.Join(n.Duties, ", ")
+	}
 	if n.Before > 0 {
 		text += fmt.Sprintf("; the old law lacks the same for %d of them", n.Before)
 	}

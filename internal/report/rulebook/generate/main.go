@@ -3,6 +3,7 @@ package main
 
 import (
 	"bytes"
+	"errors"
 	"fmt"
 	"os"
 	"path/filepath"
@@ -12,34 +13,36 @@ import (
 )
 
 func main() {
-	if err := write(); err != nil {
+	if err := books(); err != nil {
 		fmt.Fprintln(os.Stderr, err)
 		os.Exit(1)
 	}
 }
 
-func write() error {
-	policies := os.DirFS(".")
-	ids, err := bundle.Folders(policies)
+// books writes the books of all bundles of the folder. One that cannot be written does not keep back the others.
+func books() error {
+	ids, err := bundle.Folders(os.DirFS("."))
 	if err != nil {
 		return err
 	}
 	for _, id := range ids {
-		b, problems := bundle.Load(policies, id)
-		if err := problems.Err(); err != nil {
-			return err
-		}
-		book, err := rulebook.Kept(b)
-		if err != nil {
-			return err
-		}
-		var text bytes.Buffer
-		if err := book.Markdown(&text); err != nil {
-			return err
-		}
-		if err := os.WriteFile(filepath.Join(id, rulebook.FileName), text.Bytes(), 0o644); err != nil {
-			return err
-		}
+		err = errors.Join(err, book(id))
 	}
-	return nil
+	return err
+}
+
+func book(id string) error {
+	b, problems := bundle.Load(os.DirFS("."), id)
+	if err := problems.Err(); err != nil {
+		return err
+	}
+	made, err := rulebook.Kept(b)
+	if err != nil {
+		return fmt.Errorf("%s: checked_on: %w", id, err)
+	}
+	var text bytes.Buffer
+	if err := made.Markdown(&text); err != nil {
+		return err
+	}
+	return os.WriteFile(filepath.Join(id, rulebook.FileName), text.Bytes(), 0o644)
 }
