@@ -35,11 +35,15 @@ func Folders(fsys fs.FS) ([]string, error) {
 // files holds the contents of a bundle by path within the file system.
 type files map[string][]byte
 
+// besides are files in the folder of a bundle that are no part of what it says: its book, which is made from it, and its
+// signature. They do not count for the digest.
+var besides = []string{"BOOK.md", signaturesFile}
+
 func readFiles(fsys fs.FS, dirs ...string) (files, error) {
 	out := files{}
 	for _, dir := range dirs {
 		err := fs.WalkDir(fsys, dir, func(p string, entry fs.DirEntry, err error) error {
-			if err != nil || entry.IsDir() || entry.Name() == "BOOK.md" { // made from the bundle, so no part of it
+			if err != nil || entry.IsDir() || path.Dir(p) == dir && slices.Contains(besides, entry.Name()) {
 				return err
 			}
 			out[p], err = fs.ReadFile(fsys, p)

@@ -1,8 +1,11 @@
 package bundle_test
 
 import (
+	"io/fs"
 	"testing"
 
+	"github.com/open-policy-agent/opa/v1/ast"
+	opabundle "github.com/open-policy-agent/opa/v1/bundle"
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
@@ -39,4 +42,15 @@ func TestRegoRules(t *testing.T) {
 			assert.Positive(t, r.Lines)
 		})
 	}
+}
+
+// TestStockLoaderTakesTheSharedRules loads the shared rules with OPA's own reader; the bundles are read by it above.
+func TestStockLoaderTakesTheSharedRules(t *testing.T) {
+	shared, err := fs.Sub(policies.FS, "common")
+	require.NoError(t, err)
+	loader, err := opabundle.NewFSLoader(shared)
+	require.NoError(t, err)
+	read, err := opabundle.NewCustomReader(loader).WithRegoVersion(ast.RegoV1).Read()
+	require.NoError(t, err)
+	assert.NotEmpty(t, read.Modules)
 }

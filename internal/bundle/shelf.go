@@ -7,6 +7,7 @@ import (
 	"slices"
 	"strings"
 	"sync"
+	"time"
 
 	"hearduty/internal/diag"
 	"hearduty/policies"
@@ -61,8 +62,15 @@ var embeddedShelf = sync.OnceValues(func() (*Shelf, error) {
 func newSlot(id string, fsys overlay, source *Source) *slot {
 	s := &slot{id: id, fsys: fsys, source: source}
 	s.read = sync.OnceValues(func() (*Bundle, diag.List) {
-		b, problems := Load(fsys, id)
-		problems = fsys.locate(problems)
+		var b *Bundle
+		var problems diag.List
+		load := func() { b, problems = Load(fsys, id) }
+		if source == nil {
+			load()
+		} else if !inTime(load) {
+			return nil, tooSlow(source.place(id))
+		}
+		problems = fsys.locate(withRemedies(problems))
 		if b != nil {
 			b.Warnings, b.places, b.Signature = problems, fsys.places, SignatureEmbedded
 			if source != nil {
@@ -72,6 +80,34 @@ func newSlot(id string, fsys overlay, source *Source) *slot {
 		return b, problems
 	})
 	return s
+}
+
+// loadLimit is the time that the loading of a bundle that is not embedded may take: rules can be written so that their
+// compiler hardly comes to an end. Tests shorten it.
+var loadLimit = time.Minute
+
+// inTime does something and says whether it was done in time. What is not done is left behind: the program ends soon,
+// since the bundle is refused.
+func inTime(do func()) bool {
+	done := make(chan struct{})
+	go func() {
+		defer close(done)
+		do()
+	}()
+	timer := time.NewTimer(loadLimit)
+	defer timer.Stop()
+	select {
+	case <-done:
+		return true
+	case <-timer.C:
+		return false
+	}
+}
+
+func tooSlow(place string) diag.List {
+	var problems diag.List
+	problems.Errorf(diag.Position{File: place}, "Do not use a bundle that you do not trust; if it is your own, split its largest rules", "the bundle takes longer than %s to load", loadLimit)
+	return problems
 }
 
 // IDs lists the bundles on the shelf in order.
@@ -101,8 +137,11 @@ func (s *Shelf) Take(ids ...string) (Library, error) {
 	for _, id := range ids {
 		b, found := s.Open(id)
 		if b != nil && s.slots[id].source != nil {
-			strict := s.slots[id].fsys.locate(b.Strict())
-			found = append(slices.Clone(found), strict...)
+			var strict diag.List
+			if !inTime(func() { strict = b.Strict() }) {
+				return nil, tooSlow(s.slots[id].source.place(id))
+			}
+			found = append(slices.Clone(found), s.slots[id].fsys.locate(strict)...)
 		}
 		problems = append(problems, found...)
 		library[id] = b

@@ -8,6 +8,7 @@ import (
 	"crypto/rsa"
 	"crypto/x509"
 	"encoding/base64"
+	"encoding/hex"
 	"encoding/json"
 	"encoding/pem"
 	"os"
@@ -42,7 +43,7 @@ func signed(t *testing.T, fsys fstest.MapFS, dir, before, key, kind string) fste
 		}
 		sum, err := hash.HashFile(value)
 		require.NoError(t, err)
-		list = append(list, opabundle.NewFile(before+rel, strings.ToLower(hexOf(sum)), string(opabundle.SHA256)))
+		list = append(list, opabundle.NewFile(before+rel, hex.EncodeToString(sum), string(opabundle.SHA256)))
 	}
 	token, err := opabundle.GenerateSignedToken(list, opabundle.NewSigningConfig(key, kind, ""), "")
 	require.NoError(t, err)
@@ -50,16 +51,6 @@ func signed(t *testing.T, fsys fstest.MapFS, dir, before, key, kind string) fste
 	require.NoError(t, err)
 	fsys[dir+"/"+signaturesFile] = &fstest.MapFile{Data: text}
 	return fsys
-}
-
-func hexOf(b []byte) string {
-	const digits = "0123456789abcdef"
-	var out strings.Builder
-	for _, x := range b {
-		out.WriteByte(digits[x>>4])
-		out.WriteByte(digits[x&15])
-	}
-	return out.String()
 }
 
 func fileWith(t *testing.T, text string) string {

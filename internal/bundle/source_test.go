@@ -4,12 +4,14 @@ import (
 	"archive/tar"
 	"bytes"
 	"compress/gzip"
+	"io/fs"
 	"os"
 	"path/filepath"
 	"slices"
 	"strings"
 	"testing"
 	"testing/fstest"
+	"time"
 
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
@@ -330,4 +332,76 @@ func TestWhatIsNoPartOfABundleChangesNoDigest(t *testing.T) {
 	library, err = shelfOf(t, filepath.Join(written(t, fsys), "small")).Take("small")
 	require.NoError(t, err)
 	assert.NotEqual(t, want.SHA256, library["small"].SHA256, "any other file counts")
+}
+
+// TestEveryComplaintHasARemedy: an author who is told of an error is told what to do, too.
+func TestEveryComplaintHasARemedy(t *testing.T) {
+	const rule = "small/duty/posting/posting.rego"
+	const condition = "input.enrolled_now == 0"
+	for new, want := range map[string]string{
+		"http.send({}).status_code == 1":  "a rule cannot call what reads a clock, a network, a file, the environment or chance.",
+		"time.now_ns() == 0":              "a rule cannot call what reads a clock",
+		"opa.runtime().env.HOME == \"x\"": "a rule cannot call what reads a clock",
+		"input.enroled_now == 0":          "Write one of the facts that the dossier has.",
+		"true} if {input.site == \"x\"":   "Compare values of one type.",
+		"x == 0":                          "Give the variable a value in the same rule.",
+		"count(1) == 1":                   "Give the function values of the types that it takes.",
+		"input.enrolled_now = = 0":        "Correct the rule there.",
+	} {
+		dir := written(t, bundletest.Change(bundletest.Small(), rule, condition, new), "small")
+		_, err := shelfOf(t, dir).Take("small")
+		require.ErrorContains(t, err, want, new)
+		assert.Contains(t, err.Error(), filepath.Join(dir, rule)+":15:", new)
+	}
+}
+
+// TestLoadingIsCutOff: a bundle whose rules take the compiler forever is refused.
+func TestLoadingIsCutOff(t *testing.T) {
+	whole := loadLimit
+	t.Cleanup(func() { loadLimit = whole })
+	dir := written(t, bundletest.Small(), "small")
+	loadLimit = time.Nanosecond
+	_, err := shelfOf(t, dir).Take("small")
+	require.EqualError(t, err, filepath.Join(dir, "small")+": the bundle takes longer than 1ns to load. Do not use a bundle that you do not trust; if it is your own, split its largest rules.")
+	loadLimit = whole
+	shelf := shelfOf(t, dir)
+	_, problems := shelf.Open("small")
+	require.NoError(t, problems.Err())
+	loadLimit = time.Nanosecond
+	_, err = shelf.Take("small")
+	require.ErrorContains(t, err, "takes longer than 1ns to load", "layout and reach, too")
+}
+
+// FuzzArchive: no archive makes the program stop or gives a bundle without an id, and names stay within it.
+func FuzzArchive(f *testing.F) {
+	var good bytes.Buffer
+	w := tar.NewWriter(&good)
+	for _, name := range []string{".manifest", "about/data.yaml", "../x", "/y"} {
+		text := []byte("id: small\n")
+		if err := w.WriteHeader(&tar.Header{Name: name, Size: int64(len(text)), Typeflag: tar.TypeReg}); err != nil {
+			f.Fatal(err)
+		}
+		if _, err := w.Write(text); err != nil {
+			f.Fatal(err)
+		}
+	}
+	f.Add(good.Bytes())
+	f.Add(good.Bytes()[:1024])
+	f.Add([]byte{})
+	f.Fuzz(func(t *testing.T, data []byte) {
+		s := &Source{Path: "x.tar.gz", files: fstest.MapFS{}, places: map[string]string{}}
+		if s.readTar(tar.NewReader(bytes.NewReader(data))) != nil || s.unpacked() != nil {
+			return
+		}
+		for name := range s.files {
+			if !fs.ValidPath(name) {
+				t.Errorf("the name %q", name)
+			}
+		}
+		for _, id := range s.IDs {
+			if !s.has(id) || s.places[id] == "" {
+				t.Errorf("the bundle %q has no manifest or no place", id)
+			}
+		}
+	})
 }

@@ -22,10 +22,13 @@ func (b *Bundle) Strict() diag.List {
 	return problems
 }
 
-// Layout holds the bundle's own modules to the layout that OPA's formatter gives.
+// Layout holds the bundle's own modules, and the shared ones, to the layout that OPA's formatter gives.
 func (b *Bundle) Layout() diag.List {
 	var problems diag.List
-	for _, file := range b.ownModules() {
+	for _, file := range b.Modules {
+		if !b.Own(file) && !b.Shared(file) {
+			continue
+		}
 		text := string(b.Files[file])
 		formatted, err := format.SourceWithOpts(file, b.Files[file], format.Opts{RegoVersion: ast.RegoV1})
 		if err != nil {

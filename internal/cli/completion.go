@@ -14,6 +14,7 @@ import (
 	"hearduty/internal/report"
 	"hearduty/internal/report/change"
 	"hearduty/internal/report/pull"
+	"hearduty/internal/report/rulebook"
 	"hearduty/policies"
 )
 
@@ -78,6 +79,9 @@ func candidates(app *cli.App, before []string, last string) []string {
 		if name := f.Names()[0]; !isBool && len(before) > 1 && strings.TrimLeft(previous, "-") == name && strings.HasPrefix(previous, "-") {
 			if command.Name == "compare" && name == "format" {
 				return change.Names
+			}
+			if command.Name == "bundle" && name == "format" {
+				return rulebook.Forms
 			}
 			if command.Name == "sample" && name == "format" {
 				return pull.Names()

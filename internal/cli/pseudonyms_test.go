@@ -112,16 +112,16 @@ func spoil(t *testing.T, dir string) {
 		require.NoError(t, f.Close())
 	}
 	add("records/trainings.csv", strings.Join([]string{
-		"K7007,2026-01-05,noise_effects,en,S-11",                       // the worker's row is rejected
-		"K7001,2026-01-05,noise_effects,en,S-77",                       // no such worker
-		"K0101,K7002,noise_effects,en,S-11",                            // an id in the column of dates
-		"K7003;K0102,2026-01-06,noise_effects,en,S-11",                 // two ids in one cell
-		"70013,2026-01-07,noise_effects,en,S-11",                       // an id that lost its zeros
-		"K0101,2020-07-06,noise_effects;protectors;audiometry,en,S-11", // repeated
-		"\"K70\x0104\",2026-01-05,noise_effects,en,S-11",               // a control character
-		"\"K7005,2026-01-05",                                           // a quote that does not end
-		"K0103,2026-01-05,noise_efects,en,S-11",                        // a warning
-		"K0104,2026-01-05,noise_effects,en,S-11,K7006",                 // a cell too many
+		"K7007,2026-01-05,noise_effects,en,S-11,",                       // the worker's row is rejected
+		"K7001,2026-01-05,noise_effects,en,S-77,",                       // no such worker
+		"K0101,K7002,noise_effects,en,S-11,",                            // an id in the column of dates
+		"K7003;K0102,2026-01-06,noise_effects,en,S-11,",                 // two ids in one cell
+		"70013,2026-01-07,noise_effects,en,S-11,",                       // an id that lost its zeros
+		"K0101,2020-07-06,noise_effects;protectors;audiometry,en,S-11,", // repeated
+		"\"K70\x0104\",2026-01-05,noise_effects,en,S-11,",               // a control character
+		"\"K7005,2026-01-05",                                            // a quote that does not end
+		"K0103,2026-01-05,noise_efects,en,S-11,",                        // a warning
+		"K0104,2026-01-05,noise_effects,en,S-11,,K7006",                 // a cell too many
 	}, "\n")+"\n")
 	add("records/workers.csv", strings.Join([]string{
 		"00070013,kiln-hill,male,,2020-01-01,,fettler,yes",
@@ -131,8 +131,8 @@ func spoil(t *testing.T, dir string) {
 		"K7009,kiln-hill,K7009,,2020-01-01,,fettler,yes",
 	}, "\n")+"\n")
 	add("records/audiograms.csv", "A-00297,K0101,2026-01-05\nA-70001,K7007,2026-01-05,baseline\nA-70002,K0101,2026-01-05,A-70002\n")
-	add("records/groups.csv", "K0101,kiln-hill,K0101,a group of one,no,no,480,5\n")
-	add("records/changes.csv", "C-99,2026-01-01,K0101,,works alone,no\n")
+	add("records/groups.csv", "K0101,kiln-hill,K0101,a group of one,no,no,480,5,,\n")
+	add("records/changes.csv", "C-99,2026-01-01,K0101,,works alone,no,\n")
 	add("records/testers.csv", "T-70,wizard T-71,OHC 70-1,,,,T-72\n")
 	add("people.yaml", "- {id: K7010, also: [K7011, K0107-B]}\n- {id: K0108, was: K7012, from: 2020-01-01}\n")
 	add("accepted.yaml", "- match: {subject: K0128, duty: annual-training}\n  reason: K0128 is on leave\n  approved_by: T-01\n  until: 2026-12-31\n"+

@@ -33,7 +33,7 @@ func (r *run) switchCommand() *cli.Command {
 			&cli.StringFlag{Name: "to", Usage: "the new law is the bundle `ID`"},
 			asOfFlag(), siteFlag(),
 			&cli.StringFlag{Name: "format", Value: switchover.Names[0], Usage: "write it as `NAME`: " + strings.Join(switchover.Names, ", ")},
-			outFlag(), policiesFlag(), pseudonymsFlag(), widthFlag(), parallelFlag(),
+			policiesFlag(), policiesKeyFlag(), outFlag(), pseudonymsFlag(), widthFlag(), parallelFlag(),
 		},
 		Action: r.switchover,
 	}

@@ -122,9 +122,13 @@ func differenceOf(a, c, twaA, twaC record.Number, octaves *record.Octaves) (db r
 }
 
 // levelOn gives the 8-hour A-weighted level of what is known on the channel of the measures, dBA to 0.1 dB, as
-// tables of the law print it. Where only bounds are known, the upper one is taken.
+// tables of the law print it. Where only bounds are known, the upper one is taken; but an allowance of an accuracy class
+// is for comparing with action values and is no part of the noise at the ear.
 func (b *Builder) levelOn(channel int, k known) (float64, bool) {
 	if b.Measures.Exposure.Channels[b.Measures.Protection.Channel].Kind == LevelChannel {
+		if len(b.Measures.Exposure.Margins) > 0 && k.src != nil && !math.IsInf(k.high, 1) && k.src.on[channel].estimate.Known {
+			return acoustics.RoundTenth(k.src.on[channel].estimate.Value), true
+		}
 		return acoustics.RoundTenth(k.high), k.high > 0 && !math.IsInf(k.high, 1)
 	}
 	return b.channels.scales[channel].TWAReported(k.high)

@@ -87,7 +87,8 @@ func doseOf(m *record.Measurement) (t taken, note string) {
 
 // takeDose notes on a dose channel what a dose taken with some settings says about the dose asked for. A dose
 // taken with another criterion level or exchange rate is never converted. A dose taken with a lower threshold
-// is an upper bound, one taken with a higher threshold a lower bound of the dose asked for.
+// is an upper bound, one taken with a higher threshold a lower bound of the dose asked for; one that begins lower and
+// ends lower is neither.
 func (r *reading) takeDose(asked acoustics.Scale, t taken) {
 	if t.scale.Criterion != asked.Criterion || t.scale.Exchange != asked.Exchange {
 		r.notes = append(r.notes, fmt.Sprintf("the dose was taken with criterion level %s dBA and %s dB exchange rate, not %s dBA and %s dB; it cannot be converted",
@@ -109,6 +110,10 @@ func (r *reading) takeDose(asked acoustics.Scale, t taken) {
 		}
 		r.high = t.pct
 		working += " from " + number(t.scale.Threshold) + " dBA on, so that the dose from " + number(asked.Threshold) + " dBA on is at most that"
+	case t.scale.Threshold < asked.Threshold:
+		r.notes = append(r.notes, fmt.Sprintf("the dose was taken from %s to %s dBA, not from %s to %s dBA, so that the dose asked for may be more or less",
+			number(t.scale.Threshold), number(t.scale.Upper), number(asked.Threshold), number(asked.Upper)))
+		return
 	default:
 		if r.exact() || t.pct <= r.low {
 			return

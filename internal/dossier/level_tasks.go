@@ -2,6 +2,7 @@ package dossier
 
 import (
 	"fmt"
+	"slices"
 	"strconv"
 	"strings"
 
@@ -24,6 +25,15 @@ type dayOfTasks struct {
 	tasks       []acoustics.Task
 	segments    []acoustics.Segment // one a sample; the samples of a task share its minutes
 	instruments []string            // ids, one a sample; empty for a bare level
+	classes     []string            // accuracy classes, one a sample; empty for a bare level
+}
+
+// class gives the least exact accuracy class of the samples; empty where one of them has none.
+func (d dayOfTasks) class() string {
+	if slices.Contains(d.classes, "") {
+		return ""
+	}
+	return slices.Max(d.classes)
 }
 
 // ofTasks works out the exposure of a day that tasks describe, on every channel: the dose by D = 100 · Σ C/T,
@@ -46,6 +56,7 @@ func (c *channels) ofTasks(tasks []*record.Task, at workplace) *result {
 		case c.isLevel(i):
 			c.takeTaskLevel(on, day)
 			if on.known() {
+				c.margin(on, []*record.Measurement{{Date: first.Date, AccuracyClass: day.class()}})
 				c.week(i, on, at)
 			}
 		default:
@@ -71,15 +82,15 @@ func (c *channels) day(tasks []*record.Task) (d dayOfTasks, note string) {
 			if !ok {
 				return d, fmt.Sprintf("the sample %s of the task %s has no level", sample, t.Task)
 			}
-			instrument := ""
+			instrument, class := "", ""
 			if row != nil {
-				instrument = row.InstrumentID
+				instrument, class = row.InstrumentID, row.AccuracyClass
 				if run := row.RunMinutes; run.Known && run.Value > 0 && (one.ShortestSample == 0 || run.Value < one.ShortestSample) {
 					one.ShortestSample = run.Value
 				}
 			}
 			one.Levels = append(one.Levels, db)
-			d.instruments = append(d.instruments, instrument)
+			d.instruments, d.classes = append(d.instruments, instrument), append(d.classes, class)
 			d.segments = append(d.segments, acoustics.Segment{Level: db, Minutes: t.Minutes.Value / float64(len(t.Samples))})
 		}
 		if t.Minutes.Value > 0 { // a task that takes no time adds no noise

@@ -124,6 +124,7 @@ type Instrument struct {
 	Known       bool      `json:"registered" doc:"whether the instrument is in the instrument records"`
 	Type        string    `json:"kind" doc:"audiometer, dosimeter, sound_level_meter or calibrator; null if not known"`
 	Standard    string    `json:"standard" doc:"standard that it meets"`
+	Class       string    `json:"class" doc:"accuracy class or type"`
 	InUse       *Spell    `json:"in_use" doc:"from its first day in service or first use, to its last day in service or, if later, its last use"`
 	Tests       int       `json:"tests" doc:"hearing tests made with it"`
 	Workers     int       `json:"workers" doc:"workers tested with it"`

@@ -68,7 +68,7 @@ func (b *Builder) instrument(id string, tests *used, noise []*record.Measurement
 	reg := b.Registers.Instruments[id]
 	d := &Instrument{Common: b.common(shownID(id)), Known: reg != nil, Years: []UseYear{}, Deviations: []Drift{}, NoiseUse: []Use{}}
 	if reg != nil {
-		d.Type, d.Standard = reg.Type, reg.Standard
+		d.Type, d.Standard, d.Class = reg.Type, reg.Standard, reg.Class
 		refs.Of(reg)
 	}
 	checks := until(b.Registers.calibrations[id], b.AsOf, func(c *record.Calibration) Date { return c.Date })

@@ -6,10 +6,11 @@ import (
 	"slices"
 )
 
-// Judged is what a switch is worked out from: one report by the bundles of both sides, with every finding listed, and
-// what a report does not hold.
+// Judged is what a switch is worked out from: one report by the bundles of both sides, of which no finding need be
+// listed, and what a report does not hold.
 type Judged struct {
 	Report     *Report
+	Tallies    map[[2]string]*Tally // how the subjects stand, by site and bundle
 	From, To   map[string][]string  // the bundles of each side, by site
 	Levels     []SwitchLevel        // of all bundles
 	Unmeasured []Unmeasured         // workers whose exposure is not known, of both sides
@@ -50,26 +51,14 @@ const (
 // switcher works out what changes at one site.
 type switcher struct {
 	*Judged
-	at       *Site
-	bundles  [2][]string
-	findings [2]map[string][]*Finding // by topic
-	duties   map[[2]string]*Duty
-	open     [2]map[string][]*Unmeasured // by worker
+	at      *Site
+	bundles [2][]string
+	duties  map[[2]string]*Duty
+	open    [2]map[string][]*Unmeasured // by worker
 }
 
 func newSwitcher(j *Judged, at *Site) *switcher {
-	s := &switcher{Judged: j, at: at, bundles: [2][]string{j.From[at.ID], j.To[at.ID]}, duties: map[[2]string]*Duty{}}
-	for i := range s.findings {
-		s.findings[i], s.open[i] = map[string][]*Finding{}, map[string][]*Unmeasured{}
-	}
-	for i := range j.Report.Findings {
-		f := &j.Report.Findings[i]
-		for k := range s.bundles {
-			if f.Site == at.ID && slices.Contains(s.bundles[k], f.Bundle) {
-				s.findings[k][f.Topic] = append(s.findings[k][f.Topic], f)
-			}
-		}
-	}
+	s := &switcher{Judged: j, at: at, bundles: [2][]string{j.From[at.ID], j.To[at.ID]}, duties: map[[2]string]*Duty{}, open: [2]map[string][]*Unmeasured{{}, {}}}
 	for i := range j.Report.Duties {
 		d := &j.Report.Duties[i]
 		s.duties[[2]string{d.Bundle, d.ID}] = d
@@ -85,12 +74,21 @@ func newSwitcher(j *Judged, at *Site) *switcher {
 	return s
 }
 
+// each calls do with the standings under each bundle of a side.
+func (s *switcher) each(k side, do func(bundle string, of *Tally)) {
+	for _, bundle := range s.bundles[k] {
+		if of := s.Tallies[[2]string{s.at.ID, bundle}]; of != nil {
+			do(bundle, of)
+		}
+	}
+}
+
 func (s *switcher) site() SwitchSite {
 	out := SwitchSite{ID: s.at.ID, Name: s.at.Name, Workers: s.at.Workers, From: s.bundles[oldSide], To: s.bundles[newSide], Totals: s.numbers(""),
 		Topics: []SwitchTopic{}, Exposure: s.exposure(), Acts: s.acts(), Needs: s.needs()}
 	for _, topic := range Topics {
-		if len(s.findings[oldSide][topic])+len(s.findings[newSide][topic]) > 0 {
-			out.Topics = append(out.Topics, s.topic(topic))
+		if t := s.topic(topic); len(t.FromDuties)+len(t.ToDuties) > 0 {
+			out.Topics = append(out.Topics, t)
 		}
 	}
 	return out
@@ -100,13 +98,15 @@ func (s *switcher) site() SwitchSite {
 func (s *switcher) numbers(topic string) SwitchNumbers {
 	count := func(k side) map[Status]int {
 		out := map[Status]int{}
-		for t, list := range s.findings[k] {
-			for _, f := range list {
-				if topic == "" || topic == t {
-					out[f.Status]++
+		s.each(k, func(_ string, of *Tally) {
+			for _, d := range of.duties {
+				for status, n := range d.numbers {
+					if topic == "" || topic == d.topic {
+						out[status] += n
+					}
 				}
 			}
-		}
+		})
 		return out
 	}
 	return SwitchNumbers{From: count(oldSide), To: count(newSide)}
@@ -132,21 +132,22 @@ func (s *switcher) has(k side, topic string) int {
 
 // dutiesOf lists the duties of a side with findings under a topic.
 func (s *switcher) dutiesOf(k side, topic string) []SwitchDuty {
-	byID := map[[2]string]*SwitchDuty{}
-	for _, f := range s.findings[k][topic] {
-		key := [2]string{f.Bundle, f.Duty}
-		if byID[key] == nil {
-			byID[key] = &SwitchDuty{Bundle: f.Bundle, Duty: f.Duty, Cite: f.Cite, Evidence: []string{}, Numbers: map[Status]int{}}
-			if d := s.duties[key]; d != nil {
-				byID[key].Title, byID[key].Cite, byID[key].Evidence = d.Title, d.Cite, append([]string{}, d.Evidence...)
-			}
-		}
-		byID[key].Numbers[f.Status]++
-	}
 	out := []SwitchDuty{}
-	for _, key := range slices.SortedFunc(maps.Keys(byID), comparePairs) {
-		out = append(out, *byID[key])
-	}
+	s.each(k, func(bundle string, of *Tally) {
+		for _, t := range of.duties {
+			if t.topic != topic {
+				continue
+			}
+			duty := SwitchDuty{Bundle: bundle, Duty: t.id, Evidence: []string{}, Numbers: t.numbers}
+			if d := s.duties[[2]string{bundle, t.id}]; d != nil {
+				duty.Title, duty.Cite, duty.Evidence = d.Title, d.Cite, append(duty.Evidence, d.Evidence...)
+			}
+			out = append(out, duty)
+		}
+	})
+	slices.SortFunc(out, func(a, b SwitchDuty) int {
+		return comparePairs([2]string{a.Bundle, a.Duty}, [2]string{b.Bundle, b.Duty})
+	})
 	return out
 }
 
@@ -157,15 +158,13 @@ func comparePairs(a, b [2]string) int {
 // values lists the parameters that decide findings under a topic, as they are in force on the as-of day.
 func (s *switcher) values(topic string) []SwitchValue {
 	byName := map[string]*SwitchValue{}
-	for k := range s.findings {
+	for k := range s.bundles {
 		seen := map[[2]string]bool{}
-		for _, f := range s.findings[k][topic] {
-			for name, fact := range f.Facts {
-				if _, ok := AsParameter(fact); ok {
-					seen[[2]string{f.Bundle, name}] = true
-				}
+		s.each(side(k), func(bundle string, of *Tally) {
+			for name := range of.values[topic] {
+				seen[[2]string{bundle, name}] = true
 			}
-		}
+		})
 		for i := range s.Report.Parameters {
 			p := &s.Report.Parameters[i]
 			if !p.InForce || !seen[[2]string{p.Bundle, p.Name}] {

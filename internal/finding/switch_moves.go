@@ -6,26 +6,36 @@ import (
 	"slices"
 )
 
-// stand is how a subject stands under a topic on one side, and by which duties.
+// stand is how a subject stands under a topic on one side, and by which duties, each with its bundle.
 type stand struct {
 	word   string
-	duties map[[2]string]string // paragraphs, by bundle and duty
+	duties [][2]string
 }
 
 // stands gives how each subject stands under a topic on a side.
 func (s *switcher) stands(k side, topic string) map[Subject]stand {
-	out := map[Subject]stand{}
-	for _, f := range s.findings[k][topic] {
-		now, ok := out[f.Subject]
-		switch {
-		case !ok || urgencyOf(string(f.Status)) < urgencyOf(now.word):
-			now = stand{string(f.Status), map[[2]string]string{}}
-		case string(f.Status) != now.word:
-			continue
+	out, i := map[Subject]stand{}, slices.Index(Topics, topic)
+	s.each(k, func(bundle string, of *Tally) {
+		named := make([][][2]string, len(of.sets))
+		for n, set := range of.sets {
+			for _, d := range set {
+				named[n] = append(named[n], [2]string{bundle, of.duties[d].id})
+			}
 		}
-		now.duties[[2]string{f.Bundle, f.Duty}] = f.Cite
-		out[f.Subject] = now
-	}
+		for subject, at := range of.stands {
+			if at[i].set == 0 {
+				continue
+			}
+			word, duties := string(Statuses[at[i].urgency]), named[at[i].set-1]
+			now, ok := out[subject]
+			switch {
+			case !ok || urgencyOf(word) < urgencyOf(now.word):
+				out[subject] = stand{word, duties}
+			case word == now.word:
+				out[subject] = stand{word, slices.Concat(now.duties, duties)}
+			}
+		}
+	})
 	return out
 }
 
@@ -98,12 +108,15 @@ type mover struct {
 func (m *mover) take(s *switcher, subject Subject, o, n stand) {
 	m.number++
 	for k, st := range []stand{o, n} {
-		for duty, cite := range st.duties {
-			if m.duties[k][duty] == nil {
-				m.duties[k][duty] = &SwitchDutyNumber{Bundle: duty[0], Duty: duty[1], Cite: cite}
-			}
+		for _, duty := range st.duties {
 			d := m.duties[k][duty]
-			d.Cite = min(d.Cite, cite) // findings of one duty may cite different paragraphs
+			if d == nil {
+				d = &SwitchDutyNumber{Bundle: duty[0], Duty: duty[1]}
+				if x := s.duties[duty]; x != nil {
+					d.Cite = x.Cite
+				}
+				m.duties[k][duty] = d
+			}
 			d.Number++
 		}
 	}

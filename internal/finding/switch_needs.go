@@ -59,116 +59,89 @@ func distinct(list []string) []string {
 	return append([]string{}, slices.Compact(list)...)
 }
 
-// undone gives the subjects for whom no record of a side says that a duty was done, by bundle and duty.
-func (s *switcher) undone(k side) map[[2]string]map[Subject]bool {
-	out := map[[2]string]map[Subject]bool{}
-	for _, list := range s.findings[k] {
-		for _, f := range list {
-			if !f.Undone {
-				continue
-			}
-			key := [2]string{f.Bundle, f.Duty}
-			if out[key] == nil {
-				out[key] = map[Subject]bool{}
-			}
-			out[key][f.Subject] = true
-		}
-	}
-	return out
-}
-
 // acts lists the duties of the new side that no record shows to be done, those that are news first.
 func (s *switcher) acts() []SwitchAct {
 	before := map[string]map[Subject]bool{} // by duty, whatever the bundle
-	for key, who := range s.undone(oldSide) {
-		if before[key[1]] == nil {
-			before[key[1]] = map[Subject]bool{}
+	s.each(oldSide, func(_ string, of *Tally) {
+		for duty, who := range of.undone {
+			for subject := range who {
+				put(before, duty, subject)
+			}
 		}
-		maps.Copy(before[key[1]], who)
-	}
+	})
 	out := []SwitchAct{}
-	for key, who := range s.undone(newSide) {
-		a := SwitchAct{Bundle: key[0], Duty: key[1], Evidence: []string{}, Unread: []string{}, Subjects: s.subjects(who)}
-		if d := s.duties[key]; d != nil {
-			a.Title, a.Cite, a.Evidence = d.Title, d.Cite, append(a.Evidence, d.Evidence...)
+	s.each(newSide, func(bundle string, of *Tally) {
+		for duty, who := range of.undone {
+			out = append(out, s.act(bundle, duty, who, before[duty]))
 		}
-		for _, kind := range a.Evidence {
-			if s.Records[kind] == 0 {
-				a.Unread = append(a.Unread, kind)
-			}
-		}
-		for subject := range who {
-			if before[key[1]][subject] {
-				a.Before++
-			}
-		}
-		out = append(out, a)
-	}
+	})
 	slices.SortFunc(out, func(a, b SwitchAct) int {
 		return cmp.Or(cmp.Compare(numberOf(b.Subjects)-b.Before, numberOf(a.Subjects)-a.Before), cmp.Compare(a.Duty, b.Duty), cmp.Compare(a.Bundle, b.Bundle))
 	})
 	return out
 }
 
+func (s *switcher) act(bundle, duty string, who, before map[Subject]bool) SwitchAct {
+	a := SwitchAct{Bundle: bundle, Duty: duty, Evidence: []string{}, Unread: []string{}, Subjects: s.subjects(who), Before: shared(who, before)}
+	if d := s.duties[[2]string{bundle, duty}]; d != nil {
+		a.Title, a.Cite, a.Evidence = d.Title, d.Cite, append(a.Evidence, d.Evidence...)
+	}
+	for _, kind := range a.Evidence {
+		if s.Records[kind] == 0 {
+			a.Unread = append(a.Unread, kind)
+		}
+	}
+	return a
+}
+
+// shared counts the subjects that are in both sets.
+func shared(a, b map[Subject]bool) (n int) {
+	for subject := range a {
+		if b[subject] {
+			n++
+		}
+	}
+	return n
+}
+
 // Number counts the subjects of all kinds.
 func (a *SwitchAct) Number() int { return numberOf(a.Subjects) }
 
-// lacking is a thing that the findings of a bundle lack, with what they are about.
-type lacking struct {
-	duties   map[string]bool
-	subjects map[Subject]bool
-}
-
 // lacks gathers what the unproven findings of a side lack, by bundle and words. What is lacking of a worker's exposure
-// is told by group, and not here.
+// is told by group, and not here: who belongs in the program is decided by nothing else.
 func (s *switcher) lacks(k side) map[[2]string]*lacking {
 	out := map[[2]string]*lacking{}
-	for _, list := range s.findings[k] {
-		for _, f := range list {
-			if f.Status != Unproven || s.byGroup(k, f) {
-				continue
+	s.each(k, func(bundle string, of *Tally) {
+		for what, l := range of.lacking {
+			key := [2]string{bundle, what.words}
+			if out[key] == nil {
+				out[key] = &lacking{map[string]bool{}, map[Subject]bool{}}
 			}
-			words := f.Missing
-			if len(words) == 0 {
-				words = []string{""}
-			}
-			for _, word := range words {
-				key := [2]string{f.Bundle, word}
-				if out[key] == nil {
-					out[key] = &lacking{map[string]bool{}, map[Subject]bool{}}
-				}
-				out[key].duties[f.Duty], out[key].subjects[f.Subject] = true, true
+			out[key].take(l, func(subject Subject) bool { return !what.enrolment || !s.unmeasured(k, bundle, subject) })
+			if len(out[key].subjects) == 0 {
+				delete(out, key)
 			}
 		}
-	}
+	})
 	return out
 }
 
-// byGroup says whether a finding is unproven only because the exposure of a worker is not known: who belongs in the
-// program is decided by nothing else.
-func (s *switcher) byGroup(k side, f *Finding) bool {
-	return f.Topic == "enrolment" && f.Subject.Kind == "worker" &&
-		slices.ContainsFunc(s.open[k][f.Subject.ID], func(u *Unmeasured) bool { return u.Bundle == f.Bundle && u.Enrols })
+// unmeasured says whether the exposure of a worker is not known on the level of a bundle that enrols.
+func (s *switcher) unmeasured(k side, bundle string, subject Subject) bool {
+	return subject.Kind == "worker" && slices.ContainsFunc(s.open[k][subject.ID], func(u *Unmeasured) bool { return u.Bundle == bundle && u.Enrols })
 }
 
 // needs tells once a thing what else the records lack.
 func (s *switcher) needs() []SwitchNeed {
 	before := map[string]map[Subject]bool{} // by words, whatever the bundle
 	for key, l := range s.lacks(oldSide) {
-		if before[key[1]] == nil {
-			before[key[1]] = map[Subject]bool{}
+		for subject := range l.subjects {
+			put(before, key[1], subject)
 		}
-		maps.Copy(before[key[1]], l.subjects)
 	}
 	out := []SwitchNeed{}
 	for key, l := range s.lacks(newSide) {
-		n := SwitchNeed{Bundle: key[0], Lacks: key[1], Duties: slices.Sorted(maps.Keys(l.duties)), Subjects: s.subjects(l.subjects)}
-		for subject := range l.subjects {
-			if before[key[1]][subject] {
-				n.Before++
-			}
-		}
-		out = append(out, n)
+		out = append(out, SwitchNeed{Bundle: key[0], Lacks: key[1], Duties: slices.Sorted(maps.Keys(l.duties)), Subjects: s.subjects(l.subjects), Before: shared(l.subjects, before[key[1]])})
 	}
 	slices.SortFunc(out, func(a, b SwitchNeed) int {
 		return cmp.Or(cmp.Compare(b.Number()-b.Before, a.Number()-a.Before), cmp.Compare(a.Lacks, b.Lacks), cmp.Compare(a.Bundle, b.Bundle))

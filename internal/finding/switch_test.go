@@ -31,7 +31,7 @@ func judged(list ...Finding) *Judged {
 
 // stands makes a finding about a worker.
 func stands(bundle, duty, topic, worker string, status Status, change ...func(*Finding)) Finding {
-	f := Finding{ID: fmt.Sprint("f-", bundle, duty, worker, status), Site: "a", Bundle: bundle, Duty: duty, Topic: topic, Subject: Subject{"worker", worker}, Status: status, Cite: bundle + " §"}
+	f := Finding{ID: fmt.Sprint("f-", bundle, duty, worker, status), Site: "a", Bundle: bundle, Duty: duty, Topic: topic, Subject: Subject{"worker", worker}, Status: status}
 	for _, c := range change {
 		c(&f)
 	}
@@ -42,8 +42,22 @@ func missing(words ...string) func(*Finding) { return func(f *Finding) { f.Missi
 
 func about(kind, id string) func(*Finding) { return func(f *Finding) { f.Subject = Subject{kind, id} } }
 
+// gathered takes the findings of the report into standings, as judging does one by one.
+func gathered(j *Judged) *Judged {
+	j.Tallies = map[[2]string]*Tally{}
+	for _, f := range j.Report.Findings {
+		key := [2]string{f.Site, f.Bundle}
+		if j.Tallies[key] == nil {
+			j.Tallies[key] = NewTally()
+		}
+		j.Tallies[key].Add([]Finding{f})
+	}
+	return j
+}
+
 func onlySite(t *testing.T, j *Judged) *SwitchSite {
 	t.Helper()
+	gathered(j)
 	s := SwitchOf(j)
 	require.Len(t, s.Sites, 1)
 	return &s.Sites[0]
@@ -69,11 +83,11 @@ func TestSwitchMoves(t *testing.T) {
 	assert.Equal(t, 1, topic.Same)
 	assert.Equal(t, []SwitchMove{
 		{Change: Appears, Kind: "worker", Before: NotOwed, After: "due", Number: 1, Subjects: []string{"4"}, Groups: []SwitchGroup{},
-			FromDuties: []SwitchDutyNumber{}, ToDuties: []SwitchDutyNumber{{"new", "test", "new §", 1}}},
+			FromDuties: []SwitchDutyNumber{}, ToDuties: []SwitchDutyNumber{{"new", "test", "N 1", 1}}},
 		{Change: Changes, Kind: "worker", Before: "met", After: "gap", Number: 2, Subjects: []string{"1", "2"}, Groups: []SwitchGroup{},
-			FromDuties: []SwitchDutyNumber{{"old", "test", "old §", 2}}, ToDuties: []SwitchDutyNumber{{"new", "retest", "new §", 1}, {"new", "test", "new §", 2}}},
+			FromDuties: []SwitchDutyNumber{{"old", "test", "O 1", 2}}, ToDuties: []SwitchDutyNumber{{"new", "retest", "", 1}, {"new", "test", "N 1", 2}}},
 		{Change: Vanishes, Kind: "worker", Before: "unproven", After: NotOwed, Number: 1, Subjects: []string{"5"}, Groups: []SwitchGroup{},
-			FromDuties: []SwitchDutyNumber{{"old", "test", "old §", 1}}, ToDuties: []SwitchDutyNumber{}},
+			FromDuties: []SwitchDutyNumber{{"old", "test", "O 1", 1}}, ToDuties: []SwitchDutyNumber{}},
 	}, topic.Moves)
 }
 

@@ -110,7 +110,7 @@ func (k *keeper) keep(d *bundle.Duty, x outcome, o *obligation) {
 // listed says whether an outcome is to be listed, or only counted.
 func (c *check) listed(x *outcome) bool {
 	switch {
-	case c.All:
+	case c.All || c.beside != "":
 		return true
 	case x.status == finding.Due:
 		return int(x.due-c.AsOf) <= c.AheadDays
@@ -195,7 +195,11 @@ func (k *keeper) done() {
 	k.bench.rates.take(k.tallies)
 	k.bench.mu.Lock()
 	defer k.bench.mu.Unlock()
-	k.bench.findings = append(k.bench.findings, k.findings...)
+	if k.check.beside != "" { // a switch keeps how subjects stand, and no finding
+		k.bench.tally.Add(k.findings)
+	} else {
+		k.bench.findings = append(k.bench.findings, k.findings...)
+	}
 	k.bench.taken = append(k.bench.taken, k.taken...)
 	for _, key := range k.counts {
 		k.bench.counts[key]++

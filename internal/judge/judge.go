@@ -101,6 +101,7 @@ type bench struct {
 	findings []finding.Finding
 	taken    []taken
 	counts   map[countKey]int
+	tally    *finding.Tally // in place of findings, for a switch
 	copies   dossier.Copies // kept at the first bench of a site
 	ears     ears
 	rates    rates
@@ -219,7 +220,7 @@ func (c *check) prepare(ctx context.Context) error {
 			place := dossier.Place{ID: s.ID, Country: s.Country, Region: s.Region}
 			c.benches[s.ID] = append(c.benches[s.ID], &bench{
 				site: s, bundle: b, builder: grounds[id].Builder(place, b.ChoicesOf(s.Choices)), engine: engines[id],
-				usage: dossier.NewUsage(), counts: map[countKey]int{},
+				usage: dossier.NewUsage(), counts: map[countKey]int{}, tally: finding.NewTally(),
 			})
 		}
 	}

@@ -23,7 +23,7 @@ func Switch(ctx context.Context, o Options, to string) (*finding.Switch, error) 
 	}
 	kinds := map[string]int{}
 	o.read = counting(o, kinds)
-	o.beside, o.All, o.HealthDetail, o.Portraits, o.Accepted = to, true, false, false, nil
+	o.beside, o.All, o.HealthDetail, o.Portraits, o.Accepted = to, false, false, false, nil
 	c, err := newCheck(ctx, o)
 	if err != nil {
 		return nil, err
@@ -32,11 +32,14 @@ func Switch(ctx context.Context, o Options, to string) (*finding.Switch, error) 
 	if err := c.judgeAll(ctx); err != nil {
 		return nil, err
 	}
-	j := &finding.Judged{From: map[string][]string{}, To: map[string][]string{}, Groups: map[[2]string]string{}, Records: kinds}
+	j := &finding.Judged{From: map[string][]string{}, To: map[string][]string{}, Tallies: map[[2]string]*finding.Tally{}, Groups: map[[2]string]string{}, Records: kinds}
 	for _, s := range c.sites {
 		j.From[s.ID], j.To[s.ID] = s.Bundles, []string{to}
 		if o.Bundle != "" {
 			j.From[s.ID] = []string{o.Bundle}
+		}
+		for _, b := range c.benches[s.ID] {
+			j.Tallies[[2]string{s.ID, b.bundle.ID}] = b.tally
 		}
 	}
 	if err := c.exposures(ctx, j); err != nil {

@@ -161,7 +161,7 @@ type FollowUp struct {
 	Ear         string `field:"ear,one=left|right|both" doc:"ear concerned"`
 	Date        Date   `field:"date,required" doc:"day on which it was done or decided"`
 	Type        string `field:"kind,required,like=fitting|refitting|retraining|referral|referral_decision|medical_opinion|persistence_opinion|baseline_revision|invalidated|log_entry|log_removal|authority_report|protector_choice|controls_reviewed|assessment_reviewed|measures_reviewed|alternative_work|group_reviewed|worker_informed|history_forwarded|damage_found|damage_examined|damage_opinion|protector_unsuitable|evaluation_results" doc:"what was done or decided"`
-	Result      string `field:"result,like=work_related|not_work_related|persistent|not_persistent|improved|referral_needed|no_referral_needed|new_baseline|retest_possible|retest_not_possible" doc:"the outcome"`
+	Result      string `field:"result,like=work_related|not_work_related|persistent|not_persistent|improved|referral_needed|no_referral_needed|new_baseline|retest_possible|retest_not_possible|measures_insufficient" doc:"the outcome"`
 	By          string `field:"by" doc:"id, or qualification, of the person who did or decided it"`
 }
 

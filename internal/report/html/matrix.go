@@ -24,11 +24,11 @@ type matrixCell struct {
 	Topic  string
 	Bundle string // in the tables of bundles side by side
 	Worst  finding.Status
-	Number int // of the worst status
-	More   int // of the other statuses that ask for something
+	Number int    // of the worst status
+	More   int    // of the other statuses that ask for something
 	Words  string // all statuses with their numbers
 	Rest   string // the same without the worst
-	Listed bool // whether the register lists any of them
+	Listed bool   // whether the register lists any of them
 }
 
 // asking are the statuses that ask for something to be done.

@@ -9,15 +9,15 @@ import (
 
 // kinds says how a bundle of each kind binds.
 var kinds = map[string]string{
-	"law":      "law: it binds whoever falls under it, and an authority enforces it",
-	"guidance": "guidance: an authority recommends it as a way to comply; it does not bind by itself",
-	"practice": "practice: what a professional body or a standard recommends; it binds nobody unless a law, a contract or the employer says so",
-	"company":  "company: a standard that a company sets for itself; a finding under it is no breach of the law",
+	"law":      "law, which binds those to whom it is addressed and is enforced by an authority",
+	"guidance": "guidance, by which an authority recommends a way to comply; it does not bind by itself",
+	"practice": "practice, which a professional body or a standard recommends; it binds nobody unless a law, a contract or the employer says so",
+	"company":  "company, a standard that a company sets for itself; a finding under it is no breach of the law",
 }
 
 // signatures says what is known of a bundle's signature.
 var signatures = map[string]string{
-	bundle.SignatureEmbedded:   "none is needed: the bundle is built into the program",
+	bundle.SignatureEmbedded:   "none is needed; the bundle is built into the program",
 	bundle.SignatureVerified:   "it fits the key that was given",
 	bundle.SignatureNotChecked: "there is one, but no key to check it with was given",
 	bundle.SignatureNone:       "the bundle is not signed",
@@ -38,11 +38,11 @@ func (m *maker) head() []Row {
 		row("Authority", a.Authority),
 		row("Country", where),
 		row("Kind", kind),
-		row("Extends", with(strings.Join(m.Extends, ", "), ": what is asked there holds here, too, unless this bundle says otherwise")),
-		row("Drops", with(strings.Join(a.Drops, ", "), ": asked by a bundle that is extended, but not here")),
+		row("Extends", with(strings.Join(m.Extends, ", "), "; what is asked there holds here, too, unless this bundle says otherwise")),
+		row("Drops", with(strings.Join(a.Drops, ", "), "; asked by a bundle that is extended, but not here")),
 		row("Judges from", a.InForce),
 		row("Checked on", with(a.CheckedOn, ", the day on which it was last held against the text")),
-		row("Shown as of", with(m.day.String(), ": the numbers are those in force on that day")),
+		row("Shown as of", with(m.day.String(), "; the numbers are those in force on that day")),
 		row("Revision", m.Revision),
 	), m.rest(*a)...)
 }

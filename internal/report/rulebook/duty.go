@@ -13,6 +13,7 @@ import (
 var subjects = map[string]string{
 	"worker":     "the employer, for each worker",
 	"group":      "the employer, for each group of workers whose exposure is alike",
+	"area":       "the employer, for each area of the workplace",
 	"site":       "the employer, for each site",
 	"instrument": "the employer, for each instrument: sound level meter, dosimeter, calibrator or audiometer",
 	"room":       "the employer, for each room in which hearing is tested",
@@ -27,13 +28,13 @@ var evidence = map[string]string{
 	"training": "training sessions", "protector": "models of protectors with their ratings", "protector_issue": "protectors handed over",
 	"fit_test": "fit tests", "wear_check": "checks of whether protectors are worn", "instrument": "instruments",
 	"calibration": "calibrations and checks", "room_survey": "surveys of test rooms", "tester": "people who test hearing",
-	"document": "documents", "control": "noise controls",
+	"document": "documents", "control": "noise controls", "examination": "hearing tests and health appointments that were offered",
 }
 
 func (m *maker) duties() Section {
 	s := Section{
 		Title: fmt.Sprintf("Duties (%d)", len(m.Duties)),
-		Notes: []string{"Each duty is judged for each worker, group, site, instrument, room or tester by itself. Where the records do not suffice to decide, it is unproven; it is never passed over."},
+		Notes: []string{"Each duty is judged for each worker, group, area, site, instrument, room or tester by itself. Where the records do not suffice to decide, it is unproven; it is never passed over."},
 	}
 	for _, d := range m.Duties {
 		title := phrase.Sentence(strings.ReplaceAll(d.Topic, "test-quality", "test quality"))
@@ -115,10 +116,10 @@ func (m *maker) exposureOf(r *rule) []string {
 func (m *maker) lossOf(r *rule) []string {
 	var out []string
 	if shift := m.Measures.Hearing.Shift.Scheme; r.shifts && shift.Rule != "" {
-		out = append(out, "a threshold shift: "+m.shown(shift))
+		out = append(out, "a threshold shift, that is when "+m.shown(shift))
 	}
 	if r.recorded && m.Measures.Hearing.Recordable != nil {
-		out = append(out, "a shift and the level of the recording rule: "+m.recordable())
+		out = append(out, "a shift that meets the recording rule, that is when "+m.recordable())
 	}
 	return out
 }

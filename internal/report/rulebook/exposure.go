@@ -120,7 +120,7 @@ func (m *maker) reached(name string, depth int) string {
 			}
 		}
 		if len(parts) > 0 {
-			return list(parts, "or")
+			return strings.Join(parts, "; or ")
 		}
 		return fmt.Sprintf("what %s say, of which none has a value in force on %s", list(level.Any, "and"), m.day)
 	}
@@ -133,7 +133,7 @@ func (m *maker) reached(name string, depth int) string {
 		s += ", an 8-hour average of " + strings.TrimSpace(roles[role]+" "+twa)
 	}
 	if level.Instead != nil {
-		s += fmt.Sprintf(", or, where the site elects %s, %s of that amount", level.Instead.Choice, what(m.Measures.Exposure.Channels[level.Instead.Channel]))
+		s += fmt.Sprintf(" (where the site elects %s: %s)", level.Instead.Choice, strings.TrimSuffix(what(m.Measures.Exposure.Channels[level.Instead.Channel]), ","))
 	}
 	return s
 }
@@ -227,7 +227,7 @@ func (m *maker) channel(name string, c dossier.Channel) Entry {
 		row("Expressed as", kind),
 		row("Criterion level", db(c.CriterionDB, "dBA", " for 8 hours is a dose of 100 %")),
 		row("Exchange rate", db(c.ExchangeDB, "dB", " more halves the time that is permitted")),
-		row("Threshold", db(c.ThresholdDB, "dBA", ": lower levels do not count")),
+		row("Threshold", db(c.ThresholdDB, "dBA", "; lower levels do not count")),
 		row("Range up to", db(c.UpperDB, "dBA", "")),
 		row("Permitted in a day", with(strings.Join(table, ", "), "; a level between two rows takes the higher one (used where the day is described by tasks)")),
 		row("Paragraph", c.Cite),

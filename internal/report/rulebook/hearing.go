@@ -1,6 +1,7 @@
 package rulebook
 
 import (
+	"cmp"
 	"fmt"
 	"maps"
 	"slices"
@@ -15,10 +16,10 @@ func (m *maker) hearing() Section {
 	h := m.Measures.Hearing
 	s := Section{Title: "How hearing tests are compared"}
 	s.Rows = rows(
-		row("Tested frequencies", hertz(h.Required, "and")),
-		row("May review tests and revise baselines", professions(h.Professionals)),
-		row("Whose finding lifts the follow-up of a shift", professions(h.Physicians)),
-		row("Whose finding lifts the entry in the log", professions(h.Licensed)),
+		row("Tested frequencies", cmp.Or(hertz(h.Required, "and"), "the bundle names none that each test must hold")),
+		row("Professionals who may review tests and revise baselines", professions(h.Professionals)),
+		row("Physicians whose finding lifts the follow-up of a shift", professions(h.Physicians)),
+		row("Licensed professionals whose finding lifts an entry in the log", professions(h.Licensed)),
 	)
 	if h.Shift.Rule == "" {
 		s.Notes = []string{"The bundle knows no threshold shift by which a worker's tests are compared with a baseline."}
@@ -121,8 +122,8 @@ func (m *maker) recordable() string {
 }
 
 var baselines = map[string]string{
-	"":         "the baseline in force: the first valid one, or what a professional put in its place",
-	"standing": "the baseline in force: the first valid one, or what a professional put in its place",
+	"":         "the baseline in force, which is the first valid one or what a professional put in its place",
+	"standing": "the baseline in force, which is the first valid one or what a professional put in its place",
 	"original": "the first valid baseline, whatever was revised later",
 	"improved": "the first valid baseline, or a later one that was put in its place because hearing had improved",
 	"previous": "the test before",

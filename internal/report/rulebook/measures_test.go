@@ -36,7 +36,7 @@ func TestExposureInWords(t *testing.T) {
 		"A level of the week where the site elects it": {func(e *dossier.ExposureMeasures) {
 			e.Channels["action"], e.Channels["week"] = dossier.Channel{Kind: "level"}, dossier.Channel{Kind: "level", Weekly: true}
 			e.Levels["action"] = dossier.Threshold{Channel: "action", Above: "dose", Instead: &dossier.Instead{Choice: "by_mail", Channel: "week"}}
-		}, []string{"Reached: a noise exposure level of the day, L_EX,8h, of more than 50 %, or, where the site elects by_mail, a noise exposure level of the week, L_EX,w, of that amount\n", "the value on the channel action exceeds the parameter dose, N 2; where the site elects by_mail, the channel week stands in\n"}},
+		}, []string{"Reached: a noise exposure level of the day, L_EX,8h, of more than 50 % (where the site elects by_mail: a noise exposure level of the week, L_EX,w)\n", "the value on the channel action exceeds the parameter dose, N 2; where the site elects by_mail, the channel week stands in\n"}},
 		"A highest value": {func(e *dossier.ExposureMeasures) {
 			e.Channels["action"] = dossier.Channel{Kind: "highest", Of: "peak_dbc"}
 		}, []string{
@@ -50,7 +50,7 @@ func TestExposureInWords(t *testing.T) {
 			e.Levels["peak"] = dossier.Threshold{Channel: "peak", Above: "shift"}
 			e.Levels["past"] = dossier.Threshold{Channel: "peak", Above: "not_yet"}
 			e.Levels["either"] = dossier.Threshold{Any: []string{"action", "peak", "past"}}
-		}, []string{"Reached: a noise dose of at least 50 %, an 8-hour average of at least 85 dBA or a highest continuous sound level, A-weighted, slow, of more than 10 dB\n",
+		}, []string{"Reached: a noise dose of at least 50 %, an 8-hour average of at least 85 dBA; or a highest continuous sound level, A-weighted, slow, of more than 10 dB\n",
 			"On what terms: one of the levels action, peak and past is enough; one whose parameter has no value on the day is left out", "more than not_yet (no value in force on 2026-06-30)\n"}},
 		"Margins by class":    {func(e *dossier.ExposureMeasures) { e.Margins = map[string]string{"2": "shift"} }, []string{"Margins: accuracy class 2: a level is raised by 10 dB (shift) before it is compared\n", "Used by the margin of accuracy class 2, the threshold shift."}},
 		"A notice that lasts": {func(e *dossier.ExposureMeasures) { e.NoticeLasts = "posting_time" }, []string{"Notices: a written notice of an exposure spares another one of an exposure at the same levels for 30 days (posting_time)\n", "Used by posting, the retest after a shift, the time for which a notice holds."}},
@@ -123,7 +123,7 @@ func TestWorkingDaysInWords(t *testing.T) {
 		m.Training.TopicsOver = calendar.Interval{Count: 2, Unit: calendar.Years}
 		m.WorkingDays = &dossier.WorkingDays{Rest: []string{"saturday", "sunday"}, Holidays: []dossier.Holiday{{Date: "2026-01-01", Name: "New Year"}, {Date: "2026-05-01"}}, KnownUntil: "2027-12-31", Cite: "N 9"}
 	})
-	assert.Contains(t, got, "Training: the topics of sessions add up over 2 years before the latest one\nDays of rest: saturday, sunday\nHolidays: 2026-01-01 New Year, 2026-05-01\nKnown until: 2027-12-31: a time in working days that reaches further is unproven\nParagraph: N 9\n")
+	assert.Contains(t, got, "Training: the topics of sessions add up over 2 years before the latest one\nDays of rest: saturday, sunday\nHolidays: 2026-01-01 New Year, 2026-05-01\nKnown until: 2027-12-31; a time in working days that reaches further is unproven\nParagraph: N 9\n")
 	assert.Contains(t, measured(t, func(m *dossier.Measures) { m.WorkingDays = &dossier.WorkingDays{KnownUntil: "2026-12-31"} }), "Holidays: none are listed up to 2026-12-31\n")
 }
 

@@ -82,7 +82,7 @@ func (m *maker) otherMeasures() Section {
 	s.Rows = append(s.Rows, rows(
 		row("Days of rest", strings.Join(w.Rest, ", ")),
 		row("Holidays", strings.Join(holidays, ", ")),
-		row("Known until", with(w.KnownUntil, ": a time in working days that reaches further is unproven")),
+		row("Known until", with(w.KnownUntil, "; a time in working days that reaches further is unproven")),
 		row("Paragraph", w.Cite),
 	)...)
 	if len(w.Holidays) == 0 {

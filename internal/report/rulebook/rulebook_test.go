@@ -108,7 +108,7 @@ func TestValueOnTheDay(t *testing.T) {
 		printed := textOf(t, rulebook.Of(b, day(on)), 1000)
 		assert.Contains(t, printed, "- "+want.when+"\n", on)
 		assert.Contains(t, printed, "  "+want.inForce+"\n", on)
-		assert.Contains(t, printed, "Shown as of: "+on+":")
+		assert.Contains(t, printed, "Shown as of: "+on+";")
 	}
 	printed := textOf(t, rulebook.Of(b, day("1999-12-31")), 1000)
 	assert.Contains(t, printed, "- no value of posting_time is in force on 1999-12-31, so the duty is unproven: time to post\n")
@@ -122,7 +122,7 @@ func TestKeptBookStaysTheSame(t *testing.T) {
 	kept, err := rulebook.Kept(b)
 	require.NoError(t, err)
 	printed := markdownOf(t, kept)
-	assert.Contains(t, printed, "- **Shown as of:** 2026-01-01:")
+	assert.Contains(t, printed, "- **Shown as of:** 2026-01-01;")
 	assert.NotContains(t, printed, b.SHA256)
 	assert.Contains(t, markdownOf(t, rulebook.Of(b, day("2026-01-01"))), "- **SHA-256:** "+b.SHA256+"\n")
 }
@@ -160,8 +160,8 @@ func TestOddBundles(t *testing.T) {
 	b.Duties = []*bundle.Duty{&duty}
 	printed := textOf(t, rulebook.Of(b, day("2026-06-30")), 1000)
 	for _, want := range []string{
-		"\nKind: treaty\n", "\nDrops: old-duty, old_number: asked by a bundle that is extended, but not here\n",
-		"\nExtends: base: what is asked there holds here, too, unless this bundle says otherwise\n",
+		"\nKind: treaty\n", "\nDrops: old-duty, old_number; asked by a bundle that is extended, but not here\n",
+		"\nExtends: base; what is asked there holds here, too, unless this bundle says otherwise\n",
 		"Where it may ask for less than a bundle that it extends\n-------------------------------------------------------\n- Dose asks for less than the bundle that is extended: from 2000-01-01 90 in place of 50.\n",
 		"Of whom: the employer, for each vessel\n", "Proven by: new kind\n", "Comes from: base, which this bundle extends\n", "When and how much: its rule cannot be read: ",
 	} {

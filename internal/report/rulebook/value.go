@@ -27,7 +27,14 @@ func amount(p bundle.Parameter, v *bundle.Value) string {
 	if interval, ok := v.Interval(); ok {
 		return interval.String()
 	}
-	s := strings.ReplaceAll(finding.Words(v.Plain()), "_", " ")
+	if words, ok := v.Value.([]any); ok {
+		texts := make([]string, len(words))
+		for i, w := range words {
+			texts[i] = spaced(finding.Words(w))
+		}
+		return strings.Join(texts, "; ")
+	}
+	s := spaced(finding.Words(v.Plain()))
 	if _, ok := v.Value.(float64); ok && p.Unit != "" {
 		s += " " + p.Unit
 	}

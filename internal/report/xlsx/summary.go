@@ -1,6 +1,7 @@
 package xlsx
 
 import (
+	"cmp"
 	"fmt"
 	"maps"
 	"slices"
@@ -103,7 +104,7 @@ func (p *page) standing(r *finding.Report) {
 	p.across(p.plain, "Counted among the listed findings, each number with those above it.")
 }
 
-// matrix counts by site, bundle, topic and status.
+// matrix counts by site, topic, bundle and status, so that the bundles of a site stand side by side under each topic.
 func (p *page) matrix(r *finding.Report) {
 	if len(r.Counts) == 0 {
 		return
@@ -124,10 +125,7 @@ func (p *page) matrix(r *finding.Report) {
 		numbers[key][c.Status] += c.Number
 	}
 	slices.SortStableFunc(keys, func(a, b [3]string) int {
-		if c := slices.Compare(a[:2], b[:2]); c != 0 {
-			return c
-		}
-		return slices.Index(finding.Topics, a[2]) - slices.Index(finding.Topics, b[2])
+		return cmp.Or(strings.Compare(a[0], b[0]), slices.Index(finding.Topics, a[2])-slices.Index(finding.Topics, b[2]), strings.Compare(a[1], b[1]))
 	})
 	for _, key := range keys {
 		row := []any{key[0], key[1], key[2]}

@@ -1,0 +1,25 @@
+package duty.measured_after_means_test
+
+import data.duty.measured_after_means
+import rego.v2
+
+control := {"ref": "control/c", "what": "enclosure", "installed_on": "2025-05-01"}
+
+group(control, measurements) := {"controls": [control], "measurements": measurements}
+
+answers(dossier) := found if found := {o.by | some o in measured_after_means.obligations} with input as dossier
+
+test_not_measured_since if {
+	answers(group(control, [])) == {null}
+	answers(group(control, [{"date": "2025-04-30", "ref": "measurement/m1"}])) == {null}
+	count(measured_after_means.not_owed) == 0 with input as group(control, [])
+}
+
+test_measured_on_the_day if answers(group(control, [{"date": "2025-05-01", "ref": "measurement/m1"}])) == {{"date": "2025-05-01", "ref": "measurement/m1"}}
+
+test_not_owed if {
+	every day in [null, "2023-06-15"] {
+		answers(group(object.union(control, {"installed_on": day}), [])) == set()
+		count(measured_after_means.not_owed) == 1 with input as group(object.union(control, {"installed_on": day}), [])
+	}
+}

@@ -1,0 +1,56 @@
+# METADATA
+# title: Audiogram evaluated
+# description: >-
+#   A physician, an audiologist, or a qualified technician under one of them determines of each audiogram whether it is
+#   valid and whether it shows a standard threshold shift or a reportable hearing loss. The interpretation is obtained
+#   within 30 calendar days of the test.
+# custom:
+#   cite: 30 CFR 62.172(a)(2), (a)(4)
+#   subject: worker
+#   topic: audiometry
+#   severity: major
+#   evidence: [audiogram, tester]
+#   remedy: Have a physician, audiologist or qualified technician evaluate the audiogram, and enter who did it and when.
+package duty.audiogram_evaluated
+
+import rego.v2
+
+obligations contains object.union(verdict(test), {
+	"key": test.id,
+	"health": test.hearing,
+	"because": [test.ref],
+}) if {
+	some test in program_tests
+}
+
+program_tests := [test | some test in input.audiograms; test.in_program]
+
+evaluators := {"physician", "otolaryngologist", "audiologist", "technician"}
+
+verdict(test) := {
+	"after": test.date,
+	"within": "results_time",
+	"by": null,
+	"note": sprintf("no evaluation of the audiogram of %s is on record", [test.date]),
+} if {
+	test.reviewed_on == null
+} else := {
+	"holds": null,
+	"on": test.date,
+	"note": sprintf("it is not known who evaluated the audiogram of %s", [test.date]),
+	"missing": ["the profession of who evaluated it"],
+} if {
+	test.reviewer_is == null
+} else := {
+	"holds": false,
+	"on": test.date,
+	"note": sprintf("who evaluated the audiogram of %s is neither physician, audiologist nor technician", [test.date]),
+} if {
+	not test.reviewer_is in evaluators
+} else := {
+	"after": test.date,
+	"within": "results_time",
+	"by": {"date": test.reviewed_on, "ref": test.ref},
+}
+
+not_owed contains "there is no audiogram under the program" if count(program_tests) == 0

@@ -1,0 +1,46 @@
+package duty.program_elements_test
+
+import data.duty.program_elements
+import rego.v2
+
+paper(kind, covers) := {"kind": kind, "date": "2024-01-10", "ref": "document/1", "covers": covers}
+
+site(papers) := {"as_of": "2026-06-30", "enrolled_ever": 12, "documents": papers}
+
+obligation(dossier) := only if {
+	all := program_elements.obligations with input as dossier
+	some only in all
+	count(all) == 1
+}
+
+test_all_covered if {
+	found := obligation(site([paper("hearing_conservation_programme", ["monitoring", "protectors", "audiometry", "training", "records"])]))
+	found.holds == true
+	found.because == ["document/1"]
+}
+
+test_two_papers_add_up if obligation(site([paper("hearing_conservation_programme", ["monitoring"]), paper("hearing_conservation_programme", ["protectors", "audiometry", "training", "records"])])).holds == true
+
+test_something_left_out if {
+	found := obligation(site([paper("hearing_conservation_programme", ["monitoring"])]))
+	found.holds == false
+	found.note == "the document leaves out: protectors, audiometry, training, records"
+}
+
+test_paper_does_not_say_what_it_covers if {
+	found := obligation(site([paper("hearing_conservation_programme", [])]))
+	found.holds == null
+	found.missing == ["what the document covers"]
+}
+
+test_missing if {
+	found := obligation(site([paper("advice", ["monitoring", "protectors", "audiometry", "training", "records"])]))
+	found.holds == false
+	count(program_elements.not_owed) == 0 with input as site([])
+}
+
+test_not_owed if {
+	quiet := {"as_of": "2026-06-30", "enrolled_ever": 0, "documents": []}
+	program_elements.obligations == set() with input as quiet
+	count(program_elements.not_owed) == 1 with input as quiet
+}
