@@ -37,7 +37,7 @@ func (t *Thresholds) Read(c grid.Cell, hz int) (text string, masked bool, p *Pro
 	}
 	if inner, ok := t.unmasked(s); ok {
 		if inner == "" {
-			return "", false, problem("the cell has a sign of masking but no level", "Look up the level, and correct the cell")
+			return "", false, maskedAlone()
 		}
 		s, masked = inner, true
 		if text, found, p := t.word(s, hz); found {
@@ -51,8 +51,14 @@ func (t *Thresholds) Read(c grid.Cell, hz int) (text string, masked bool, p *Pro
 		text, p = t.level(grid.Cell{Text: level}, "NR>")
 		return text, masked && p == nil, p
 	}
-	text, p = t.level(grid.Cell{Text: s, Kind: c.Kind}, "")
+	if text, p = t.level(grid.Cell{Text: s, Kind: c.Kind}, ""); masked && text == "" && p == nil {
+		p = maskedAlone() // what is left, such as ="", says nothing
+	}
 	return text, masked && p == nil, p
+}
+
+func maskedAlone() *Problem {
+	return problem("the cell has a sign of masking but no level", "Look up the level, and correct the cell")
 }
 
 // word tells whether the cell is one of the words listed, and what that gives.
