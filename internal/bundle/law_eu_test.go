@@ -58,7 +58,7 @@ func holdToSheet(t *testing.T, b *Bundle, sheet []sheetNumber) {
 		case want.ends != "":
 			interval, ok := v.Interval()
 			require.True(t, ok, want.parameter)
-			end, err := interval.After(start, nil)
+			end, err := interval.After(start, b.Week)
 			require.NoError(t, err)
 			assert.Equal(t, want.ends, end.String(), want.parameter)
 		case want.words != nil:
@@ -97,25 +97,25 @@ func holdToParagraphs(t *testing.T, b *Bundle, prefix string) {
 }
 
 const (
-	ofDirective = "Directive 2003/10/EC "
-	transposed  = "2006-02-15" // Article 17: last day of transposition
+	euCite       = "Directive 2003/10/EC "
+	euTransposed = "2006-02-15" // Article 17: last day of transposition
 )
 
 // euNumbers are the numbers of sheet section 2 and the lists of section 3.
 var euNumbers = []sheetNumber{
-	{parameter: "lower_action_level", number: 80, unit: "dBA", cite: ofDirective + "Art 3(1)(c)", from: transposed, seen: "text"},
-	{parameter: "lower_action_peak", number: 135, unit: "dBC", cite: ofDirective + "Art 3(1)(c)", from: transposed, seen: "text"},
-	{parameter: "upper_action_level", number: 85, unit: "dBA", cite: ofDirective + "Art 3(1)(b)", from: transposed, seen: "text"},
-	{parameter: "upper_action_peak", number: 137, unit: "dBC", cite: ofDirective + "Art 3(1)(b)", from: transposed, seen: "text"},
-	{parameter: "limit_level", number: 87, unit: "dBA", cite: ofDirective + "Art 3(1)(a), 3(2)", from: transposed, seen: "text"},
-	{parameter: "limit_peak", number: 140, unit: "dBC", cite: ofDirective + "Art 3(1)(a), 3(2)", from: transposed, seen: "text"},
-	{parameter: "weekly_limit", number: 87, unit: "dBA", cite: ofDirective + "Art 3(3)(a)", from: transposed, seen: "text"},
+	{parameter: "lower_action_level", number: 80, unit: "dBA", cite: euCite + "Art 3(1)(c)", from: euTransposed, seen: "text"},
+	{parameter: "lower_action_peak", number: 135, unit: "dBC", cite: euCite + "Art 3(1)(c)", from: euTransposed, seen: "text"},
+	{parameter: "upper_action_level", number: 85, unit: "dBA", cite: euCite + "Art 3(1)(b)", from: euTransposed, seen: "text"},
+	{parameter: "upper_action_peak", number: 137, unit: "dBC", cite: euCite + "Art 3(1)(b)", from: euTransposed, seen: "text"},
+	{parameter: "limit_level", number: 87, unit: "dBA", cite: euCite + "Art 3(1)(a), 3(2)", from: euTransposed, seen: "text"},
+	{parameter: "limit_peak", number: 140, unit: "dBC", cite: euCite + "Art 3(1)(a), 3(2)", from: euTransposed, seen: "text"},
+	{parameter: "weekly_limit", number: 87, unit: "dBA", cite: euCite + "Art 3(3)(a)", from: euTransposed, seen: "text"},
 	{parameter: "assessment_heads", words: []any{"level_type_duration", "limit_and_action_values", "sensitive_groups", "ototoxics_and_vibration", "warning_signals", "emission_data",
-		"quieter_alternatives", "exposure_beyond_hours", "health_surveillance_findings", "adequate_protectors"}, cite: ofDirective + "Art 4(6)(a)-(j)", from: transposed, seen: "secondary"},
-	{parameter: "limit_action_heads", words: []any{"exposure_reduced", "reasons_found", "measures_amended"}, cite: ofDirective + "Art 7(2)(a)-(c)", from: transposed, seen: "secondary"},
+		"quieter_alternatives", "exposure_beyond_hours", "health_surveillance_findings", "adequate_protectors"}, cite: euCite + "Art 4(6)(a)-(j)", from: euTransposed, seen: "secondary"},
+	{parameter: "limit_action_heads", words: []any{"exposure_reduced", "reasons_found", "measures_amended"}, cite: euCite + "Art 7(2)(a)-(c)", from: euTransposed, seen: "secondary"},
 	{parameter: "information_topics", words: []any{"noise_effects", "measures", "limit_values", "assessment_results", "protectors", "damage_reporting", "health_surveillance", "safe_practices"},
-		cite: ofDirective + "Art 8(a)-(h)", from: transposed, seen: "secondary"},
-	{parameter: "consultation_heads", words: []any{"assessment", "measures", "protectors"}, cite: ofDirective + "Art 9", from: transposed, seen: "secondary"},
+		cite: euCite + "Art 8(a)-(h)", from: euTransposed, seen: "secondary"},
+	{parameter: "consultation_heads", words: []any{"assessment", "measures", "protectors"}, cite: euCite + "Art 9", from: euTransposed, seen: "secondary"},
 }
 
 func TestDirectiveNumbersAreAsPrinted(t *testing.T) {

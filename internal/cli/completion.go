@@ -15,6 +15,7 @@ import (
 	"hearduty/internal/report/change"
 	"hearduty/internal/report/pull"
 	"hearduty/internal/report/rulebook"
+	"hearduty/internal/report/switchover"
 	"hearduty/policies"
 )
 
@@ -83,6 +84,9 @@ func candidates(app *cli.App, before []string, last string) []string {
 			if command.Name == "bundle" && name == "format" {
 				return rulebook.Forms
 			}
+			if command.Name == "switch" && name == "format" {
+				return switchover.Names
+			}
 			if command.Name == "sample" && name == "format" {
 				return pull.Names()
 			}
@@ -117,7 +121,7 @@ func valuesOf(flag string, words []string, last string) []string {
 	switch flag {
 	case "format":
 		return report.Names()
-	case "bundle":
+	case "bundle", "from", "to":
 		return bundleIDs()
 	case "subject":
 		return dossier.Kinds

@@ -73,6 +73,7 @@ func TestThresholdsRefused(t *testing.T) {
 		{both, text("x"), 500, "both as no response and as not tested", ""},
 		{clinic(), text(">"), 500, "a mark of no response, but no level", "no_response.words"},
 		{clinic(), text("m"), 500, "a sign of masking but no level", ""},
+		{clinic(), text("=\"\"m"), 500, "a sign of masking but no level", ""},
 		{clinic(), text("[]"), 500, "a sign of masking but no level", ""},
 		{bare, text("NR"), 500, "neither a level nor a word", "no_response.words, not_tested or blank"},
 		{bare, text("NT"), 500, "neither a level nor a word", "not_tested"},

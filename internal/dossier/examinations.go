@@ -33,7 +33,8 @@ const (
 )
 
 // examinations writes the examinations up to the as-of day and adds their series. A hearing test on record counts as
-// offered and done on its day, whether it came with thresholds or with an outcome only.
+// offered and done on its day, whether it came with thresholds or with an outcome only; one that was found invalid as
+// offered only, and a retest that stands in for a test as done only.
 func (b *Builder) examinations(w *WorkerRecords, h *hearing, refs Refs, series map[string][]Link) []Examination {
 	out := []Examination{}
 	add := func(name string, day Date, ref string) {
@@ -42,10 +43,10 @@ func (b *Builder) examinations(w *WorkerRecords, h *hearing, refs Refs, series m
 		}
 	}
 	for _, t := range h.tests {
+		if t.retestOf == nil {
+			add(testOffered, t.rec.Date, t.ref)
+		}
 		if t.counts() {
-			if t.retestOf == nil {
-				add(testOffered, t.rec.Date, t.ref)
-			}
 			add(testDone, t.rec.Date, t.ref)
 		}
 	}

@@ -19,7 +19,7 @@ var Kinds = []string{KindWorker, KindGroup, KindArea, KindSite, KindInstrument, 
 //	protector.issue      protectors handed over; one still at hand when a stretch in the program begins counts from that day
 //	protector.worn       checks that found protectors worn
 //	measurement.any      noise measurements
-//	test.offered         offers of a hearing test, and hearing tests made
+//	test.offered         offers of a hearing test, and hearing tests made, also invalid ones; but no retests that stand in for a test
 //	test.done            hearing tests made, with thresholds or with an outcome only
 //	appointment.offered  offers of a health appointment, and appointments without one on record
 //	appointment.attended health appointments that were attended

@@ -114,16 +114,16 @@ func (s *switcher) numbers(topic string) SwitchNumbers {
 
 func (s *switcher) topic(topic string) SwitchTopic {
 	out := SwitchTopic{Topic: topic, Numbers: s.numbers(topic), FromDuties: s.dutiesOf(oldSide, topic), ToDuties: s.dutiesOf(newSide, topic),
-		FromHas: s.has(oldSide, topic), ToHas: s.has(newSide, topic), Values: s.values(topic)}
+		FromHas: s.has(oldSide, topic, ""), ToHas: s.has(newSide, topic, ""), Values: s.values(topic)}
 	out.Moves, out.Same = s.moves(topic)
 	return out
 }
 
-// has counts the duties that the bundles of a side have under a topic.
-func (s *switcher) has(k side, topic string) int {
+// has counts the duties that the bundles of a side have under a topic, of one kind of subject or of all.
+func (s *switcher) has(k side, topic, kind string) int {
 	n := 0
 	for i := range s.Report.Duties {
-		if d := &s.Report.Duties[i]; d.Topic == topic && slices.Contains(s.bundles[k], d.Bundle) {
+		if d := &s.Report.Duties[i]; d.Topic == topic && (kind == "" || d.Subject == kind) && slices.Contains(s.bundles[k], d.Bundle) {
 			n++
 		}
 	}

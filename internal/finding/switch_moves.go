@@ -41,9 +41,10 @@ func (s *switcher) stands(k side, topic string) map[Subject]stand {
 
 func urgencyOf(standing string) int { return slices.Index(Standings, standing) }
 
-// absent gives how a subject stands on a side that has no finding about it.
-func (s *switcher) absent(k side, subject Subject) stand {
-	if subject.Kind == "worker" && slices.ContainsFunc(s.open[k][subject.ID], func(u *Unmeasured) bool { return u.EnrolsNow }) {
+// absent gives how a subject stands on a side that has no finding about it. Where the side asks something of workers
+// under the topic, it may be that nothing is owed only because the exposure is not known.
+func (s *switcher) absent(k side, topic string, subject Subject) stand {
+	if subject.Kind == "worker" && s.has(k, topic, "worker") > 0 && slices.ContainsFunc(s.open[k][subject.ID], func(u *Unmeasured) bool { return u.EnrolsNow }) {
 		return stand{word: NotKnown}
 	}
 	return stand{word: NotOwed}
@@ -57,11 +58,11 @@ func (s *switcher) moves(topic string) (list []SwitchMove, same int) {
 	for subject := range union(before, after) {
 		o, ok := before[subject]
 		if !ok {
-			o = s.absent(oldSide, subject)
+			o = s.absent(oldSide, topic, subject)
 		}
 		n, ok := after[subject]
 		if !ok {
-			n = s.absent(newSide, subject)
+			n = s.absent(newSide, topic, subject)
 		}
 		if o.word == n.word {
 			same++

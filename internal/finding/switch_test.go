@@ -16,7 +16,7 @@ func judged(list ...Finding) *Judged {
 		Sites: []Site{{ID: "a", Name: "A", Bundles: []string{"old", "new"}, Workers: 3}}, Bundles: []Bundle{{ID: "new"}, {ID: "old"}},
 		Duties: []Duty{
 			{Bundle: "new", ID: "fit-test", Title: "Fit test", Cite: "N 3", Topic: "protectors", Evidence: []string{"fit_test", "protector_issue"}},
-			{Bundle: "new", ID: "test", Title: "Test", Cite: "N 1", Topic: "audiometry", Evidence: []string{"audiogram"}},
+			{Bundle: "new", ID: "test", Title: "Test", Cite: "N 1", Topic: "audiometry", Subject: "worker", Evidence: []string{"audiogram"}},
 			{Bundle: "old", ID: "test", Title: "Test", Cite: "O 1", Topic: "audiometry", Evidence: []string{"audiogram"}},
 			{Bundle: "old", ID: "posting", Title: "Posting", Cite: "O 2", Topic: "information", Evidence: []string{"document"}},
 		},
@@ -154,6 +154,11 @@ func TestSwitchExposureOnceAGroup(t *testing.T) {
 	assert.Equal(t, []SwitchGroup{{"press", 19}}, tests.Moves[0].Groups)
 	assert.Empty(t, tests.Moves[0].Subjects)
 	assert.Equal(t, [3]any{Vanishes, NotOwed, "W00"}, [3]any{tests.Moves[1].Change, tests.Moves[1].After, tests.Moves[1].Subjects[0]}, "the exposure of W00 is known today")
+
+	j.Report.Duties[1].Subject = "site"
+	tests = onlySite(t, j).Topics[1]
+	require.Len(t, tests.Moves, 1)
+	assert.Equal(t, [2]any{NotOwed, 20}, [2]any{tests.Moves[0].After, tests.Moves[0].Number}, "the new law asks nothing of workers here, whatever their exposure")
 }
 
 // TestSwitchNeeds: each thing that is lacking is told once, with how many lack it, and whether the old law does, too.
@@ -200,6 +205,8 @@ func TestSwitchSharedBundle(t *testing.T) {
 	assert.Equal(t, 1, site.Topics[1].Same)
 	assert.Equal(t, Vanishes, site.Topics[0].Moves[0].Change)
 }
+
+func TestTallyHasRoomForEveryTopic(t *testing.T) { assert.Len(t, Topics, topicNumber) }
 
 // TestSwitchIsTheSame: the same input gives the same switch, whatever the order of maps.
 func TestSwitchIsTheSame(t *testing.T) {

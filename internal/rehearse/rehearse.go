@@ -126,17 +126,3 @@ func (r *Result) finish(err error) (*Result, error) {
 	})
 	return r, nil
 }
-
-// Silent lists the duties about which no law case holds that they fire, and those about which none holds that they stay
-// quiet.
-func (r *Result) Silent() (neverFire, neverQuiet []string) {
-	for _, d := range r.Duties {
-		if d.Fires == 0 {
-			neverFire = append(neverFire, d.ID)
-		}
-		if d.Quiet == 0 {
-			neverQuiet = append(neverQuiet, d.ID)
-		}
-	}
-	return neverFire, neverQuiet
-}

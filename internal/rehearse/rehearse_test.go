@@ -6,6 +6,7 @@ import (
 	"strings"
 	"testing"
 	"testing/fstest"
+	"time"
 
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
@@ -85,9 +86,6 @@ func TestGoodBundleRehearsesGreen(t *testing.T) {
 	assert.Equal(t, 2, r.Lines)
 	assert.Equal(t, 2, r.Reached)
 	assert.Equal(t, []DutyCases{{ID: "posting", Quiet: 1}}, r.Duties)
-	fire, quiet := r.Silent()
-	assert.Equal(t, []string{"posting"}, fire, "no case shows a gap")
-	assert.Empty(t, quiet)
 	var out bytes.Buffer
 	require.NoError(t, r.Write(&out))
 	assert.Equal(t, `small, revision 1
@@ -247,4 +245,19 @@ func TestCancelledRehearsalGivesAnError(t *testing.T) {
 	stop()
 	_, err := Run(ctx, b, Options{})
 	require.ErrorIs(t, err, context.Canceled)
+}
+
+// TestEndlessTestsAreCutOff: each test after its own time, and all together after theirs.
+func TestEndlessTestsAreCutOff(t *testing.T) {
+	one, all := testLimit, allLimit
+	t.Cleanup(func() { testLimit, allLimit = one, all })
+	fsys := bundletest.Change(small(), tests, "test_nobody_works_here", "test_endless if {\n\tmany := numbers.range(1, 1000000)\n\tcount([x | some x in many; some y in many; x + y == 0]) == 1\n}\n\ntest_nobody_works_here")
+	testLimit = 200 * time.Millisecond
+	r := try(t, fsys, Options{})
+	require.Len(t, r.Failures, 1, texts(r))
+	assert.Contains(t, texts(r), "small/duty/posting/posting_test.rego:23: the test duty.posting_test.test_endless cannot be run.")
+	testLimit, allLimit = one, 300*time.Millisecond
+	r = try(t, fsys, Options{})
+	require.Len(t, r.Failures, 1, texts(r))
+	assert.Contains(t, texts(r), "small: the tests of rules take longer than 300ms together. Find the test that does not end with --duty.")
 }

@@ -24,8 +24,15 @@ import (
 	"hearduty/internal/diag"
 )
 
-// testLimit is the time that one test of a rule may take.
-const testLimit = 30 * time.Second
+// testLimit is the time that one test of a rule may take, and allLimit that of all tests of a bundle together. Tests of
+// this package shorten them.
+var (
+	testLimit = 30 * time.Second
+	allLimit  = 5 * time.Minute
+)
+
+// traceLimit is how long a test that failed may have taken to be run once more with a trace, which takes much memory.
+const traceLimit = time.Second
 
 // leastTests is the number of tests that each duty needs: one in which it fires, and one in which it does not.
 const leastTests = 2
@@ -105,7 +112,14 @@ func (r *Result) ruleTests(ctx context.Context, o Options) error {
 	if o.Duty != "" {
 		runner.Filter(`^data\.duty\.` + regexp.QuoteMeta(packageOf(o.Duty)) + `_test\.`)
 	}
-	results, err := runAll(ctx, store, runner)
+	limited, stop := context.WithTimeout(ctx, allLimit)
+	defer stop()
+	results, err := runAll(limited, store, runner)
+	if limited.Err() != nil && ctx.Err() == nil {
+		r.Failures = append(r.Failures, Failure{At: diag.Position{File: r.Bundle.ID}, What: fmt.Sprintf("the tests of rules take longer than %s together", allLimit),
+			Remedy: "Find the test that does not end with --duty"})
+		return nil
+	}
 	var broken ast.Errors
 	if errors.As(err, &broken) {
 		r.regoErrors(r.Bundle.ID, err)
@@ -151,13 +165,18 @@ func (r *Result) explainTests(ctx context.Context, store storage.Store, compiler
 	}
 	var names []string
 	for _, t := range failed {
-		names = append(names, regexp.QuoteMeta(t.Package+"."+t.Name))
+		if t.Error == nil && !t.Skip && t.Duration < traceLimit {
+			names = append(names, regexp.QuoteMeta(t.Package+"."+t.Name))
+		}
 	}
 	traces := map[string][]*topdown.Event{}
 	runner := tester.NewRunner().SetStore(store).SetTimeout(testLimit).SetCompiler(compiler).EnableTracing(true).Filter("^(" + strings.Join(names, "|") + ")$")
-	if again, err := runAll(ctx, store, runner); err == nil {
+	if len(names) > 0 {
+		again, err := runAll(ctx, store, runner)
 		for _, t := range again {
-			traces[t.Package+"."+t.Name] = t.Trace
+			if err == nil {
+				traces[t.Package+"."+t.Name] = t.Trace
+			}
 		}
 	}
 	for _, t := range failed {

@@ -20,6 +20,7 @@ var (
 	pages = template.Must(template.New("page").Funcs(template.FuncMap{
 		"mark": html.Mark, "part": text.SwitchPart, "standing": text.StandingWords, "sides": sidesOf, "differing": differing, "differs": differs, "still": still,
 		"words":    func(list []string) string { return strings.Join(list, ", ") },
+		"spaced":   func(name string) string { return strings.ReplaceAll(name, "_", " ") },
 		"onesided": func(t finding.SwitchTopic) []string { return text.OneSided(&t) },
 		"needs":    func(s finding.SwitchSite) []string { return text.SwitchNeeds(&s) },
 	}).Parse(pageText))
@@ -54,14 +55,7 @@ func sidesOf(title string, n finding.SwitchNumbers) sides {
 }
 
 // differing tells the parameters of a topic that are not the same on both sides.
-func differing(t finding.SwitchTopic) (out []string) {
-	for i := range t.Values {
-		if v := &t.Values[i]; v.Differs() {
-			out = append(out, text.SwitchValue(v))
-		}
-	}
-	return out
-}
+func differing(t finding.SwitchTopic) []string { return text.SwitchValues(&t) }
 
 func differs(t finding.SwitchTopic) bool { return len(differing(t)) > 0 }
 

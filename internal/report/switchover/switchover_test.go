@@ -53,7 +53,8 @@ func sample() *finding.Switch {
 			{Change: finding.Changes, Kind: "worker", Before: "gap", After: finding.NotKnown, Number: 5, Subjects: []string{}, Groups: some, FromDuties: duty("old", "training", 5), ToDuties: none},
 			{Change: finding.Vanishes, Kind: "site", Before: "late", After: finding.NotOwed, Number: 1, Subjects: []string{"kiln-hill"}, Groups: []finding.SwitchGroup{}, FromDuties: duty("old", "training", 1), ToDuties: none},
 		},
-		Values: []finding.SwitchValue{{Name: "training_interval", From: interval("12 months", "text"), To: interval("6 months", "memory")}, {Name: "same", From: interval("1", "text"), To: interval("1", "text")}}}
+		Values: []finding.SwitchValue{{Name: "training_interval", From: interval("12 months", "text"), To: interval("6 months", "memory")}, {Name: "same", From: interval("1", "text"), To: interval("1", "text")},
+			{Name: "only_old", From: interval("2 years", "text"), To: []finding.Parameter{}}, {Name: "only_new", From: []finding.Parameter{}, To: interval("3 h", "text")}}}
 	fit := finding.SwitchTopic{Topic: "protectors", Numbers: finding.SwitchNumbers{From: map[finding.Status]int{}, To: map[finding.Status]int{finding.Gap: 1}}, ToHas: 1, FromDuties: []finding.SwitchDuty{},
 		ToDuties: []finding.SwitchDuty{{Bundle: "new", Duty: "fit-test", Cite: "new 2", Evidence: []string{"fit_test"}, Numbers: map[finding.Status]int{finding.Gap: 1}}},
 		Moves:    []finding.SwitchMove{{Change: finding.Appears, Kind: "worker", Before: finding.NotOwed, After: "gap", Number: 1, Subjects: []string{"W1"}, Groups: []finding.SwitchGroup{}, FromDuties: none, ToDuties: duty("new", "fit-test", 1)}},

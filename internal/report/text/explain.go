@@ -28,7 +28,7 @@ func Explain(w io.Writer, e *judge.Explanation, o Format) error {
 		p.para(2, 2, "What to do: "+sentence(f.Remedy))
 	}
 	if b := e.Bundle; b != nil {
-		p.para(2, 2, fmt.Sprintf("Bundle %s, revision %s: %s.", b.ID, b.Revision, b.About.Title))
+		p.para(2, 2, fmt.Sprintf("Bundle %s, revision %s: %s.", b.ID, b.Revision, b.About.Title)+signature(b.Signature))
 	}
 
 	p.heading(bold, "What was found")

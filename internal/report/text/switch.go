@@ -42,7 +42,7 @@ func Switch(w io.Writer, s *finding.Switch, o Format) error {
 func switchLevels(p *page, s *finding.Switch) {
 	p.heading(bold, "Exposure levels")
 	for _, l := range s.Levels {
-		title := l.Bundle + ": " + l.Name
+		title := l.Bundle + ": " + strings.ReplaceAll(l.Name, "_", " ")
 		if l.Enrols {
 			title += ", which puts a worker into the program"
 		}
@@ -153,17 +153,52 @@ func switchTopic(p *page, site *finding.SwitchSite, t *finding.SwitchTopic) {
 
 // switchValues tells the parameters of a topic that are not the same on both sides.
 func switchValues(p *page, t *finding.SwitchTopic, title string) {
+	list := SwitchValues(t)
+	if len(list) > 0 {
+		p.para(2, 4, title)
+	}
+	for _, text := range list {
+		p.item(2, "- ", text)
+	}
+}
+
+// SwitchValues tells the parameters of a topic that are not the same on both sides: each that both have under one name,
+// and in one sentence a side those that it alone has.
+func SwitchValues(t *finding.SwitchTopic) []string {
+	var out, onlyA, onlyB []string
 	for i := range t.Values {
 		v := &t.Values[i]
-		if !v.Differs() {
-			continue
+		name := strings.ReplaceAll(v.Name, "_", " ")
+		switch {
+		case !v.Differs():
+		case len(v.To) == 0:
+			onlyA = append(onlyA, name+" "+valueWords(v.From))
+		case len(v.From) == 0:
+			onlyB = append(onlyB, name+" "+valueWords(v.To))
+		default:
+			out = append(out, sentence(name+": A "+valueWords(v.From)+"; B "+valueWords(v.To)))
 		}
-		if title != "" {
-			p.para(2, 4, title)
-		}
-		title = ""
-		p.item(2, "- ", SwitchValue(v))
 	}
+	if len(onlyA) > 0 {
+		out = append(out, sentence("Only A: "+strings.Join(onlyA, "; ")))
+	}
+	if len(onlyB) > 0 {
+		out = append(out, sentence("Only B: "+strings.Join(onlyB, "; ")))
+	}
+	return out
+}
+
+// valueWords writes the values of a parameter, one a bundle of a side.
+func valueWords(list []finding.Parameter) string {
+	var parts []string
+	for _, x := range list {
+		part := x.Value + " (" + x.Cite
+		if x.Seen == "memory" {
+			part += ", not checked against the text"
+		}
+		parts = append(parts, part+")")
+	}
+	return strings.Join(parts, " and ")
 }
 
 // OneSided says which side has no duty, or no finding, under a topic, and by which duties the other one has some.
@@ -248,23 +283,4 @@ func switchGroup(g finding.SwitchGroup) string {
 		return count(g.Workers, "worker", "workers") + " in no group"
 	}
 	return fmt.Sprintf("%s of the group %s", count(g.Workers, "worker", "workers"), g.Group)
-}
-
-// SwitchValue writes a parameter as each side has it.
-func SwitchValue(v *finding.SwitchValue) string {
-	side := func(list []finding.Parameter) string {
-		if len(list) == 0 {
-			return "none of this name"
-		}
-		var parts []string
-		for _, x := range list {
-			part := x.Value + " (" + x.Cite
-			if x.Seen == "memory" {
-				part += ", not checked against the text"
-			}
-			parts = append(parts, part+")")
-		}
-		return strings.Join(parts, " and ")
-	}
-	return sentence(strings.ReplaceAll(v.Name, "_", " ") + ": A " + side(v.From) + "; B " + side(v.To))
 }

@@ -79,9 +79,13 @@ func switchExposure(e *finding.SwitchExposure) string {
 	}
 	var wanted []string
 	for _, m := range e.Wanted {
-		wanted = append(wanted, fmt.Sprintf("the level %s of %s, which is taken as %s", strings.Join(m.Levels, " or "), e.Bundle, m.Taken))
+		levels := "level "
+		if len(m.Levels) > 1 {
+			levels = "levels "
+		}
+		wanted = append(wanted, m.Taken+" ("+levels+strings.ReplaceAll(strings.Join(m.Levels, ", "), "_", " ")+")")
 	}
-	text += ": it is not known whether exposure reaches " + strings.Join(wanted, ", or ") + ": " + strings.Join(shortened(e.Reasons), "; ")
+	text += ": " + e.Bundle + " takes exposure as " + strings.Join(wanted, ", and as ") + ", which the records do not give: " + strings.Join(shortened(e.Reasons), "; ")
 	if e.Before > 0 {
 		text += fmt.Sprintf("; for %d of them the old law cannot tell either", e.Before)
 	}

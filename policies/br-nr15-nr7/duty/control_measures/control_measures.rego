@@ -52,30 +52,11 @@ obligations contains {
 	not answered
 }
 
-obligations contains {
-	"holds": null,
-	"note": "it is not known whether the group is above the tolerance limit",
-	"missing": ["a dose that can be held against the tolerance limit"],
-} if {
-	not above_limit
-	not_known
-}
-
-not_owed contains "the group is not known to be above the tolerance limit" if {
-	not above_limit
-	not not_known
-}
+not_owed contains "the group is not known to be above the tolerance limit" if not above_limit
 
 above_limit if {
 	some stretch in input.exposed.limit
 	stretch.current
-}
-
-# A group that was never measured is the matter of noise-evaluated.
-not_known if {
-	input.first_survey != null
-	some stretch in input.exposure_unknown.limit
-	common.covers(stretch, input.as_of)
 }
 
 latest := input.controls[count(input.controls) - 1]

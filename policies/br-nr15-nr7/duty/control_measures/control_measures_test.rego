@@ -13,8 +13,7 @@ control(feasible, installed) := {
 }
 
 group(exposed, controls) := {
-	"as_of": "2026-06-30", "workers": 12, "controls": controls, "exposed": {"limit": exposed},
-	"exposure_unknown": {"limit": []}, "first_survey": {"date": "2020-01-01", "ref": "measurement/m1"},
+	"workers": 12, "controls": controls, "exposed": {"limit": exposed},
 }
 
 holds(g) := found if found := {object.get(o, "holds", "opinion") | some o in duty.obligations} with input as g
@@ -48,10 +47,4 @@ test_not_above_now if {
 	holds(group([formerly], [])) == set()
 	reasons := duty.not_owed with input as group([formerly], [])
 	count(reasons) == 1
-}
-
-test_not_known if {
-	open := object.union(group([], []), {"exposure_unknown": {"limit": [{"from": "2025-01-01", "to": null, "reason": "not measured"}]}})
-	holds(open) == {null}
-	holds(object.union(open, {"first_survey": null})) == set()
 }

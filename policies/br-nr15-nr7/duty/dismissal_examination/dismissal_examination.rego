@@ -3,7 +3,8 @@
 # description: >-
 #   At dismissal a clinical examination is made within 10 days of the end of the contract. It is waived if the
 #   latest occupational clinical examination is less than 135 days old (risk degree 1 or 2) or less than 90 days
-#   old (risk degree 3 or 4). This is not the rule of 120 days for the audiometric exam.
+#   old (risk degree 3 or 4). This is not the rule of 120 days for the audiometric exam. It is asked for of those
+#   who worked above the action level.
 # custom:
 #   cite: NR-7 7.5.11
 #   subject: worker
@@ -41,7 +42,13 @@ obligations contains {
 	not waived(departure)
 }
 
-departures := [departure | some departure in input.departures; oldest(departure) != null]
+departures := [departure |
+	some departure in input.departures
+	oldest(departure) != null
+	some stretch in input.enrolled
+	stretch.from <= departure.last
+	not common.over(stretch, departure.from)
+]
 
 limit_of := {"1-2": "exit_clinical_age_low", "3-4": "exit_clinical_age_high"}
 
@@ -52,4 +59,4 @@ waived(departure) if {
 	departure.appointment_age_days < oldest(departure)
 }
 
-not_owed contains "no contract ends" if count(departures) == 0
+not_owed contains "no contract of a worker above the action level ends" if count(departures) == 0

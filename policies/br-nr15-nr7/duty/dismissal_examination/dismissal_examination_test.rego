@@ -12,7 +12,7 @@ value(n) := {"values": [{"from": "2022-01-03", "to": null, "value": n}]}
 
 parameters := {"exit_clinical_age_low": value(135), "exit_clinical_age_high": value(90)}
 
-worker(degree, departures) := {"choices": {"risk_degree": degree}, "departures": departures}
+worker(degree, departures) := {"choices": {"risk_degree": degree}, "departures": departures, "enrolled": [{"from": "2022-06-01", "to": "2023-01-01"}]}
 
 obligation(w) := o if some o in duty.obligations with input as w with data.parameters as parameters
 
@@ -32,6 +32,14 @@ test_not_waived_at_the_age if {
 test_made_afterwards if {
 	link := {"date": "2025-04-10", "ref": "examination/e1"}
 	obligation(worker("3-4", [departure(null, link)])).by == link
+}
+
+test_never_above_the_action_level_in_that_employment if {
+	every enrolled in [[], [{"from": "2020-01-01", "to": "2022-02-01"}], [{"from": "2025-04-01", "to": null}]] {
+		quiet := object.union(worker("3-4", [departure(null, null)]), {"enrolled": enrolled})
+		not obligation(quiet)
+		count(reasons(quiet)) == 1
+	}
 }
 
 test_no_contract_ends if {

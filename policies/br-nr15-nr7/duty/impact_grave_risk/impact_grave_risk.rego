@@ -37,7 +37,7 @@ obligations contains {
 
 not_owed contains "no level of impact noise is on record, which is a finding of its own where impacts occur" if channel == null
 
-found := sprintf("impact noise of %v dB holds a grave and imminent risk", [measured])
+found := sprintf("impact noise of %v dB is above the level of grave and imminent risk", [measured])
 
 # What an impulse detector measured decides; where there was none, the C-weighted level taken fast.
 channel := "impulse" if {

@@ -37,19 +37,7 @@ obligations contains {
 	not checked
 }
 
-obligations contains {
-	"holds": null,
-	"note": sprintf("it is not known whether the worker is above the tolerance limit: %s", [concat("; ", not_known)]),
-	"missing": ["a dose that can be held against the tolerance limit"],
-} if {
-	count(above_limit) == 0
-	count(not_known) > 0
-}
-
-not_owed contains "the worker is not known to be above the tolerance limit" if {
-	count(above_limit) == 0
-	count(not_known) == 0
-}
+not_owed contains "the worker is not known to be above the tolerance limit" if count(above_limit) == 0
 
 above_since := min([stretch.from | some stretch in above_limit])
 
@@ -66,11 +54,3 @@ said := {
 }
 
 above_limit := [stretch | some stretch in input.exposed.limit; stretch.current]
-
-# Of a worker who is not known to be above the action level, enrolment tells.
-not_known := sort({stretch.reason |
-	some enrolled in input.enrolled
-	enrolled.current
-	some stretch in input.exposure_unknown.limit
-	common.covers(stretch, input.as_of)
-})

@@ -37,7 +37,7 @@ obligations contains {
 	"facts": facts,
 } if {
 	count(current) == 0
-	noisy
+	input.first_survey != null
 	count(reasons) > 0
 }
 
@@ -52,27 +52,14 @@ obligations contains {
 	count(reasons) == 0
 }
 
-not_owed contains "the group was never measured, which is a finding of its own where noise is suspected" if {
+not_owed contains "no result gives the group's dose, which is a finding of its own where noise is suspected" if {
 	count(current) == 0
 	input.first_survey == null
-	not noisy
-}
-
-not_owed contains "nothing is known of the group's exposure today" if {
-	count(current) == 0
-	input.first_survey == null
-	noisy
-	count(reasons) == 0
 }
 
 current := [stretch | some stretch in input.exposed.limit; stretch.current]
 
 reasons := sort({stretch.reason | some stretch in input.exposure_unknown.limit; common.covers(stretch, input.as_of)})
-
-# A group that was measured, or of which noise is suspected.
-noisy if input.first_survey != null
-
-noisy if input.suspected_noisy == true
 
 decided_by := [input.now.ref |
 	input.now != null

@@ -38,17 +38,16 @@ test_not_known if {
 	holds(group([], [object.union(open("2024-01-01"), {"to": "2026-06-30"})])) == {true}
 }
 
-test_never_measured if {
+test_no_dose if {
 	never := object.union(group([], [open("2024-01-01")]), {"first_survey": null, "now": null})
-	holds(never) == {null}
-	holds(object.union(never, {"suspected_noisy": false})) == set()
-	count(reasons(object.union(never, {"suspected_noisy": false}))) == 1
+	holds(never) == set()
+	count(reasons(never)) == 1
 }
 
-test_nothing_known_at_all if {
-	nothing := object.union(group([], []), {"first_survey": null, "now": null})
-	holds(nothing) == set()
-	reasons(nothing) == {"nothing is known of the group's exposure today"}
+test_nothing_told_of_today if {
+	bare := object.union(group([], []), {"now": null})
+	some o in duty.obligations with input as bare
+	o.facts == {}
 }
 
 test_now_without_a_measurement if {

@@ -45,7 +45,7 @@ not_owed contains "no means was chosen after a change that brings a risk of exce
 	}
 }
 
-deadline(change) := {"after": change.date, "within": "change_finish_time"} if change.period_short
+deadline(change) := {"after": change.date, "within": "change_finish_time"} if change.period_short == true
 
 deadline(change) := {"before": change.period_ends} if change.period_short == false
 

@@ -53,6 +53,6 @@ covered := false if {
 
 said := "no consultation of the workers or their representatives is on record" if {
 	count(papers) == 0
-} else := sprintf("the workers were not consulted on: %s", [concat(", ", lacking)]) if {
+} else := sprintf("the workers were not consulted on: %s", [replace(concat(", ", lacking), "_", " ")]) if {
 	count(lacking) > 0
 } else := null

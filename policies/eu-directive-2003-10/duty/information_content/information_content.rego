@@ -51,6 +51,6 @@ covered := null if {
 	hidden
 } else := count(lacking) == 0
 
-said := sprintf("the training did not cover: %s", [concat(", ", lacking)]) if count(lacking) > 0
+said := sprintf("the training did not cover: %s", [replace(concat(", ", lacking), "_", " ")]) if count(lacking) > 0
 
 else := null

@@ -47,6 +47,6 @@ covered := null if {
 	hidden
 } else := count(lacking) == 0
 
-said := sprintf("after the limit was exceeded, no record shows: %s", [concat(", ", lacking)]) if count(lacking) > 0
+said := sprintf("after the limit was exceeded, no record shows: %s", [replace(concat(", ", lacking), "_", " ")]) if count(lacking) > 0
 
 else := null

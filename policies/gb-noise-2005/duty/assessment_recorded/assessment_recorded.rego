@@ -54,7 +54,11 @@ papers := [paper | some paper in input.documents; paper.kind == "risk_assessment
 
 latest := papers[count(papers) - 1]
 
-concerned if input.suspected_noisy == true
+concerned if {
+	input.suspected_noisy == true
+	some stretch in input.exposure_unknown.lower
+	common.covers(stretch, input.as_of)
+}
 
 concerned if {
 	some spell in input.exposed.lower

@@ -11,7 +11,7 @@ every_head := data.parameters.assessment_record.values[0].value
 
 paper(day, covers) := {"kind": "risk_assessment", "date": day, "ref": sprintf("document/%s", [day]), "covers": covers}
 
-group(documents) := object.union({"suspected_noisy": null, "exposed": {"lower": [now]}}, {"as_of": "2026-06-30", "documents": documents})
+group(documents) := object.union({"suspected_noisy": null, "exposed": {"lower": [now]}, "exposure_unknown": {"lower": []}}, {"as_of": "2026-06-30", "documents": documents})
 
 obligation(dossier) := only if {
 	all := duty.obligations with input as dossier
@@ -52,11 +52,12 @@ test_none_there if {
 }
 
 test_not_concerned if {
-	out := object.union(group([paper("2024-01-10", [])]), {"suspected_noisy": false, "exposed": {"lower": [past]}})
+	out := object.union(group([paper("2024-01-10", [])]), {"suspected_noisy": true, "exposed": {"lower": [past]}})
 	duty.obligations == set() with input as out
 	count(duty.not_owed) == 1 with input as out
 }
 
-test_suspected_is_enough if {
-	obligation(object.union(group([paper("2024-01-10", every_head)]), {"suspected_noisy": true, "exposed": {"lower": []}})).holds == true
+test_suspected_is_enough_while_the_noise_is_not_known if {
+	suspected := {"suspected_noisy": true, "exposed": {"lower": []}, "exposure_unknown": {"lower": [{"from": "2024-01-01", "to": null, "reason": "not measured"}]}}
+	obligation(object.union(group([paper("2024-01-10", every_head)]), suspected)).holds == true
 }

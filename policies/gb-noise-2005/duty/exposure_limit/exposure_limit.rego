@@ -4,7 +4,9 @@
 #   Nobody is exposed above an exposure limit value. Unlike for the action values, the protection of hearing
 #   protectors that the employer provided under regulation 7(2) counts, for the time in which they are worn: a
 #   worker who was seen without them has none. The level at the ear is estimated by the rating of the protector,
-#   with the allowance that HSE recommends, and its peak by a method from memory.
+#   with the allowance for use in the real world that HSE recommends; where only that allowance makes it exceed the
+#   limit value, the duty is unproven, since the allowance is guidance. The peak at the ear is estimated by a method
+#   from memory.
 # custom:
 #   cite: Control of Noise at Work Regulations regs 6(4)(a), 4(3), 4(5)
 #   subject: worker
@@ -73,21 +75,25 @@ not_known := [stretch.reason |
 	common.covers(stretch, input.as_of)
 ]
 
-# The personal noise exposure: at the ear where a protector counts, else without it.
+# The personal noise exposure: at the ear where a protector counts, else without it. Where only the allowance, which is
+# guidance, lifts it above the limit value, nothing is said to be exceeded.
 level := {
+	"holds": null,
+	"note": sprintf("estimated exposure with the protector: %v dBA with the allowance of %v dB for the real world, which is guidance; without it the limit value would not be exceeded", [at_the_ear, allowance]),
+	"missing": ["an estimate on which the allowance does not decide, such as that of a protector with more attenuation"],
+	"because": array.concat(exposure_refs, protector_refs),
+	"facts": estimate,
+} if {
+	protected
+	at_the_ear > limit
+	at_the_ear - allowance <= limit
+} else := {
 	"value": at_the_ear,
 	"at_most": "limit_value",
 	"note": "estimated exposure with the protector",
 	"missing": input.protection.missing,
 	"because": array.concat(exposure_refs, protector_refs),
-	"facts": {
-		"protector": input.protection.protector,
-		"exposure_dba": input.protection.exposure_dba,
-		"method": input.protection.method,
-		"working": input.protection.working,
-		"formula": input.protection.mark,
-		"for_information": [sprintf("%s: %s", [other.method, other.working]) | some other in input.protection.information],
-	},
+	"facts": estimate,
 } if {
 	protected
 } else := {
@@ -96,6 +102,21 @@ level := {
 	"note": unprotected,
 	"because": array.concat(exposure_refs, seen_without),
 }
+
+estimate := {
+	"protector": input.protection.protector,
+	"exposure_dba": input.protection.exposure_dba,
+	"at_the_ear_dba": at_the_ear,
+	"allowance_db": allowance,
+	"method": input.protection.method,
+	"working": input.protection.working,
+	"formula": input.protection.mark,
+	"for_information": [sprintf("%s: %s", [other.method, other.working]) | some other in input.protection.information],
+}
+
+limit := common.at(data.parameters.limit_value, input.as_of)
+
+allowance := common.at(data.parameters.real_world_allowance, input.as_of)
 
 peak := {
 	"value": input.protection.peak_under_dbc,

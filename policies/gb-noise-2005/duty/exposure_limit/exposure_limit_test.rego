@@ -67,6 +67,17 @@ test_protector_counts if {
 	found.facts.for_information == ["half: 84"]
 }
 
+test_only_the_allowance_exceeds_the_limit if {
+	found := obligation(loud({"protection": object.union(muff, {"under_db": 90.5})}))
+	found.holds == null
+	found.facts.at_the_ear_dba == 90.5
+	found.note == "estimated exposure with the protector: 90.5 dBA with the allowance of 4 dB for the real world, which is guidance; without it the limit value would not be exceeded"
+	obligation(loud({"protection": object.union(muff, {"under_db": 87.1})})).holds == null
+	obligation(loud({"protection": object.union(muff, {"under_db": 91})})).holds == null
+	obligation(loud({"protection": object.union(muff, {"under_db": 91.1})})).value == 91.1
+	obligation(loud({"protection": object.union(muff, {"under_db": 87})})).value == 87
+}
+
 test_estimate_missing if {
 	found := obligation(loud({"protection": object.union(muff, {"under_db": null, "missing": ["the rating"]})}))
 	found.value == null

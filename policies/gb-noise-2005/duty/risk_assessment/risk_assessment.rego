@@ -55,8 +55,13 @@ liable if {
 	spell.current == true
 } else if {
 	input.suspected_noisy == true
+	not_known
 } else := null if {
 	input.suspected_noisy == null
+	not_known
+} else := false
+
+not_known if {
 	some stretch in input.exposure_unknown.lower
 	common.covers(stretch, input.as_of)
-} else := false
+}

@@ -34,12 +34,14 @@ loud := group({"exposed": {"lower": [now]}})
 
 test_noisy_and_not_assessed if obligation(loud).holds == false
 
-test_suspected_and_not_assessed if obligation(group({"suspected_noisy": true})).holds == false
+suspected := group({"suspected_noisy": true, "exposure_unknown": {"lower": [open]}})
+
+test_suspected_and_not_assessed if obligation(suspected).holds == false
 
 test_noise_not_known if obligation(group({"exposure_unknown": {"lower": [open]}})).holds == null
 
 test_assessed if {
-	every g in [loud, group({"suspected_noisy": true}), group({"exposure_unknown": {"lower": [open]}})] {
+	every g in [loud, suspected, group({"exposure_unknown": {"lower": [open]}})] {
 		found := obligation(object.union(g, {"documents": [paper]}))
 		found.holds == true
 		found.because == ["document/ra"]
@@ -52,4 +54,5 @@ test_another_paper if obligation(object.union(loud, {"documents": [object.union(
 test_quiet_work if {
 	quiet(group({"suspected_noisy": false, "exposure_unknown": {"lower": [open]}}))
 	quiet(group({"exposed": {"lower": [past]}}))
+	quiet(group({"suspected_noisy": true}))
 }

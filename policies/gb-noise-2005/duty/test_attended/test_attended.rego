@@ -2,8 +2,8 @@
 # title: Hearing test attended
 # description: >-
 #   The employee attends the procedures of health surveillance that the employer asks for, in working hours and at
-#   the cost of the employer. An offer that was declined, or that nothing came of, stays open until the worker has
-#   come.
+#   the cost of the employer. An offer that was declined or not answered stays open until the worker has come; one
+#   of which nothing more is on record is unproven.
 # custom:
 #   cite: Control of Noise at Work Regulations reg 9(5)
 #   subject: worker
@@ -13,6 +13,7 @@
 #   remedy: Offer the test again, in working hours and at no cost, and explain why the worker has to come.
 package duty.test_attended
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -20,6 +21,7 @@ obligations contains {
 	"holds": attended(offer),
 	"on": offer.offered_on,
 	"note": said(offer),
+	"missing": common.missing(attended(offer), "the test, or the answer of the worker"),
 	"because": [offer.ref],
 	"facts": {"answer": offer.answer},
 } if {
@@ -45,9 +47,9 @@ attended(offer) if {
 	offer.attended_on != null
 } else if {
 	count(later_tests(offer)) > 0
-} else := null if {
-	offer.answer == "accepted"
-} else := false
+} else := false if {
+	offer.answer in ["declined", "no_answer"]
+} else := null
 
 # A test after the offer, whether it was made under another offer or without one.
 later_tests(offer) := [day |
@@ -61,6 +63,6 @@ later_tests(offer) := [day |
 
 said(offer) := "the worker was tested" if {
 	attended(offer) == true
-} else := sprintf("the offer of %s was accepted, and no test is on record", [offer.offered_on]) if {
-	attended(offer) == null
-} else := sprintf("the offer of %s was declined or not answered, and no test is on record", [offer.offered_on])
+} else := sprintf("the offer of %s was declined or not answered, and no test is on record", [offer.offered_on]) if {
+	attended(offer) == false
+} else := sprintf("no test is on record since the offer of %s, and that it was declined is not, either", [offer.offered_on])

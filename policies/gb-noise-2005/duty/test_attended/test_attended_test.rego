@@ -32,14 +32,15 @@ test_declined if {
 	found := obligation(worker([offer("declined", null)], []))
 	found.holds == false
 	found.note == "the offer of 2024-02-01 was declined or not answered, and no test is on record"
-	obligation(worker([offer(null, null)], [])).holds == false
 	obligation(worker([offer("no_answer", null)], [])).holds == false
 }
 
 test_accepted_and_nothing_on_record if {
 	found := obligation(worker([offer("accepted", null)], []))
 	found.holds == null
-	found.note == "the offer of 2024-02-01 was accepted, and no test is on record"
+	found.note == "no test is on record since the offer of 2024-02-01, and that it was declined is not, either"
+	found.missing == ["the test, or the answer of the worker"]
+	obligation(worker([offer(null, null)], [])).holds == null
 }
 
 test_tested_later if {

@@ -49,6 +49,11 @@ test_all_wear if {
 	found.note == "on 2026-03-01 12 of 12 in the zone wore protectors"
 }
 
+test_a_look_before_it_was_a_zone_does_not_count if {
+	obligation(area({"wear_checks": [object.union(check(12, 12), {"date": "2019-12-31"})]})).missing == ["a check of the area"]
+	obligation(area({"wear_checks": [object.union(check(12, 12), {"date": "2020-01-01"})]})).holds == true
+}
+
 test_one_without if obligation(area({"wear_checks": [check(12, 12), check(12, 11)]})).holds == false
 
 test_numbers_missing if {

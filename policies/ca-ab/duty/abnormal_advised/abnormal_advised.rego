@@ -1,0 +1,90 @@
+# METADATA
+# title: Worker advised of an abnormal result
+# description: >-
+#   Where a test shows an abnormal audiogram or an abnormal shift the technician advises the worker. The wording of
+#   2009 was read; it sets no time.
+# custom:
+#   cite: OHS Code, s. 223(3)(a)
+#   subject: worker
+#   topic: follow-up
+#   severity: major
+#   evidence: [audiogram, examination, notice, follow_up]
+#   remedy: Advise the worker of the result now, and record the day.
+package duty.abnormal_advised
+
+import rego.v2
+
+obligations contains {
+	"key": test.id,
+	"after": test.date,
+	"by": first(test),
+	"note": sprintf("the test of %s is abnormal", [test.date]),
+	"because": [test.ref],
+	"facts": {"definitions_met": test.definitions},
+} if {
+	some test in abnormal
+}
+
+not_owed contains "no test under the program is known to be abnormal" if count(abnormal) == 0
+
+first(test) := {"date": list[0][0], "ref": list[0][1]} if {
+	list := sort(test.told)
+	count(list) > 0
+} else := null
+
+# Tests that are abnormal: by the former definitions, by what was done or told after them, or by the outcome that the
+# clinic gave.
+abnormal := array.concat(
+	[{"id": a.id, "date": a.date, "ref": a.ref, "definitions": shown(a), "done": own(a, a.follow_ups), "told": told_of(a)} |
+		some a in input.audiograms
+		a.in_program
+		count(shown(a)) + count(marks(a)) > 0
+	],
+	[{"id": e.id, "date": e.attended_on, "ref": e.ref, "definitions": [], "done": e.follow_ups, "told": results_of(e)} |
+		some e in input.examinations
+		e.kind == "hearing_test"
+		e.attended_on != null
+		not e.attended_on in {a.date | some a in input.audiograms}
+		found_abnormal(e)
+	],
+)
+
+found_abnormal(e) if e.damage == true
+
+found_abnormal(e) if e.result in ["early_signs", "concern", "worse", "referred"]
+
+marks(audiogram) := array.concat(
+	[done.ref | some done in own(audiogram, audiogram.follow_ups); done.kind in ["referral", "history_forwarded", "medical_opinion"]],
+	[notice.ref | some notice in own(audiogram, audiogram.notices); notice.about in ["abnormal_result", "shift"]],
+)
+
+# What was done or told after an audiogram and before the next test of which the outcome alone is on record.
+own(audiogram, list) := [item |
+	some item in list
+	every e in input.examinations {
+		not comes_between(e, audiogram, item)
+	}
+]
+
+comes_between(e, audiogram, item) if {
+	e.kind == "hearing_test"
+	e.attended_on > audiogram.date
+	e.attended_on <= item.date
+}
+
+told_of(audiogram) := array.concat(
+	[[notice.date, notice.ref] | some notice in own(audiogram, audiogram.notices); notice.about in ["abnormal_result", "shift"]],
+	[[done.date, done.ref] | some done in own(audiogram, audiogram.follow_ups); done.kind == "worker_informed"],
+)
+
+results_of(e) := array.concat(
+	[[e.results_on, e.ref] | e.results_on != null],
+	[[done.date, done.ref] | some done in e.follow_ups; done.kind == "worker_informed"],
+)
+
+# The definitions of the former section 1 that a test meets, in either ear.
+shown(test) := sort({name |
+	some name in ["abnormal_low", "abnormal_high", "one_sided", "abnormal_shift"]
+	some ear in ["left", "right"]
+	test.schemes[name][ear] == true
+})

@@ -1,0 +1,89 @@
+package duty.abnormal_advised_test
+
+import data.duty.abnormal_advised
+import rego.v2
+
+no := {"left": false, "right": false}
+
+yes := {"left": false, "right": true}
+
+open := {"left": null, "right": false}
+
+audiogram(day, low, shift) := {
+	"id": "a1", "date": day, "ref": "audiogram/a1", "in_program": true, "follow_ups": [], "notices": [],
+	"reviewed_on": null, "compared_on": null,
+	"schemes": {"abnormal_low": low, "abnormal_high": no, "one_sided": no, "abnormal_shift": shift},
+}
+
+worker(audiograms) := {
+	"audiograms": audiograms, "examinations": [], "baseline": {"date": "2020-03-02", "ref": "audiogram/a0"},
+	"enrolled": [{"from": "2020-01-01", "to": null}],
+}
+
+done(kind, by) := {"date": "2022-04-02", "ref": "follow_up/f", "kind": kind, "by_is": by, "result": null}
+
+notice(about) := {"date": "2022-04-03", "ref": "notice/n", "about": about}
+
+examination := {
+	"id": "e1", "ref": "examination/e1", "kind": "hearing_test", "attended_on": "2024-03-05", "results_on": null,
+	"result": "concern", "damage": null, "follow_ups": [],
+}
+
+by_outcome(changes) := object.union(worker([]), {"examinations": [object.union(examination, changes)]})
+
+told := object.union(audiogram("2022-03-05", yes, no), {"notices": [notice("abnormal_result")]})
+
+referred := object.union(audiogram("2022-03-05", no, no), {"follow_ups": [done("referral", null)]})
+
+answers(dossier) := found if found := {[o.key, o.by] | some o in abnormal_advised.obligations} with input as dossier
+
+test_not_advised if {
+	answers(worker([audiogram("2022-03-05", yes, no)])) == {["a1", null]}
+	answers(worker([referred])) == {["a1", null]}
+	answers(by_outcome({})) == {["e1", null]}
+	{o.facts.definitions_met | some o in abnormal_advised.obligations} == {["abnormal_low"]} with input as worker([audiogram("2022-03-05", yes, no)])
+}
+
+test_advised if {
+	answers(worker([told])) == {["a1", {"date": "2022-04-03", "ref": "notice/n"}]}
+	informed := object.union(audiogram("2022-03-05", no, yes), {"follow_ups": [done("worker_informed", null)]})
+	answers(worker([informed])) == {["a1", {"date": "2022-04-02", "ref": "follow_up/f"}]}
+	answers(by_outcome({"results_on": "2024-03-06"})) == {["e1", {"date": "2024-03-06", "ref": "examination/e1"}]}
+	answers(by_outcome({"follow_ups": [done("worker_informed", null)]})) == {["e1", {"date": "2022-04-02", "ref": "follow_up/f"}]}
+}
+
+test_copy_of_the_result_is_no_advice if {
+	copied := object.union(audiogram("2022-03-05", yes, no), {"notices": [notice("result")]})
+	answers(worker([copied])) == {["a1", null]}
+}
+
+test_outcome_of_the_same_day_counts_once if {
+	both := object.union(worker([audiogram("2024-03-05", yes, no)]), {"examinations": [examination]})
+	{o.key | some o in abnormal_advised.obligations} == {"a1"} with input as both
+}
+
+test_what_follows_a_later_outcome_is_not_of_an_earlier_test if {
+	later := object.union(examination, {"attended_on": "2022-03-20", "result": null})
+	every test in [told, referred] {
+		normal := object.union(test, {"schemes": audiogram("2022-03-05", no, no).schemes})
+		dossier := object.union(worker([normal]), {"examinations": [later]})
+		count(abnormal_advised.obligations) == 0 with input as dossier
+		count(abnormal_advised.not_owed) == 1 with input as dossier
+	}
+}
+
+test_outcomes if {
+	count(abnormal_advised.not_owed) == 0 with input as by_outcome({})
+	count(abnormal_advised.not_owed) == 0 with input as by_outcome({"result": null, "damage": true})
+	every changes in [{"result": "no_concern"}, {"result": null}, {"attended_on": null}, {"kind": "health_appointment"}] {
+		count(abnormal_advised.not_owed) == 1 with input as by_outcome(changes)
+		count(abnormal_advised.obligations) == 0 with input as by_outcome(changes)
+	}
+}
+
+test_normal_or_outside if {
+	every test in [audiogram("2022-03-05", no, no), object.union(audiogram("2022-03-05", yes, no), {"in_program": false})] {
+		count(abnormal_advised.obligations) == 0 with input as worker([test])
+		count(abnormal_advised.not_owed) == 1 with input as worker([test])
+	}
+}

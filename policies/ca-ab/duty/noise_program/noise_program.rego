@@ -1,0 +1,63 @@
+# METADATA
+# title: Noise management program
+# description: >-
+#   Where workers are exposed to excess noise the employer has a noise management program: education of workers,
+#   measuring and monitoring, methods of control, protectors, hearing tests with their records, and its review. That
+#   testing and review belong to it was read in the regulator's bulletin; the rest of the list is from memory.
+# custom:
+#   cite: OHS Code, s. 221
+#   subject: site
+#   topic: records
+#   severity: major
+#   evidence: [document]
+#   remedy: Write the noise management program, and record what it covers.
+package duty.noise_program
+
+import data.common
+import rego.v2
+
+obligations contains {
+	"key": "program",
+	"holds": false,
+	"note": "no noise management program is on record",
+	"facts": {"workers_in_noise": input.enrolled_now},
+} if {
+	owed
+	count(papers) == 0
+}
+
+obligations contains {
+	"key": content,
+	"holds": held(content),
+	"note": note(content),
+	"missing": common.missing(held(content), "what the program covers"),
+	"because": [paper.ref | some paper in papers],
+} if {
+	owed
+	count(papers) > 0
+	some content in common.at(data.parameters.program_contents, input.as_of)
+}
+
+not_owed contains "nobody is known to be exposed to excess noise now" if not owed
+
+owed if input.enrolled_now > 0
+
+covered := {content | some paper in papers; some content in paper.covers}
+
+held(content) if content in covered
+
+held(content) := false if {
+	count(covered) > 0
+	not content in covered
+}
+
+held(_) := null if count(covered) == 0
+
+note(content) := sprintf("the program holds nothing on %s", [replace(content, "_", " ")]) if {
+	held(content) == false
+} else := null
+
+papers := [paper |
+	some paper in input.documents
+	paper.kind in ["hearing_conservation_programme", "written_program"]
+]

@@ -1,0 +1,31 @@
+package duty.protectors_worn_test
+
+import data.duty.protectors_worn
+import rego.v2
+
+spell := {"from": "2023-03-31", "to": null, "current": true}
+
+worker(spells, wear) := {"exposed": {"protectors": spells}, "wear": wear}
+
+wear(worn, day) := {"date": day, "ref": "wear_check/w", "worn": worn}
+
+holds(dossier) := found if found := {o.holds | some o in protectors_worn.obligations} with input as dossier
+
+test_seen if {
+	holds(worker([spell], wear(true, "2023-03-31"))) == {true}
+	holds(worker([spell], wear(false, "2024-06-16"))) == {false}
+	count(protectors_worn.not_owed) == 0 with input as worker([spell], null)
+}
+
+test_not_seen_since if {
+	holds(worker([spell], null)) == {null}
+	holds(worker([spell], wear(true, "2023-03-30"))) == {null}
+	holds(worker([spell], wear(null, "2024-06-16"))) == {null}
+}
+
+test_not_owed if {
+	every spells in [[], [object.union(spell, {"current": false})]] {
+		holds(worker(spells, null)) == set()
+		count(protectors_worn.not_owed) == 1 with input as worker(spells, null)
+	}
+}

@@ -1,0 +1,45 @@
+# METADATA
+# title: Instruction after a material change
+# description: >-
+#   Workers are instructed whenever the work that exposes them changes materially. Single sessions stand in the
+#   records of workers; that a group was instructed after a change is shown by a document.
+# custom:
+#   cite: LärmVibrationsArbSchV § 11(1) sentence 2
+#   subject: group
+#   topic: training
+#   severity: major
+#   evidence: [document, change]
+#   remedy: Instruct the group on the change, and record it.
+package duty.instruction_after_change
+
+import rego.v2
+
+# The law sets no time.
+obligations contains {
+	"key": change.id,
+	"after": change.date,
+	"by": "document.instruction",
+	"note": sprintf("on %s the work in noise may have changed materially: %s", [change.date, about(change)]),
+	"because": [change.ref],
+} if {
+	lower_reached_now
+	some change in material
+}
+
+not_owed contains "the records do not show exposure at or above the lower action values now" if not lower_reached_now
+
+not_owed contains "no change that may matter to the instruction is on record" if {
+	lower_reached_now
+	count(material) == 0
+}
+
+lower_reached_now if {
+	some stretch in input.exposed.lower_reached
+	stretch.current == true
+}
+
+material := [change | some change in input.changes; change.raises_exposure != "no"]
+
+about(change) := change.what if {
+	change.what != null
+} else := "what was changed is not recorded"

@@ -1,0 +1,27 @@
+package duty.requested_appointment_test
+
+import data.duty.requested_appointment
+import rego.v2
+
+worker(purpose, answer, attended) := {"examinations": [{
+	"ref": "e1", "kind": "health_appointment", "purpose": purpose, "answer": answer,
+	"offered_on": "2024-04-01", "attended_on": attended,
+}]}
+
+found(dossier) := links if links := {o.by | some o in requested_appointment.obligations} with input as dossier
+
+test_not_held if {
+	found(worker("on_request", "accepted", null)) == {null}
+	some o in requested_appointment.obligations with input as worker("on_request", null, null)
+	o.after == "2024-04-01"
+	count(requested_appointment.not_owed) == 0 with input as worker("on_request", null, null)
+}
+
+test_held if found(worker("on_request", "accepted", "2024-04-20")) == {{"date": "2024-04-20", "ref": "e1"}}
+
+test_no_wish if {
+	every dossier in [{"examinations": []}, worker("periodic", "accepted", null), worker("on_request", "declined", null)] {
+		found(dossier) == set()
+		count(requested_appointment.not_owed) == 1 with input as dossier
+	}
+}
