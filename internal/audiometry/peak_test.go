@@ -9,7 +9,7 @@ import (
 	"hearduty/internal/audiometry"
 )
 
-// painpse is the pattern of NR-7 Annex II item 5.1 b (secondary source): a threshold above 25 dB HL at 3000, 4000 or
+// painpse is the pattern of NR-7 Annex II item 5.2 (secondary source): a threshold above 25 dB HL at 3000, 4000 or
 // 6000 Hz, and higher than at the other tested frequencies.
 var painpse = audiometry.Scheme{
 	Of: "level", Rule: "peak", Frequencies: []int{3000, 4000, 6000}, Over: []int{500, 1000, 2000, 8000}, Above: "acceptable_level",

@@ -78,7 +78,7 @@ func (b *book) put(r record.Record) {
 
 // write writes the program file and the records, those of a day in the order of their days, and then the same as exports.
 func (b *book) write(dir string) error {
-	if err := writeProgram(dir, demoProgram, ""); err != nil {
+	if err := writeProgram(dir, demoProgram, abroadFiles()); err != nil {
 		return err
 	}
 	if err := writeAccepted(dir); err != nil {
@@ -109,6 +109,9 @@ func (b *book) write(dir string) error {
 	rows(t, b.documents, func(r *record.Document) Date { return r.Date })
 	rows(t, b.controls, func(r *record.Control) Date { return r.Date })
 	if err := t.close(); err != nil {
+		return err
+	}
+	if err := writeAbroad(dir); err != nil {
 		return err
 	}
 	return b.writeExports(dir)

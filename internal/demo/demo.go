@@ -49,7 +49,8 @@ func planted() *book {
 }
 
 const demoProgram = `# The demo program of hearduty: an invented firm, invented workers, invented numbers.
-# Kiln Hill has trouble of every kind; Larch Street does everything in time.
+# Kiln Hill has trouble of every kind; Larch Street does everything in time that the law asks, and the company's own
+# standard asks for more. The works abroad are small, stand under laws of their own, and have trouble with them.
 program: Harrow & Slate hearing conservation
 as_of: 2026-06-30
 accepted: accepted.yaml
@@ -58,7 +59,12 @@ accepted: accepted.yaml
 // demoSites are the sites of the demo program.
 const demoSites = `sites:
   - {id: kiln-hill, name: Kiln Hill foundry, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
-  - {id: larch-street, name: Larch Street joinery, country: US, region: OH, bundles: [us-osha-general-industry], choices: {age_correction: false}}
+  - {id: larch-street, name: Larch Street joinery, country: US, region: OH, bundles: [us-osha-general-industry, company-example], choices: {age_correction: false}}
+  - {id: brook-end, name: Brook End foundry, country: GB, bundles: [gb-noise-2005]}
+  - {id: ahornweg, name: Werk Ahornweg, country: DE, bundles: [de-laermvibration]}
+  - {id: ipe, name: Ipê foundry, country: BR, region: SP, bundles: [br-nr15-nr7], choices: {risk_degree: "3-4"}}
+  - {id: elmwood, name: Elmwood foundry, country: CA, region: AB, bundles: [ca-ab]}
+  - {id: tamarack, name: Tamarack foundry, country: CA, region: QC, bundles: [ca-qc]}
 `
 
 // kinds lists the record kinds that a program of this package holds. What was offered, and what came of it, is kept

@@ -56,7 +56,7 @@ func (b *book) writeExports(dir string) error {
 	if err := copyMaps(filepath.Join(dir, "maps")); err != nil {
 		return err
 	}
-	return os.WriteFile(filepath.Join(dir, "exports.yaml"), []byte(strings.TrimPrefix(exportsProgram, "\n")), 0o644)
+	return os.WriteFile(filepath.Join(dir, "exports.yaml"), []byte(strings.TrimPrefix(exportsProgram, "\n")+abroadFiles()), 0o644)
 }
 
 func copyMaps(dir string) error {

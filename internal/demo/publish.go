@@ -10,10 +10,10 @@ import (
 )
 
 // parts are what a program's folder may hold, the program file last.
-var parts = []string{"records", "exports", "maps", "exports.yaml", "accepted.yaml", "program.yaml"}
+var parts = []string{"records", "abroad", "exports", "maps", "exports.yaml", "accepted.yaml", "program.yaml"}
 
 // optional are the parts that programs for measuring speed do not have.
-var optional = []string{"exports", "maps", "exports.yaml", "accepted.yaml"}
+var optional = []string{"abroad", "exports", "maps", "exports.yaml", "accepted.yaml"}
 
 // publish lets fill write into a temporary folder within dir and moves the result into place only when
 // all of it is written, program.yaml last. Whatever fails, nothing half-written stays behind.

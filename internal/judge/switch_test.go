@@ -191,7 +191,8 @@ func TestSwitchJudgesAsTwoChecks(t *testing.T) {
 	after, err := judge.Check(context.Background(), o)
 	require.NoError(t, err)
 	assert.Equal(t, after.Totals, sums(func(n finding.SwitchNumbers) map[finding.Status]int { return n.To }))
-	assert.Equal(t, s.Bundles, append(after.Bundles, before.Bundles...))
+	assert.Equal(t, before.Bundles, s.Bundles, "the new law is one of those of the demo already")
+	assert.Contains(t, s.Bundles, after.Bundles[0])
 }
 
 func TestSwitchToNothing(t *testing.T) {

@@ -170,7 +170,7 @@ type Training struct {
 	Meta
 	WorkerID string `field:"worker_id,required" doc:"id of the worker"`
 	Date     Date   `field:"date,required" doc:"day of the session"`
-	Topics   List   `field:"topics,like=noise_effects|protectors|audiometry|limit_values|assessment_results|damage_reporting|health_surveillance|safe_practices|measures|collective_results|law_in_general|noise_controls|medical_advice|roles|non_work_noise" doc:"topics covered, separated by semicolons"`
+	Topics   List   `field:"topics,like=noise_effects|protectors|audiometry|limit_values|assessment_results|damage_reporting|health_surveillance|safe_practices|measures|collective_results|law_in_general|noise_controls|medical_advice|program_roles|non_work_noise" doc:"topics covered, separated by semicolons"`
 	Language string `field:"language" doc:"language of the session"`
 	By       string `field:"by" doc:"id of the trainer"`
 

@@ -1,14 +1,17 @@
 # METADATA
 # title: Shared helpers
-# description: The few words that the duties of all bundles have in common.
+# description: >-
+#   The few words that the duties of all bundles have in common. They take what a duty hands them and answer with yes,
+#   a day, a number or words, never with records: of what a shared rule returns, a misspelt fact is no compile error.
 package common
 
 import rego.v2
 
-# The value of a parameter that is in force on a day, or null if none is.
-at(parameter, day) := period.value if {
-	some period in parameter.values
-	covers(period, day)
+# The value of a parameter that is in force on a day, or null if none is. A value ends when the next one begins.
+at(parameter, day) := latest.value if {
+	begun := [period | some period in parameter.values; period.from <= day]
+	latest := begun[count(begun) - 1]
+	covers(latest, day)
 } else := null
 
 # Whether a stretch holds a day: from its first day up to, but without, the day in `to`. Without `to` it is open.
@@ -22,8 +25,33 @@ over(stretch, day) if {
 	stretch.to <= day
 }
 
+# Whether one of the stretches runs today.
+any_current(stretches) if {
+	some stretch in stretches
+	stretch.current == true
+}
+
+# Since when that is so: the first day of the stretches that run today, or null if none does.
+current_since(stretches) := min(days) if {
+	days := {stretch.from | some stretch in stretches; stretch.current == true}
+	count(days) > 0
+} else := null
+
+# Why something is not known on a day: each reason once. A stretch without a reason counts with an empty one.
+reasons(unknown, day) := sort({reason |
+	some stretch in unknown
+	covers(stretch, day)
+	reason := concat("", [words | some words in [stretch.reason]; words != null])
+})
+
+# What documents say that they cover, all of them together.
+covered(papers) := {word | some paper in papers; some word in paper.covers}
+
+# Words of a list as they are read, such as "noise sources, work practices" of noise_sources and work_practices.
+in_words(words) := replace(concat(", ", words), "_", " ")
+
 # The references of those records that there are.
-refs(links) := [link.ref | some link in links; link != null]
+refs(links) := [link.ref | some link in links; link != null; link.ref != null]
 
 # What the records lack: the words, if the value is not known.
 missing(value, words) := [words] if value == null

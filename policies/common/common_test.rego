@@ -45,10 +45,65 @@ test_stretch_of_the_future_does_not_cover if not common.covers({"from": "2026-07
 test_refs_leave_out_what_there_is_not if {
 	common.refs([null, {"date": "2024-01-01", "ref": "audiogram/a1"}]) == ["audiogram/a1"]
 	common.refs([null]) == []
+	common.refs([{"date": "2024-01-01", "ref": null}]) == []
 }
 
 test_missing_only_if_null if {
 	common.missing(null, "the level") == ["the level"]
 	common.missing(0, "the level") == []
 	common.missing(false, "the level") == []
+}
+
+test_value_ends_when_the_next_begins if {
+	open_ended := {"values": [{"from": "1983-04-07", "value": 90}, {"from": "2010-01-01", "to": "2020-01-01", "value": 85}]}
+	common.at(open_ended, "2009-12-31") == 90
+	common.at(open_ended, "2010-01-01") == 85
+	common.at(open_ended, "2020-01-01") == null
+}
+
+past := {"from": "2019-01-01", "to": "2020-01-01", "current": false}
+
+since_2022 := {"from": "2022-03-01", "to": null, "current": true}
+
+since_2024 := {"from": "2024-05-01", "to": null, "current": true}
+
+test_one_that_runs_today_is_enough if common.any_current([past, since_2022])
+
+test_none_runs_today if {
+	not common.any_current([past])
+	not common.any_current([])
+}
+
+test_since_when_the_first_of_those_runs if common.current_since([since_2024, past, since_2022]) == "2022-03-01"
+
+test_since_when_of_none_is_not_known if {
+	common.current_since([past]) == null
+	common.current_since([]) == null
+}
+
+open_until_2024 := {"from": "2020-01-01", "to": "2024-01-01", "reason": "never measured"}
+
+test_reasons_of_the_day if {
+	common.reasons([open_until_2024], "2023-12-31") == ["never measured"]
+	common.reasons([open_until_2024], "2024-01-01") == []
+}
+
+test_each_reason_once if {
+	other := {"from": "2020-01-01", "to": null, "reason": "a change was not measured"}
+	common.reasons([open_until_2024, other, open_until_2024], "2023-01-01") == ["a change was not measured", "never measured"]
+}
+
+test_a_missing_reason_counts if {
+	common.reasons([{"from": "2020-01-01", "to": null, "reason": null}], "2023-01-01") == [""]
+}
+
+test_covered_by_all_papers_together if {
+	common.covered([{"covers": ["peak"]}, {"covers": []}, {"covers": ["level", "peak"]}]) == {"level", "peak"}
+	common.covered([]) == set()
+}
+
+test_words_as_they_are_read if {
+	common.in_words(["noise_sources", "work_practices"]) == "noise sources, work practices"
+	common.in_words({"noise_sources"}) == "noise sources"
+	common.in_words([]) == ""
 }

@@ -21,9 +21,10 @@ func twoLaws(t *testing.T) *finding.Report {
 	p, problems := program.Load("../../../testdata/demo")
 	require.NoError(t, problems.Err())
 	p.Sites[0].Bundles = append(p.Sites[0].Bundles, "company-example")
+	p.Sites[1].Bundles = p.Sites[1].Bundles[:1]
 	library, err := bundle.Embedded()
 	require.NoError(t, err)
-	r, err := judge.Check(t.Context(), judge.Options{Program: p, Library: library, AsOf: p.AsOf, AheadDays: 90, Portraits: true, Version: "1.0.0"})
+	r, err := judge.Check(t.Context(), judge.Options{Program: p, Library: library, Sites: american, AsOf: p.AsOf, AheadDays: 90, Portraits: true, Version: "1.0.0"})
 	require.NoError(t, err)
 	return r
 }

@@ -94,7 +94,7 @@ func table(p *page, r *finding.Report, site finding.Site) {
 		}
 		if bundle == finding.OfProgram {
 			p.para(2, 2, "The program's own papers, which no law asks for")
-		} else if len(bundles) > 1 {
+		} else if len(bundles) > 1 || len(r.Bundles) > 1 {
 			p.para(2, 2, "By "+bundle)
 		}
 		if p.width < tableWidth {

@@ -31,7 +31,7 @@ obligations contains {
 	"holds": null,
 	"note": "an action plan covers the group, but the record does not say what it holds",
 	"missing": ["what the action plan holds"],
-	"because": [plan.ref | some plan in plans],
+	"because": common.refs(plans),
 } if {
 	above
 	count(plans) > 0
@@ -41,7 +41,7 @@ obligations contains {
 obligations contains {
 	"holds": count(lacking) == 0,
 	"note": said,
-	"because": [plan.ref | some plan in plans],
+	"because": common.refs(plans),
 	"facts": {"holds": sort(held), "lacks": sort(lacking)},
 } if {
 	above
@@ -50,17 +50,14 @@ obligations contains {
 
 not_owed contains "the group is not known to be above the action level" if not above
 
-above if {
-	some stretch in input.exposed.action
-	stretch.current
-}
+above if common.any_current(input.exposed.action)
 
 plans := [document | some document in input.documents; document.kind == "control_programme"]
 
-held := {word | some plan in plans; some word in plan.covers}
+held := common.covered(plans)
 
 lacking := {word | some word in common.at(data.parameters.action_measures, input.as_of)} - held
 
 said := "the action plan holds all measures" if {
 	count(lacking) == 0
-} else := sprintf("the action plan lacks: %s", [concat(", ", sort(lacking))])
+} else := sprintf("the action plan lacks: %s", [common.in_words(sort(lacking))])

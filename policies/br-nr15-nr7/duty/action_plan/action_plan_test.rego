@@ -27,7 +27,7 @@ test_plan_without_content if holds(above([plan([])])) == {null}
 test_plan_lacks_something if {
 	holds(above([plan(["monitoring", "information"])])) == {false}
 	some o in duty.obligations with input as above([plan(["monitoring"])]) with data.parameters.action_measures as measures
-	o.note == "the action plan lacks: information, medical_control"
+	o.note == "the action plan lacks: information, medical control"
 }
 
 test_two_plans_together if holds(above([plan(["monitoring", "information"]), plan(["medical_control"])])) == {true}

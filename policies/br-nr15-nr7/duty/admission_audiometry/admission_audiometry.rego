@@ -20,7 +20,7 @@ import rego.v2
 
 obligations contains {
 	"key": start.from,
-	"after": start.from,
+	"after": max([start.from, asked_since]),
 	"within": "admission_time",
 	"by": earliest(start),
 } if {
@@ -35,7 +35,11 @@ starts := [{"from": min(days), "since": employment.from, "to": employment.to} |
 		common.covers(employment, stretch.from)
 	]
 	count(days) > 0
+	not common.over(employment, asked_since)
 ]
+
+# Who was above the action level before the rule is owed an exam from its first day on.
+asked_since := data.parameters.admission_time.values[0].from
 
 tests := array.concat(
 	[{"date": test.date, "ref": test.ref} |

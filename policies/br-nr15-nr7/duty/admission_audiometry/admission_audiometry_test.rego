@@ -59,6 +59,15 @@ test_first_stretch_only if {
 	by(twice) == {["2021-01-01", null]}
 }
 
+test_before_the_rule if {
+	old := worker([closed("1992-01-01", "1998-04-22"), open("1999-03-01")], [open("1994-12-29")], [])
+	count(by(old)) == 0
+	still_there := worker([open("1990-01-01")], [open("1994-12-29")], [exam_of("a1", "1996-03-01")])
+	by(still_there) == {["1994-12-29", link("a1", "1996-03-01")]}
+	some o in duty.obligations with input as still_there
+	o.after == "1998-04-22"
+}
+
 test_never_above if {
 	quiet := worker([open("2020-01-01")], [], [])
 	by(quiet) == set()

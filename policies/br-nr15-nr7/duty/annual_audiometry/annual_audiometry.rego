@@ -29,9 +29,12 @@ tested := [{"from": start, "to": stretch.to} |
 	some employment in input.employed
 	some stretch in input.enrolled
 	common.covers(employment, stretch.from)
-	start := first_day(employment, stretch)
+	start := max([first_day(employment, stretch), asked_since])
 	not common.over(stretch, start)
 ]
+
+# An exam from before the rule is followed by the next one within the interval from its first day.
+asked_since := data.parameters.audiogram_interval.values[0].from
 
 # Who is hired for work above the action level: twelve months from the admission exam.
 first_day(employment, stretch) := max(before) if {

@@ -47,6 +47,11 @@ test_outcome_only if {
 	during(worker(hired, hired, [], others)) == {{"from": "2024-04-01", "to": null}}
 }
 
+test_exam_from_before_the_rule if {
+	old := [open("1996-03-01")]
+	during(worker(old, old, [exam_of("1996-03-01")], [])) == {{"from": "1998-04-22", "to": null}}
+}
+
 test_no_exam if {
 	invalid := object.union(exam_of("2024-04-01"), {"invalidated": true})
 	empty := object.union(exam_of("2024-04-01"), {"ears_with_result": 0})

@@ -26,10 +26,14 @@ obligations contains {
 	"because": [test.ref],
 	"facts": {"protectors_worn_instead": test.quiet_by_protectors},
 } if {
-	some test in input.audiograms
-	test.in_program
+	some test in tests
 }
 
-not_owed contains "there is no exam while above the action level" if {
-	every test in input.audiograms { test.in_program == false }
-}
+# Exams since the rule is in force.
+tests := [test |
+	some test in input.audiograms
+	test.in_program
+	common.at(data.parameters.quiet_period, test.date) != null
+]
+
+not_owed contains "there is no exam while above the action level" if count(tests) == 0

@@ -26,6 +26,13 @@ test_hours_not_recorded if {
 	obligation([audiogram(null)]).missing == ["the hours of auditory rest before the exam"]
 }
 
+test_exam_from_before_the_rule if {
+	obligation([object.union(audiogram(14), {"date": "1998-04-22"})]).value == 14
+	before := object.union(audiogram(14), {"date": "1998-04-21"})
+	not obligation([before])
+	count(reasons([before])) == 1
+}
+
 test_exam_outside_the_program if {
 	outside := object.union(audiogram(2), {"in_program": false})
 	not obligation([outside])

@@ -2,7 +2,8 @@
 # title: Hearing cases in the annual report
 # description: >-
 #   The physician in charge of the PCMSO includes the cases of triggering or worsening, and altered reference
-#   exams, in the annual analytical report. The record is the report, which names hearing_cases in covers.
+#   exams, in the annual analytical report. The record is the report, which names hearing_cases in covers;
+#   a report of a year without a case says that there was none.
 # custom:
 #   cite: NR-7 Annex II items 9 b and 10 (from memory)
 #   subject: site
@@ -10,7 +11,7 @@
 #   severity: minor
 #   evidence: [document]
 #   remedy: >-
-#     Add the hearing cases of the year to the analytical report, and name hearing_cases in covers.
+#     Add the hearing cases of the year, or that there were none, to the analytical report, and name hearing_cases in covers.
 package duty.cases_reported
 
 import rego.v2
@@ -28,7 +29,7 @@ obligations contains {
 obligations contains {
 	"holds": "hearing_cases" in latest.covers,
 	"on": latest.date,
-	"note": "the latest analytical report and the cases of hearing loss",
+	"note": said,
 	"because": [latest.ref],
 	"facts": {"holds": latest.covers},
 } if {
@@ -47,6 +48,10 @@ concerned if {
 	count(reports) > 0
 	input.enrolled_ever > 0
 }
+
+said := sprintf("the analytical report of %s names the cases of hearing loss", [latest.date]) if {
+	"hearing_cases" in latest.covers
+} else := sprintf("the analytical report of %s names neither cases of hearing loss nor that there were none", [latest.date])
 
 reports := [document | some document in input.documents; document.kind == "analytical_report"]
 

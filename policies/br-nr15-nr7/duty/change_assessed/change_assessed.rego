@@ -43,6 +43,21 @@ obligations contains {
 	some test in later_tests
 	count(shown(test)) == 0
 	not undecided(test)
+	not hidden(test)
+}
+
+obligations contains {
+	"key": test.id,
+	"holds": null,
+	"on": test.date,
+	"note": "an earlier exam shows triggering or worsening and has not become the reference exam, so whether this one shows a further change cannot be told",
+	"missing": ["a reference exam that holds the earlier change"],
+	"because": [test.ref],
+} if {
+	some test in later_tests
+	count(shown(test)) == 0
+	not undecided(test)
+	hidden(test)
 }
 
 obligations contains {
@@ -88,6 +103,14 @@ seen_before(test, ear) if {
 	earlier.date < test.date
 	reference(earlier, ear) == reference(test, ear)
 	count(kinds(earlier, ear)) > 0
+}
+
+# The latest exam, where it is still compared with a reference exam against which an earlier exam has shown a change.
+hidden(test) if {
+	test.id == later_tests[count(later_tests) - 1].id
+	some ear in ["left", "right"]
+	count(kinds(test, ear)) > 0
+	seen_before(test, ear)
 }
 
 undecided(test) if {

@@ -69,7 +69,10 @@ test_not_known_does_not_matter_where_the_rest_decides if {
 
 test_shown_again_is_no_new_case if {
 	again := exam("a3", "2025-02-20", "audiogram/a1", {"high_mean": left})
-	answers([reference({}), later({"high_mean": left}), again]) == triggered | {["a3", true]}
+	answers([reference({}), later({"high_mean": left}), again]) == triggered | {["a3", null]}
+	newest := exam("a4", "2026-02-20", "audiogram/a1", {"high_mean": left})
+	answers([reference({}), later({"high_mean": left}), again, newest]) == triggered | {["a3", true], ["a4", null]}
+	answers([reference({}), later({"high_mean": left}), exam("a3", "2025-02-20", "audiogram/a1", {})]) == triggered | {["a3", true]}
 }
 
 test_new_reference_makes_a_new_case if {

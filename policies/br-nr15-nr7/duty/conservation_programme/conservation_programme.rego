@@ -3,7 +3,8 @@
 # description: >-
 #   The physician in charge of the PCMSO takes part in putting in place, improving and controlling a programme for
 #   the conservation of hearing (PCA) where cases arise. No regulatory norm prescribes its structure; Fundacentro
-#   published a guide in 2018. The record is a document of kind hearing_conservation_programme.
+#   published a guide in 2018. This bundle asks for one wherever workers are above the action level, before
+#   the first case as well. The record is a document of kind hearing_conservation_programme.
 # custom:
 #   cite: NR-7 Annex II items 9 c and 10 (from memory)
 #   subject: site

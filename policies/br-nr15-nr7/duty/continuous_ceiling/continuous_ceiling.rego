@@ -19,7 +19,7 @@ import data.common
 import rego.v2
 
 obligations contains object.union(verdict, {
-	"because": array.concat([input.now.ref], [document.ref | some document in evaluations]),
+	"because": array.concat([input.now.ref], common.refs(evaluations)),
 	"facts": facts,
 }) if {
 	above
@@ -52,20 +52,14 @@ not_owed contains "the group is not above the tolerance limit, and no level abov
 	not above_limit
 }
 
-above if {
-	some stretch in input.exposed.ceiling
-	stretch.current
-}
+above if common.any_current(input.exposed.ceiling)
 
 measured if {
 	input.now != null
 	input.now.channels.continuous.at_most != null
 }
 
-above_limit if {
-	some stretch in input.exposed.limit
-	stretch.current
-}
+above_limit if common.any_current(input.exposed.limit)
 
 found := sprintf("the highest level measured, %v dB(A), is above the ceiling", [input.now.channels.continuous.at_least])
 

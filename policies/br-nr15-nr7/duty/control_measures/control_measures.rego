@@ -54,10 +54,7 @@ obligations contains {
 
 not_owed contains "the group is not known to be above the tolerance limit" if not above_limit
 
-above_limit if {
-	some stretch in input.exposed.limit
-	stretch.current
-}
+above_limit if common.any_current(input.exposed.limit)
 
 latest := input.controls[count(input.controls) - 1]
 

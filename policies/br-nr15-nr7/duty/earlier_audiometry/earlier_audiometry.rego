@@ -2,7 +2,8 @@
 # title: Exam on the day the physician has set
 # description: >-
 #   The physician in charge of the PCMSO may shorten the interval between audiometric exams; the exam is then made
-#   by the day that he or she has set.
+#   by the day that he or she has set. The day stands on the record of the exam before; one on the record of a
+#   clinical examination is that of the next clinical examination.
 # custom:
 #   cite: NR-7 Annex II item 4.2 (secondary source)
 #   subject: worker
@@ -33,6 +34,7 @@ obligations contains {
 
 with_a_day := [examination |
 	some examination in input.examinations
+	examination.kind == "hearing_test"
 	examination.attended_on != null
 	examination.next_due != null
 ]

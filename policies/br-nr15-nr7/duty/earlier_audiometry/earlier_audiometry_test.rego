@@ -39,7 +39,7 @@ test_outcome_only_exam_counts if {
 }
 
 test_no_day_set if {
-	every list in [[], [examination("2024-05-02", null)], [examination(null, "2024-11-02")], [examination("2023-12-31", "2024-11-02")]] {
+	every list in [[], [examination("2024-05-02", null)], [examination(null, "2024-11-02")], [object.union(examination("2024-05-02", "2024-11-02"), {"kind": "health_appointment"})], [examination("2023-12-31", "2024-11-02")]] {
 		found := duty.obligations with input as worker(list, [])
 		count(found) == 0
 		reasons := duty.not_owed with input as worker(list, [])

@@ -15,12 +15,13 @@
 #     the assignments.
 package duty.enrolment
 
+import data.common
 import rego.v2
 
 obligations contains {
 	"holds": false,
 	"note": "exposure is above the action level, but the employer's roll leaves the worker out",
-	"facts": {"exposed_since": min([stretch.from | some stretch in current]), "working": input.exposure_working},
+	"facts": {"exposed_since": common.current_since(input.enrolled), "working": input.exposure_working},
 	"because": array.concat([sprintf("worker/%s", [input.id])], deciding),
 } if {
 	left_out
@@ -50,14 +51,20 @@ obligations contains {
 	count(unknown) == 0
 }
 
-current := [stretch | some stretch in input.enrolled; stretch.current]
+exposed_now if common.any_current(input.enrolled)
 
 left_out if {
 	input.on_roll == false
-	count(current) > 0
+	exposed_now
 }
 
-unknown := input.exposure_unknown.action
+# Of the time before there was an action level nobody asks.
+unknown := [stretch | some stretch in input.exposure_unknown.action; not before_the_law(stretch)]
+
+before_the_law(stretch) if {
+	stretch.to != null
+	stretch.to <= data.parameters.action_dose.values[0].from
+}
 
 reasons := sort({stretch.reason | some stretch in unknown; stretch.reason != null})
 

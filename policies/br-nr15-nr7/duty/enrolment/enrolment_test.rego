@@ -32,6 +32,13 @@ test_not_known if {
 	finding(unknown).facts.not_known == [{"from": "2021-01-01", "to": null}]
 }
 
+test_time_before_the_law if {
+	before := {"from": "1990-01-01", "to": "1994-12-29", "reason": "no value"}
+	finding(object.union(known, {"exposure_unknown": {"action": [before]}})).holds == true
+	later := object.union(before, {"to": "1994-12-30"})
+	finding(object.union(known, {"exposure_unknown": {"action": [later]}})).holds == null
+}
+
 test_left_out if {
 	left_out := object.union(known, {"on_roll": false})
 	finding(left_out).holds == false

@@ -60,4 +60,4 @@ lacking := sort({word | some word in common.at(data.parameters.exam_contents, in
 
 said := "the medical control programme holds all parts of an exam" if {
 	count(lacking) == 0
-} else := sprintf("the medical control programme does not hold: %s", [concat(", ", lacking)])
+} else := sprintf("the medical control programme does not hold: %s", [common.in_words(lacking)])

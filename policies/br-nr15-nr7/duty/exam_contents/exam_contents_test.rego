@@ -16,7 +16,7 @@ test_all_parts if holds(site(2, [programme(["clinical_history", "otological_exam
 test_a_part_is_lacking if {
 	holds(site(2, [programme(["clinical_history", "audiometry"])])) == {false}
 	some o in duty.obligations with input as site(2, [programme(["audiometry"])]) with data.parameters.exam_contents as contents
-	o.note == "the medical control programme does not hold: clinical_history, otological_exam"
+	o.note == "the medical control programme does not hold: clinical history, otological exam"
 }
 
 test_contents_not_recorded if holds(site(2, [programme([])])) == {null}

@@ -19,7 +19,7 @@ import data.common
 import rego.v2
 
 obligations contains object.union(verdict, {
-	"because": array.concat([input.now.ref], [document.ref | some document in evaluations]),
+	"because": array.concat([input.now.ref], common.refs(evaluations)),
 	"facts": facts,
 }) if {
 	above

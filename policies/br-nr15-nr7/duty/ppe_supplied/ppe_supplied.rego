@@ -24,16 +24,16 @@ obligations contains {
 	"because": [input.protection.ref],
 	"facts": {"protector": input.protection.protector},
 } if {
-	count(above_limit) > 0
+	above_limit
 	input.protection != null
 }
 
 obligations contains {
 	"holds": false,
 	"note": "the worker is above the tolerance limit and no protector is on record as supplied",
-	"facts": {"above_the_limit_since": min([stretch.from | some stretch in above_limit])},
+	"facts": {"above_the_limit_since": common.current_since(input.exposed.limit)},
 } if {
-	count(above_limit) > 0
+	above_limit
 	input.protection == null
 }
 
@@ -42,7 +42,7 @@ obligations contains {
 	"note": sprintf("it is not known whether the worker is above the tolerance limit: %s", [concat("; ", not_known)]),
 	"missing": ["a dose that can be held against the tolerance limit"],
 } if {
-	count(above_limit) == 0
+	not above_limit
 	count(not_known) > 0
 	input.protection == null
 }
@@ -53,22 +53,21 @@ obligations contains {
 	"note": "a protector is at hand, whether or not the worker is above the tolerance limit",
 	"because": [input.protection.ref],
 } if {
-	count(above_limit) == 0
+	not above_limit
 	count(not_known) > 0
 	input.protection != null
 }
 
 not_owed contains "the worker is not known to be above the tolerance limit" if {
-	count(above_limit) == 0
+	not above_limit
 	count(not_known) == 0
 }
 
-above_limit := [stretch | some stretch in input.exposed.limit; stretch.current]
+above_limit if common.any_current(input.exposed.limit)
 
 # Of a worker who is not known to be above the action level, enrolment tells.
 not_known := sort({stretch.reason |
-	some enrolled in input.enrolled
-	enrolled.current
+	common.any_current(input.enrolled)
 	some stretch in input.exposure_unknown.limit
 	common.covers(stretch, input.as_of)
 })

@@ -33,16 +33,23 @@ obligations contains {
 	"missing": ["a check of whether protectors are worn"],
 	"facts": {"above_the_limit_since": above_since},
 } if {
-	count(above_limit) > 0
+	above_limit
 	not checked
+	input.protection != null
 }
 
-not_owed contains "the worker is not known to be above the tolerance limit" if count(above_limit) == 0
+not_owed contains "no protector is on record as supplied, which is a finding of its own" if {
+	above_limit
+	not checked
+	input.protection == null
+}
 
-above_since := min([stretch.from | some stretch in above_limit])
+not_owed contains "the worker is not known to be above the tolerance limit" if not above_limit
+
+above_since := common.current_since(input.exposed.limit)
 
 checked if {
-	count(above_limit) > 0
+	above_limit
 	input.wear != null
 	input.wear.date >= above_since
 }
@@ -53,4 +60,4 @@ said := {
 	null: "the check does not say whether the worker wore a protector",
 }
 
-above_limit := [stretch | some stretch in input.exposed.limit; stretch.current]
+above_limit if common.any_current(input.exposed.limit)

@@ -42,6 +42,14 @@ test_not_checked if {
 	reasons({}) == set()
 }
 
+test_no_protector if {
+	not obligation({"protection": null})
+	count(reasons({"protection": null})) == 1
+	seen := object.union({"protection": null}, check(false, "2026-05-05"))
+	obligation(seen).holds == false
+	reasons(seen) == set()
+}
+
 test_not_known_to_be_above if {
 	every change in [not_above, open] {
 		not obligation(change)

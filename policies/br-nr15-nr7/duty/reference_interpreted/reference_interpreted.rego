@@ -17,6 +17,7 @@
 #     (medical_opinion) with the exam it is about.
 package duty.reference_interpreted
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -58,13 +59,14 @@ obligations contains {
 	exam.schemes.above_acceptable[ear] == null
 }
 
-# The first reference exam, of workers who are or were above the action level. What a later one shows is the matter
+# The first reference exam since the rule is in force, of workers who are or were above the action level. What a later one shows is the matter
 # of change-assessed.
 references := [exam |
 	input.baseline != null
 	input.baseline.in_program
 	some exam in input.audiograms
 	exam.ref == input.baseline.ref
+	common.at(data.parameters.acceptable_level, exam.date) != null
 ]
 
 said(exam) := [sprintf("%s ear %s", [ear, pattern(exam.schemes.noise_pattern[ear])]) |

@@ -51,6 +51,13 @@ test_one_ear_altered_the_other_not_known if {
 	obligation(exam(ears(true, null), ears(true, null), [])).ask != null
 }
 
+test_reference_exam_from_before_the_rule if {
+	old := object.union(altered([]), {"date": "1998-04-21"})
+	found := duty.obligations with input as worker(old)
+	count(found) == 0
+	obligation(object.union(altered([]), {"date": "1998-04-22"})).ask != null
+}
+
 test_no_reference_exam if {
 	every dossier in [
 		{"baseline": null, "audiograms": []},

@@ -59,7 +59,7 @@ not_owed contains "no result gives the group's dose, which is a finding of its o
 
 current := [stretch | some stretch in input.exposed.limit; stretch.current]
 
-reasons := sort({stretch.reason | some stretch in input.exposure_unknown.limit; common.covers(stretch, input.as_of)})
+reasons := common.reasons(input.exposure_unknown.limit, input.as_of)
 
 decided_by := [input.now.ref |
 	input.now != null

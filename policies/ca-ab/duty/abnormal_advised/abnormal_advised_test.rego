@@ -41,7 +41,7 @@ test_not_advised if {
 	answers(worker([audiogram("2022-03-05", yes, no)])) == {["a1", null]}
 	answers(worker([referred])) == {["a1", null]}
 	answers(by_outcome({})) == {["e1", null]}
-	{o.facts.definitions_met | some o in abnormal_advised.obligations} == {["abnormal_low"]} with input as worker([audiogram("2022-03-05", yes, no)])
+	{o.health.definitions_met | some o in abnormal_advised.obligations} == {["abnormal_low"]} with input as worker([audiogram("2022-03-05", yes, no)])
 }
 
 test_advised if {

@@ -46,7 +46,7 @@ test_no_opinion if {
 	answers(by_outcome({"follow_ups": [done("worker_informed", null)]})) == {["e1", null]}
 	informed := object.union(told, {"follow_ups": [done("worker_informed", null)]})
 	answers(worker([informed])) == {["a1", null]}
-	{o.facts.definitions_met | some o in abnormal_confirmed.obligations} == {["abnormal_low"]} with input as worker([told])
+	{o.health.definitions_met | some o in abnormal_confirmed.obligations} == {["abnormal_low"]} with input as worker([told])
 }
 
 test_opinion if {

@@ -21,7 +21,7 @@ obligations contains {
 	"by": first(test),
 	"note": sprintf("the test of %s is abnormal", [test.date]),
 	"because": [test.ref],
-	"facts": {"definitions_met": test.definitions},
+	"health": {"definitions_met": test.definitions},
 } if {
 	some test in abnormal
 }

@@ -43,7 +43,7 @@ test_not_forwarded if {
 	answers(worker([told])) == {["a1", null]}
 	answers(worker([object.union(referred, {"follow_ups": [done("medical_opinion", null)]})])) == {["a1", null]}
 	answers(by_outcome({"results_on": "2024-03-06"})) == {["e1", null]}
-	{o.facts.definitions_met | some o in abnormal_forwarded.obligations} == {["abnormal_low"]} with input as worker([told])
+	{o.health.definitions_met | some o in abnormal_forwarded.obligations} == {["abnormal_low"]} with input as worker([told])
 }
 
 test_forwarded if {

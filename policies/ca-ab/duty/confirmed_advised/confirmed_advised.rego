@@ -21,7 +21,7 @@ obligations contains {
 	"by": first_since(test, opinion[0]),
 	"note": sprintf("the result of the test of %s was confirmed on %s", [test.date, opinion[0]]),
 	"because": [test.ref, opinion[1]],
-	"facts": {"definitions_met": test.definitions},
+	"health": {"definitions_met": test.definitions},
 } if {
 	some test in abnormal
 	opinion := opinions(test)[0]

@@ -51,7 +51,7 @@ test_advised if {
 	informed := object.union(done("worker_informed", null), {"date": "2022-04-20", "ref": "follow_up/g"})
 	answers(by_outcome({"follow_ups": [opinion, informed]})) == {["e1", "2022-04-02", {"date": "2022-04-20", "ref": "follow_up/g"}]}
 	answers(worker([object.union(told, {"follow_ups": [opinion, informed], "notices": []})])) == {["a1", "2022-04-02", {"date": "2022-04-20", "ref": "follow_up/g"}]}
-	{o.facts.definitions_met | some o in confirmed_advised.obligations} == {["abnormal_low"]} with input as worker([object.union(told, {"follow_ups": [opinion]})])
+	{o.health.definitions_met | some o in confirmed_advised.obligations} == {["abnormal_low"]} with input as worker([object.union(told, {"follow_ups": [opinion]})])
 }
 
 test_opinion_on_a_later_outcome_is_not_of_an_earlier_test if {

@@ -24,7 +24,7 @@ obligations contains {
 	"missing": common.missing(decided(test), "the thresholds that the definitions ask for"),
 	"note": sprintf("test of %s, by the definitions that held on that day", [test.date]),
 	"because": [test.ref],
-	"facts": {"definitions_met": shown(test)},
+	"health": {"definitions_met": shown(test)},
 } if {
 	some test in tests
 	defined(test)

@@ -29,7 +29,7 @@ test_definitions_decide_until_march_2023 if {
 	holds(audiogram("2023-03-30", yes, no)) == {true}
 	holds(audiogram("2023-03-30", yes, open)) == {true}
 	holds(audiogram("2023-03-30", no, open)) == {null}
-	{o.facts.definitions_met | some o in result_classified.obligations} == {["abnormal_low"]} with input as worker([audiogram("2023-03-30", yes, no)])
+	{o.health.definitions_met | some o in result_classified.obligations} == {["abnormal_low"]} with input as worker([audiogram("2023-03-30", yes, no)])
 	count(result_classified.not_owed) == 0 with input as worker([audiogram("2023-03-30", no, no)])
 }
 

@@ -20,7 +20,7 @@ obligations contains {
 	"holds": holds,
 	"note": note,
 	"missing": common.missing(holds, "the tasks that the schedule covers"),
-	"because": array.concat([latest.ref], [paper.ref | some paper in prints]),
+	"because": array.concat([latest.ref], common.refs(prints)),
 	"facts": {"tasks": latest.covers},
 } if {
 	count(schedules) > 0

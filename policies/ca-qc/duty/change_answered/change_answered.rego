@@ -33,22 +33,33 @@ not_owed contains "no change that is known to bring a risk of exceeding a limit 
 	}
 }
 
-known(change) if change.raises_exposure == "yes"
-
+# It brings a risk of exceeding a limit: so the register says, or it raises the noise of a situation where that is near.
 known(change) if change.identified_on != null
+
+known(change) if {
+	change.raises_exposure == "yes"
+	change.enrolling
+}
+
+known(change) if {
+	change.raises_exposure == "yes"
+	input.suspected_noisy == true
+}
 
 first_answer(change) := {"date": answers[0][0], "ref": answers[0][1]} if {
 	answers := sort(array.concat(
 		[[m.date, m.ref] | some m in input.measurements; m.date >= change.date],
-		[[day, control.ref] |
-			some control in input.controls
-			some day in [control.started_on, control.installed_on]
-			day != null
-			day >= change.date
-		],
+		[[begun(control), control.ref] | some control in input.controls; begun(control) >= change.date],
 	))
 	count(answers) > 0
 } else := null
+
+# The day on which the work began or, where that is not recorded, on which the means was put in place.
+begun(control) := control.started_on if {
+	control.started_on != null
+} else := control.installed_on if {
+	control.installed_on != null
+}
 
 # A change of a situation that may come to exceed a limit, since the section came into force.
 concerned := [change |
@@ -60,4 +71,17 @@ concerned := [change |
 
 at_risk(change) if change.enrolling
 
-at_risk(_) if input.suspected_noisy != false
+at_risk(_) if input.suspected_noisy == true
+
+at_risk(change) if {
+	input.suspected_noisy == null
+	not found_below(change)
+}
+
+# Measured since, and no limit exceeded.
+found_below(change) if {
+	change.measured != null
+	every stretch in input.exposure_unknown.limit {
+		not common.covers(stretch, change.measured.date)
+	}
+}

@@ -94,4 +94,17 @@ concerned := [change |
 
 at_risk(change) if change.enrolling
 
-at_risk(_) if input.suspected_noisy != false
+at_risk(_) if input.suspected_noisy == true
+
+at_risk(change) if {
+	input.suspected_noisy == null
+	not found_below(change)
+}
+
+# Measured since, and no limit exceeded.
+found_below(change) if {
+	change.measured != null
+	every stretch in input.exposure_unknown.limit {
+		not common.covers(stretch, change.measured.date)
+	}
+}

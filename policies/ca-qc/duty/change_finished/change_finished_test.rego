@@ -5,7 +5,7 @@ import rego.v2
 
 change := {
 	"id": "c1", "ref": "change/c1", "date": "2025-03-01", "what": "a third line", "raises_exposure": "yes",
-	"identified_on": null, "enrolling": false, "period_ends": null, "period_short": null,
+	"identified_on": null, "enrolling": false, "measured": null, "period_ends": null, "period_short": null,
 }
 
 evaluation := {"date": "2023-06-16", "ref": "document/e", "early": false, "ends": "2028-06-16"}
@@ -56,6 +56,14 @@ test_no_means_chosen if {
 	found(group([long], [evaluation], object.union(control, {"feasible": "no"}))) == set()
 	found(group([long], [evaluation], object.union(control, {"date": "2025-02-28"}))) == set()
 	count(change_finished.not_owed) == 1 with input as group([], [evaluation], control)
+}
+
+test_measured_since_and_within_the_limits if {
+	unsaid := object.union(group([long], [evaluation], control), {"suspected_noisy": null, "exposure_unknown": {"limit": []}})
+	found(unsaid) == {{"before": "2028-06-16", "by": null}}
+	quiet := object.union(unsaid, {"changes": [object.union(long, {"measured": {"date": "2025-04-01", "ref": "measurement/m"}})]})
+	found(quiet) == set()
+	count(change_finished.not_owed) == 1 with input as quiet
 }
 
 test_only_where_there_is_a_risk if {

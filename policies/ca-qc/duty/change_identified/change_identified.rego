@@ -30,8 +30,8 @@ obligations contains {
 obligations contains {
 	"key": change.id,
 	"holds": null,
-	"note": sprintf("nobody has said whether the change of %s raises exposure", [change.date]),
-	"missing": ["whether the change raises exposure"],
+	"note": sprintf("it is not known whether the change of %s brings a risk of exceeding a limit", [change.date]),
+	"missing": [open_question(change)],
 	"because": [change.ref],
 } if {
 	some change in concerned
@@ -40,9 +40,22 @@ obligations contains {
 
 not_owed contains "no change that brings a risk of exceeding a limit is on record" if count(concerned) == 0
 
-known(change) if change.raises_exposure == "yes"
-
+# It brings a risk of exceeding a limit: so the register says, or it raises the noise of a situation where that is near.
 known(change) if change.identified_on != null
+
+known(change) if {
+	change.raises_exposure == "yes"
+	change.enrolling
+}
+
+known(change) if {
+	change.raises_exposure == "yes"
+	input.suspected_noisy == true
+}
+
+open_question(change) := "whether noise is suspected in this situation" if {
+	change.raises_exposure == "yes"
+} else := "whether the change raises exposure"
 
 entry(change) := {"date": change.identified_on, "ref": change.ref} if {
 	change.identified_on != null
@@ -58,4 +71,17 @@ concerned := [change |
 
 at_risk(change) if change.enrolling
 
-at_risk(_) if input.suspected_noisy != false
+at_risk(_) if input.suspected_noisy == true
+
+at_risk(change) if {
+	input.suspected_noisy == null
+	not found_below(change)
+}
+
+# Measured since, and no limit exceeded.
+found_below(change) if {
+	change.measured != null
+	every stretch in input.exposure_unknown.limit {
+		not common.covers(stretch, change.measured.date)
+	}
+}

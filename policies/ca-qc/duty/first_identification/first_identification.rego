@@ -13,6 +13,7 @@
 #   remedy: Identify the workplace situations at risk now, and enter each with its date in the register.
 package duty.first_identification
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -20,7 +21,7 @@ obligations contains {
 	"within": "first_identification_time",
 	"by": ["document.noise_register", "document.noise_evaluation"],
 	"note": note,
-	"because": [paper.ref | some paper in earlier],
+	"because": common.refs(earlier),
 } if {
 	input.as_of >= commencement
 }

@@ -14,6 +14,7 @@
 #   remedy: Have a competent person study the means at the source and beside it, and record each with its finding.
 package duty.means_identified
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -21,7 +22,7 @@ obligations contains {
 	"ask": "Which reasonable means did the evaluation find for this situation?",
 	"of": "competent person (engineering)",
 	"by": answer,
-	"because": array.concat([latest.ref], [control.ref | some control in since]),
+	"because": array.concat([latest.ref], common.refs(since)),
 	"facts": {"workers": input.workers, "means": [control.what | some control in since]},
 } if {
 	above_limit
@@ -35,10 +36,7 @@ not_owed contains "there is no evaluation yet, which is the matter of section 13
 	count(counted) == 0
 }
 
-above_limit if {
-	some spell in input.exposed.limit
-	spell.current == true
-}
+above_limit if common.any_current(input.exposed.limit)
 
 latest := counted[count(counted) - 1]
 

@@ -16,13 +16,14 @@ import data.common
 import rego.v2
 
 obligations contains {
-	"key": sprintf("%s/%s", [control.installed_on, control.what]),
-	"after": control.installed_on,
-	"by": first_since(control.installed_on),
-	"note": sprintf("%s was put in place on %s", [control.what, control.installed_on]),
-	"because": [control.ref],
+	"key": day,
+	"after": day,
+	"by": first_since(day),
+	"note": sprintf("%s put in place on %s; by when to measure again was not read", [concat(", ", [control.what | some control in of_day]), day]),
+	"because": common.refs(of_day),
 } if {
-	some control in installed
+	some day in {control.installed_on | some control in installed}
+	of_day := [control | some control in installed; control.installed_on == day]
 }
 
 not_owed contains "no means was put in place since the section came into force" if count(installed) == 0

@@ -17,6 +17,11 @@ test_not_measured_since if {
 
 test_measured_on_the_day if answers(group(control, [{"date": "2025-05-01", "ref": "measurement/m1"}])) == {{"date": "2025-05-01", "ref": "measurement/m1"}}
 
+test_two_means_of_one_day_are_one_matter if {
+	two := {"controls": [control, object.union(control, {"what": "silencers", "ref": "control/d"})], "measurements": []}
+	{[o.key, o.because] | some o in measured_after_means.obligations} == {["2025-05-01", ["control/c", "control/d"]]} with input as two
+}
+
 test_not_owed if {
 	every day in [null, "2023-06-15"] {
 		answers(group(object.union(control, {"installed_on": day}), [])) == set()

@@ -1,7 +1,8 @@
 # METADATA
 # title: Report of the measurement
 # description: >-
-#   A measurement is described in a report with set contents. What the contents are was not read; from memory.
+#   A measurement is described in a report with set contents. What the contents are was not read; from memory. The
+#   report of the latest measurement of each situation is asked for.
 # custom:
 #   cite: r. 13, ss. 141.1 to 141.3
 #   subject: group

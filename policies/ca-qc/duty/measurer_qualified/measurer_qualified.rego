@@ -18,7 +18,7 @@ import rego.v2
 obligations contains {
 	"holds": count(papers) > 0,
 	"note": note,
-	"because": array.concat(common.refs([input.latest_measurement]), [paper.ref | some paper in papers]),
+	"because": array.concat(common.refs([input.latest_measurement]), common.refs(papers)),
 	"facts": {"measurements": input.measurements},
 } if {
 	measured

@@ -30,7 +30,7 @@ obligations contains {
 	"holds": held(content),
 	"note": note(content),
 	"missing": common.missing(held(content), "what the register covers"),
-	"because": [register.ref | some register in registers],
+	"because": common.refs(registers),
 } if {
 	something_to_enter
 	count(registers) > 0
@@ -46,7 +46,7 @@ something_to_enter if {
 
 registers := [paper | some paper in input.documents; paper.kind == "noise_register"]
 
-covered := {content | some register in registers; some content in register.covers}
+covered := common.covered(registers)
 
 held(content) if content in covered
 

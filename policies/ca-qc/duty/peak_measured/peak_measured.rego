@@ -49,9 +49,13 @@ obligations contains {
 not_owed contains "the noise holds no impulses, or the situation was never measured" if not concerned
 
 concerned if {
-	input.first_survey != null
+	measured
 	input.impulsive != false
 }
+
+measured if input.first_survey != null
+
+measured if count(input.measurements) > 0
 
 peaks := [m | some m in input.measurements; m.current; m.peak_dbc != null]
 

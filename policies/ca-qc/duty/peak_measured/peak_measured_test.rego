@@ -25,6 +25,11 @@ test_impulses_without_peak if {
 
 test_nobody_has_said if holds(group(null, [])) == {null}
 
+test_a_sample_is_enough if {
+	sampled := object.union(group(true, [object.union(peak, {"peak_dbc": null})]), {"first_survey": null})
+	holds(sampled) == {false}
+}
+
 test_not_owed if {
 	holds(group(false, [])) == set()
 	unmeasured := object.union(group(true, []), {"first_survey": null})

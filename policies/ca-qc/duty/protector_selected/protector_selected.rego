@@ -20,7 +20,7 @@ obligations contains {
 	"holds": holds,
 	"note": said[holds],
 	"missing": common.missing(holds, "the standard of the selection"),
-	"because": [sheet.ref | some sheet in sheets],
+	"because": common.refs(sheets),
 	"facts": {"with_protectors": input.protector_holders},
 } if {
 	concerned
@@ -30,13 +30,12 @@ not_owed contains "the situation is not above a limit now, or nobody in it has p
 
 concerned if {
 	input.protector_holders > 0
-	some spell in input.exposed.limit
-	spell.current
+	common.any_current(input.exposed.limit)
 }
 
 sheets := [paper | some paper in input.documents; paper.kind == "protector_selection"]
 
-named := {word | some sheet in sheets; some word in sheet.covers}
+named := common.covered(sheets)
 
 accepted := {word | some word in common.at(data.parameters.protector_standards, input.as_of)}
 

@@ -16,6 +16,16 @@ import data.common
 import rego.v2
 
 obligations contains {
+	"key": "any",
+	"holds": false,
+	"note": "no training is on record",
+	"because": common.refs([input.protection]),
+} if {
+	user
+	input.training == null
+}
+
+obligations contains {
 	"key": topic,
 	"holds": covered(topic),
 	"note": note(topic),
@@ -23,6 +33,7 @@ obligations contains {
 	"because": common.refs([input.protection, input.training]),
 } if {
 	user
+	input.training != null
 	some topic in common.at(data.parameters.training_topics, input.as_of)
 }
 
@@ -31,11 +42,8 @@ not_owed contains "the worker is not known to use protectors above a limit now" 
 user if {
 	input.protection != null
 	common.at(data.parameters.training_topics, input.as_of) != null
-	some spell in input.exposed.limit
-	spell.current
+	common.any_current(input.exposed.limit)
 }
-
-covered(_) := false if input.training == null
 
 covered(topic) if topic in input.training.topics
 

@@ -21,8 +21,8 @@ test_trained if {
 }
 
 test_not_trained if {
-	holds(worker(null, null)) == {["protectors", false], ["noise_effects", false]}
-	some o in protector_training.obligations with input as worker(null, null)
+	holds(worker(null, null)) == {["any", false]}
+	some o in protector_training.obligations with input as worker(session(["protectors"], false), null)
 	o.note == "no training on record covers noise effects"
 }
 

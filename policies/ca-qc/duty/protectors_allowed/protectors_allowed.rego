@@ -22,7 +22,7 @@ obligations contains {
 	"ask": "In which of the three cases do protectors stand in for other means here?",
 	"of": "competent person (engineering)",
 	"by": shown,
-	"because": [control.ref | some control in input.controls],
+	"because": common.refs(input.controls),
 	"facts": {"workers": input.workers, "with_protectors": input.protector_holders},
 } if {
 	rely_on_protectors
@@ -32,8 +32,7 @@ not_owed contains "the situation is not above a limit now, or nobody in it has p
 
 rely_on_protectors if {
 	input.protector_holders > 0
-	some spell in input.exposed.limit
-	spell.current
+	common.any_current(input.exposed.limit)
 }
 
 shown := {"date": papers[0][0], "ref": papers[0][1]} if {

@@ -20,7 +20,7 @@ obligations contains {
 	"key": spell.from,
 	"holds": input.protection != null,
 	"note": note,
-	"because": array.concat(common.refs([input.protection]), [result.ref | some result in input.results]),
+	"because": array.concat(common.refs([input.protection]), common.refs(input.results)),
 	"facts": {"exposed_since": spell.from, "working": input.exposure_working},
 } if {
 	some spell in above
@@ -47,7 +47,4 @@ note := "the worker is above a limit and has no protector" if {
 
 above := [spell | some spell in input.exposed.limit; spell.current]
 
-not_known_now := [stretch.reason |
-	some stretch in input.exposure_unknown.limit
-	common.covers(stretch, input.as_of)
-]
+not_known_now := common.reasons(input.exposure_unknown.limit, input.as_of)

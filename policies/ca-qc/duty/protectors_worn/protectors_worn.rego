@@ -23,12 +23,22 @@ obligations contains {
 	"because": common.refs([input.wear]),
 	"facts": {"exposed_since": since},
 } if {
-	count(above) > 0
+	above
+	something_to_wear
 }
 
-not_owed contains "the worker is not known to be above a limit now" if count(above) == 0
+not_owed contains "the worker is not known to be above a limit now" if not above
 
-since := min([spell.from | some spell in above])
+not_owed contains "no protector is at hand, which is a finding of its own" if {
+	above
+	not something_to_wear
+}
+
+something_to_wear if input.protection != null
+
+something_to_wear if worn != null
+
+since := common.current_since(input.exposed.limit)
 
 default worn := null
 
@@ -44,4 +54,4 @@ said := {
 	null: "no check since the limit is exceeded says whether the worker wears protectors",
 }
 
-above := [spell | some spell in input.exposed.limit; spell.current]
+above if common.any_current(input.exposed.limit)

@@ -5,7 +5,10 @@ import rego.v2
 
 spell := {"from": "2023-06-16", "to": null, "current": true}
 
-worker(spells, wear) := {"exposed": {"limit": spells}, "wear": wear}
+worker(spells, wear) := {
+	"exposed": {"limit": spells}, "wear": wear,
+	"protection": {"date": "2024-01-01", "ref": "protector_issue/p"},
+}
 
 wear(worn, day) := {"date": day, "ref": "wear_check/w", "worn": worn}
 
@@ -15,6 +18,13 @@ test_seen if {
 	holds(worker([spell], wear(true, "2023-06-16"))) == {true}
 	holds(worker([spell], wear(false, "2024-06-16"))) == {false}
 	count(protectors_worn.not_owed) == 0 with input as worker([spell], null)
+}
+
+test_no_protector_is_another_finding if {
+	without := object.union(worker([spell], null), {"protection": null})
+	holds(without) == set()
+	count(protectors_worn.not_owed) == 1 with input as without
+	holds(object.union(without, {"wear": wear(false, "2024-06-16")})) == {false}
 }
 
 test_not_seen_since if {

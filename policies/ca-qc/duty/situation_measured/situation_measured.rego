@@ -17,11 +17,11 @@ import rego.v2
 
 obligations contains {
 	"holds": true,
-	"on": input.first_survey.date,
-	"because": [input.first_survey.ref],
+	"on": first.date,
+	"because": [first.ref],
 	"facts": {"workers": input.workers},
 } if {
-	surveyed
+	measured
 	count(not_known_now) == 0
 }
 
@@ -41,6 +41,7 @@ obligations contains {
 	"facts": {"workers": input.workers},
 } if {
 	not measured
+	in_force
 	input.suspected_noisy == true
 }
 
@@ -51,6 +52,7 @@ obligations contains {
 	"facts": {"workers": input.workers},
 } if {
 	not measured
+	in_force
 	input.suspected_noisy == null
 }
 
@@ -59,13 +61,18 @@ not_owed contains "nothing suggests a risk of exceeding a limit" if {
 	input.suspected_noisy == false
 }
 
-surveyed if input.first_survey != null
+not_owed contains "the section was not in force yet" if {
+	not measured
+	not in_force
+}
 
-measured if surveyed
+in_force if common.at(data.parameters.sections_in_force, input.as_of) != null
 
-measured if count(input.measurements) > 0
+measured if first
 
-not_known_now := [stretch.reason |
-	some stretch in input.exposure_unknown.limit
-	common.covers(stretch, input.as_of)
-]
+# The first result, or a sample that leaves the level only within bounds.
+first := input.first_survey if {
+	input.first_survey != null
+} else := input.measurements[0]
+
+not_known_now := common.reasons(input.exposure_unknown.limit, input.as_of)

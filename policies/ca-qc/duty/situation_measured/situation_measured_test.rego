@@ -5,6 +5,8 @@ import rego.v2
 
 survey := {"date": "2024-03-05", "ref": "measurement/m1"}
 
+sample := {"id": "m2", "date": "2024-02-05", "ref": "measurement/m2"}
+
 group(changes) := object.union(
 	{
 		"as_of": "2026-06-30", "suspected_noisy": true, "first_survey": null, "workers": 3,
@@ -26,9 +28,12 @@ test_measured if {
 }
 
 test_measured_on_another_scale if {
-	holds(group({"measurements": [{"id": "m1"}], "exposure_unknown": unknown})) == {null}
+	holds(group({"measurements": [sample], "exposure_unknown": unknown})) == {null}
 	holds(group({"first_survey": survey, "exposure_unknown": unknown})) == {null}
 }
+
+# A level known only within bounds that lie on one side of the limit is known.
+test_bounds_decide if holds(group({"measurements": [sample]})) == {true}
 
 test_never_measured if {
 	holds(group({"exposure_unknown": unknown})) == {false}
@@ -38,4 +43,12 @@ test_never_measured if {
 test_nothing_suspected if {
 	holds(group({"suspected_noisy": false})) == set()
 	count(situation_measured.not_owed) == 1 with input as group({"suspected_noisy": false})
+}
+
+test_not_in_force_yet if {
+	every suspected in [true, null] {
+		dossier := group({"as_of": "2023-06-15", "suspected_noisy": suspected})
+		holds(dossier) == set()
+		count(situation_measured.not_owed) == 1 with input as dossier
+	}
 }

@@ -26,6 +26,18 @@ test_told if {
 	answers(worker("2024-01-01", [notice("2024-01-01")])) == {["2024-01-01", {"date": "2024-01-01", "ref": "notice/n"}]}
 }
 
+test_told_before_it_was_so if {
+	# back in the group after a year elsewhere
+	back := object.union(worker("2020-01-01", [notice("2023-07-01")]), {"exposures": [
+		{"from": "2020-01-01", "to": "2024-01-01", "group": "g1"}, {"from": "2024-01-01", "to": "2025-01-01", "group": "g2"},
+		{"from": "2025-01-01", "to": null, "group": "g1"},
+	]})
+	answers(back) == {["2025-01-01", null]}
+
+	# told of a situation that was within the limits then
+	answers(object.union(worker("2020-01-01", [notice("2023-07-01")]), {"exposed": {"limit": [{"from": "2025-08-05", "to": null, "current": true}]}})) == {["2025-08-05", null]}
+}
+
 test_not_owed if {
 	every changes in [{"exposed": {"limit": []}}, {"as_of": "2023-06-15"}] {
 		dossier := object.union(worker("2020-01-01", []), changes)

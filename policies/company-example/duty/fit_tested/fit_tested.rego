@@ -31,7 +31,4 @@ not_owed contains "no protector at hand, which is a finding of its own" if {
 	input.protection == null
 }
 
-in_program_now if {
-	some spell in input.enrolled
-	spell.current == true
-}
+in_program_now if common.any_current(input.enrolled)

@@ -3,7 +3,7 @@ package duty.appointment_certificate_test
 import data.duty.appointment_certificate
 import rego.v2
 
-worker(certificate, next) := {"examinations": [
+worker(certificate, next) := {"employed": [{"from": "2020-03-02", "to": null, "current": true}], "examinations": [
 	{"ref": "e1", "kind": "health_appointment", "attended_on": "2025-03-01", "certificate_on": certificate, "next_due": next},
 	{"ref": "e2", "kind": "health_appointment", "attended_on": null, "certificate_on": null, "next_due": null},
 ]}
@@ -27,6 +27,14 @@ test_certificate if {
 test_certificate_without_the_next_date if found(worker("2025-03-04", null))["next date of e1"].holds == null
 
 test_no_appointment if {
-	found({"examinations": []}) == {}
-	count(appointment_certificate.not_owed) == 1 with input as {"examinations": []}
+	found({"examinations": [], "employed": []}) == {}
+	count(appointment_certificate.not_owed) == 1 with input as {"examinations": [], "employed": []}
+}
+
+test_not_of_somebody_who_has_left if {
+	gone := {"employed": [{"from": "2020-03-02", "to": "2025-06-01", "current": false}]}
+	every dossier in [object.union(worker(null, null), gone)] {
+		count(appointment_certificate.obligations) == 0 with input as dossier
+		count(appointment_certificate.not_owed) == 1 with input as dossier
+	}
 }

@@ -24,9 +24,12 @@ obligations contains {
 	some appointment in appointments
 }
 
-not_owed contains "no appointment that was attended is on record" if count(appointments) == 0
+not_owed contains "not employed now, or no appointment that was attended is on record" if count(appointments) == 0
 
+# Of somebody who has left, nothing of it may be left.
 appointments := [examination |
+	some spell in input.employed
+	spell.current == true
 	some examination in input.examinations
 	examination.kind == "health_appointment"
 	examination.attended_on != null

@@ -3,7 +3,7 @@ package duty.appointment_physician_test
 import data.duty.appointment_physician
 import rego.v2
 
-worker(by) := {"examinations": [
+worker(by) := {"employed": [{"from": "2020-03-02", "to": null, "current": true}], "examinations": [
 	{"ref": "examination/e1", "kind": "health_appointment", "attended_on": "2025-03-01", "by_is": by},
 	{"ref": "examination/e2", "kind": "health_appointment", "attended_on": null, "by_is": null},
 ]}
@@ -28,6 +28,14 @@ test_not_known if {
 }
 
 test_no_appointment if {
-	holds({"examinations": []}) == set()
-	count(appointment_physician.not_owed) == 1 with input as {"examinations": []}
+	holds({"examinations": [], "employed": []}) == set()
+	count(appointment_physician.not_owed) == 1 with input as {"examinations": [], "employed": []}
+}
+
+test_not_of_somebody_who_has_left if {
+	gone := {"employed": [{"from": "2020-03-02", "to": "2025-06-01", "current": false}]}
+	every dossier in [object.union(worker("physician"), gone)] {
+		count(appointment_physician.obligations) == 0 with input as dossier
+		count(appointment_physician.not_owed) == 1 with input as dossier
+	}
 }

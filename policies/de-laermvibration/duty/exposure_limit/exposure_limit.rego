@@ -35,6 +35,7 @@ obligations contains {
 	"value": open_level,
 	"at_most": "limit_level",
 	"note": said,
+	"missing": common.missing(open_level, "the daily level of the group as it is now"),
 	"because": records,
 	"facts": shown,
 } if {
@@ -73,11 +74,20 @@ exposures_now := [exposure | some exposure in input.exposures; common.covers(exp
 
 # The best estimate of the day counts, not that of the week, and without the allowance of the accuracy class: both are for
 # the action values.
-open_level := max([best(exposure.channels.day) | some exposure in exposures_now; best(exposure.channels.day) != null])
+open_level := max([level | some exposure in exposures_now; some level in best(exposure)]) if {
+	count([level | some exposure in exposures_now; some level in best(exposure)]) > 0
+} else := null
 
-best(day) := day.level_dba if {
-	day.level_dba != null
-} else := day.at_least
+# After a change that nobody measured, the estimate of the measurement before it stays as lower bound; it decides only
+# where it is above the value already.
+best(exposure) := [exposure.channels.day.level_dba] if {
+	exposure.channels.day.level_dba != null
+} else := [other.channels.day.level_dba |
+	some other in input.exposures
+	other.ref == exposure.ref
+	other.channels.day.level_dba != null
+	other.channels.day.level_dba > common.at(data.parameters.limit_level, input.as_of)
+]
 
 open_peak := max([exposure.channels.peak.at_least | some exposure in exposures_now; exposure.channels.peak.at_least != null])
 
@@ -97,7 +107,9 @@ peak := input.protection.peak_under_dbc if {
 	worn
 } else := open_peak
 
-lacking := [words | some words in input.protection.missing; level == null]
+lacking := [words | some words in input.protection.missing; level == null] if {
+	worn
+} else := common.missing(level, "the daily level of the group as it is now")
 
 said := "no protector is at hand; the exposure is the level at the ear" if {
 	input.protection == null

@@ -48,6 +48,7 @@ test_no_protector if {
 test_seen_without_the_protector if {
 	o := obligation("level", worker(true, false, muff(84.2, null), seen(false)))
 	o.value == 99
+	o.missing == []
 	contains(o.note, "last seen without")
 }
 
@@ -57,9 +58,17 @@ test_attenuation_not_known if {
 	o.missing == ["C-weighted level of the measurement"]
 }
 
+# What is known as at least holds the allowance of the class; the estimate before the change does not.
 test_level_known_only_as_at_least if {
 	bounded := object.union(stretch, {"ref": "measurement/m1", "channels": {"day": {"level_dba": null, "at_least": 91}, "peak": {"at_least": null}}})
-	obligation("level", object.union(worker(true, false, null, null), {"exposures": [bounded]})).value == 91
+	before := object.union(exposure, {"from": "2023-01-01", "to": "2024-01-01", "channels": {"day": {"level_dba": 88, "at_least": 91}, "peak": {"at_least": null}}})
+	obligation("level", object.union(worker(true, false, null, null), {"exposures": [before, bounded]})).value == 88
+	lower := object.union(before, {"channels": {"day": {"level_dba": 84, "at_least": 87}, "peak": {"at_least": null}}})
+	every exposures in [[bounded], [lower, bounded]] {
+		o := obligation("level", object.union(worker(true, false, null, null), {"exposures": exposures}))
+		o.value == null
+		count(o.missing) == 1
+	}
 }
 
 test_peak if {

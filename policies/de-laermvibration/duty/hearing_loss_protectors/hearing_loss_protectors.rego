@@ -24,6 +24,7 @@ obligations contains {
 	"facts": {"exposed_since": since},
 } if {
 	since != null
+	not compulsory_for_all
 	damaged
 }
 
@@ -31,7 +32,18 @@ not_owed contains "the records do not show exposure at or above the lower action
 
 not_owed contains "no hearing test on record shows a loss for which protectors are asked for below the upper values" if {
 	since != null
+	not compulsory_for_all
 	not damaged
+}
+
+not_owed contains "at or above the upper action values all wear protectors, which is a duty of its own" if {
+	since != null
+	compulsory_for_all
+}
+
+compulsory_for_all if {
+	some stretch in input.exposed.upper_reached
+	stretch.current == true
 }
 
 current := {stretch.from | some stretch in input.exposed.lower_reached; stretch.current == true}

@@ -4,7 +4,7 @@ import data.duty.hearing_loss_protectors
 import rego.v2
 
 worker(current, left, right, wear) := {
-	"wear": wear, "exposed": {"lower_reached": [{"from": "2024-01-01", "to": null, "current": current}]},
+	"wear": wear, "exposed": {"upper_reached": [], "lower_reached": [{"from": "2024-01-01", "to": null, "current": current}]},
 	"audiograms": [
 		{"ref": "audiogram/a0", "invalidated": true, "schemes": {"hearing_damage": {"left": true, "right": true}}},
 		{"ref": "audiogram/a1", "invalidated": false, "schemes": {"hearing_damage": {"left": left, "right": right}}},
@@ -23,13 +23,24 @@ test_seen_without if {
 	o.because == ["audiogram/a1", "wear_check/c1"]
 }
 
-test_seen_with if holds(worker(true, false, true, check("2024-01-01", true))) == {true}
+test_seen_with if {
+	some o in hearing_loss_protectors.obligations with input as worker(true, false, true, check("2024-01-01", true))
+	o.holds == true
+	o.note == null
+}
 
 test_never_looked_at if {
 	some o in hearing_loss_protectors.obligations with input as worker(true, true, true, check("2023-12-31", true))
 	o.holds == null
+	contains(o.note, "no check shows")
 	count(o.missing) == 1
 	count(reasons(worker(true, true, true, null))) == 0
+}
+
+test_at_the_upper_values_it_is_a_duty_of_all if {
+	loud := object.union(worker(true, true, true, null), {"exposed": {"upper_reached": [{"from": "2024-01-01", "to": null, "current": true}]}})
+	holds(loud) == set()
+	count(reasons(loud)) == 1
 }
 
 test_no_damage_on_record if {

@@ -31,7 +31,8 @@ test_offered_and_others_looked_at if {
 }
 
 test_known_by_an_opinion if {
-	some o in illness_appointment.obligations with input as {"examinations": [exam(null, [opinion])]}
+	later := object.union(opinion, {"date": "2025-05-10"})
+	some o in illness_appointment.obligations with input as {"examinations": [exam(null, [opinion, later])]}
 	o.after == "2025-03-10"
 }
 

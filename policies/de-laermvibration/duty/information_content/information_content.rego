@@ -51,6 +51,8 @@ covered := null if {
 	hidden
 } else := count(lacking) == 0
 
-said := sprintf("the training did not cover: %s", [replace(concat(", ", lacking), "_", " ")]) if count(lacking) > 0
-
-else := null
+said := "the training on record does not say what it covered" if {
+	hidden
+} else := sprintf("the training did not cover: %s", [replace(concat(", ", lacking), "_", " ")]) if {
+	count(lacking) > 0
+} else := null

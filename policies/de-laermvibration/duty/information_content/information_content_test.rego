@@ -28,6 +28,7 @@ test_topics_not_recorded if {
 	some o in information_content.obligations with input as worker(true, session([])) with data.parameters.instruction_topics as parameter
 	o.holds == null
 	count(o.missing) == 1
+	contains(o.note, "does not say")
 }
 
 test_law_names_no_topics_on_that_day if holds(object.union(worker(true, session(["one"])), {"as_of": "2006-02-14"})) == {null}

@@ -18,11 +18,18 @@ obligations contains {
 	"every": "instruction_interval",
 	"during": {"from": max([stretch.from, known_from]), "to": stretch.to},
 	"by": "training.any",
+	"note": "the instruction is repeated each year",
 } if {
+	input.training != null
 	some stretch in current
 }
 
 not_owed contains "the records do not show exposure at or above the lower action values now" if count(current) == 0
+
+not_owed contains "no instruction is on record, which is a finding of its own" if {
+	count(current) > 0
+	input.training == null
+}
 
 current := [stretch | some stretch in input.exposed.lower_reached; stretch.current == true]
 

@@ -24,6 +24,20 @@ obligations contains {
 } if {
 	lower_reached_now
 	some change in material
+	matters(change)
+}
+
+# Whether the change is material, nobody can tell before somebody has said what it does.
+obligations contains {
+	"key": change.id,
+	"holds": null,
+	"note": sprintf("nobody has said whether the change of %s raises exposure: %s", [change.date, about(change)]),
+	"missing": ["whether the change raises exposure, or an instruction of the group since"],
+	"because": [change.ref],
+} if {
+	lower_reached_now
+	some change in material
+	not matters(change)
 }
 
 not_owed contains "the records do not show exposure at or above the lower action values now" if not lower_reached_now
@@ -39,6 +53,14 @@ lower_reached_now if {
 }
 
 material := [change | some change in input.changes; change.raises_exposure != "no"]
+
+matters(change) if change.raises_exposure == "yes"
+
+matters(change) if {
+	some paper in input.documents
+	paper.kind == "instruction"
+	paper.date >= change.date
+}
 
 about(change) := change.what if {
 	change.what != null

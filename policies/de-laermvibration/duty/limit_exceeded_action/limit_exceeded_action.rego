@@ -47,6 +47,8 @@ covered := null if {
 	hidden
 } else := count(lacking) == 0
 
-said := sprintf("after the limit was exceeded, no record shows: %s", [replace(concat(", ", lacking), "_", " ")]) if count(lacking) > 0
-
-else := null
+said := "the document does not say which heads it covers" if {
+	hidden
+} else := sprintf("after the limit was exceeded, no record shows: %s", [replace(concat(", ", lacking), "_", " ")]) if {
+	count(lacking) > 0
+} else := null

@@ -27,6 +27,7 @@ test_heads_not_recorded if {
 	answer(dossier([paper([])])) == {null}
 	some o in limit_exceeded_action.obligations with input as dossier([paper([])]) with data.parameters.ear_action_heads as parameter
 	count(o.missing) == 1
+	contains(o.note, "does not say")
 }
 
 test_law_names_no_heads_on_that_day if {

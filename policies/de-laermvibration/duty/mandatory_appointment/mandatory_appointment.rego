@@ -48,6 +48,7 @@ obligations contains {
 	"within": "second_appointment",
 	"no_later_than": chain[0].next_due,
 	"by": link(1),
+	"note": sprintf("the second appointment, counted from the start on %s", [start]),
 	"because": [chain[0].ref],
 } if {
 	timed
@@ -61,6 +62,7 @@ obligations contains {
 	"within": "later_appointment",
 	"no_later_than": chain[i].next_due,
 	"by": link(i + 1),
+	"note": sprintf("the next appointment after that of %s", [chain[i].date]),
 	"because": [chain[i].ref],
 } if {
 	some i in later

@@ -18,6 +18,7 @@ test_no_report if {
 test_report if {
 	some o in measurement_method.obligations with input as group(true, [report])
 	o.holds == true
+	o.note == null
 	o.because == ["document/d1", "measurement/m1"]
 }
 

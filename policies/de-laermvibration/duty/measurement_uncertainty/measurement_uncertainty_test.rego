@@ -21,12 +21,14 @@ test_report_covers_it if holds(group(null, null, report(["method", "uncertainty"
 test_report_does_not_cover_it if {
 	some o in measurement_uncertainty.obligations with input as group(null, null, report(["method"]))
 	o.holds == false
+	contains(o.note, "does not cover")
 	o.missing == []
 }
 
 test_nobody_knows if {
 	some o in measurement_uncertainty.obligations with input as group(null, null, report([]))
 	o.holds == null
+	contains(o.note, "as if it were exact")
 	count(o.missing) == 1
 	holds(group(null, null, [])) == {null}
 	count(measurement_uncertainty.not_owed) == 0 with input as group(null, null, [])

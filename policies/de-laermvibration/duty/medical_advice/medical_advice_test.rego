@@ -16,11 +16,14 @@ test_not_advised if {
 	holds(worker(true, null)) == {false}
 	some o in medical_advice.obligations with input as worker(true, session(["protectors"]))
 	o.holds == false
+	contains(o.note, "no general advice")
 	o.because == ["training/t1"]
 }
 
 test_advised if {
-	holds(worker(true, session(["protectors", "medical_advice"]))) == {true}
+	some o in medical_advice.obligations with input as worker(true, session(["protectors", "medical_advice"]))
+	o.holds == true
+	o.note == null
 	count(medical_advice.not_owed) == 0 with input as worker(true, session(["medical_advice"]))
 }
 

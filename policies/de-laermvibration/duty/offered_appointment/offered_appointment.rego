@@ -46,6 +46,7 @@ obligations contains {
 	"within": "second_appointment",
 	"no_later_than": chain[0].next_due,
 	"by": link(1),
+	"note": sprintf("the second offer, counted from the start on %s", [start]),
 	"because": [chain[0].ref],
 } if {
 	timed
@@ -59,6 +60,7 @@ obligations contains {
 	"within": "later_appointment",
 	"no_later_than": chain[i].next_due,
 	"by": link(i + 1),
+	"note": sprintf("the next offer after that of %s", [chain[i].date]),
 	"because": [chain[i].ref],
 } if {
 	some i in later

@@ -42,6 +42,12 @@ test_visit_without_an_offer_counts_from_its_day if {
 	object.keys(found(worker("2024-05-01", [], [visit, hearing_test]))) == {"first, before 2024-05-01", "second, after 2024-05-01"}
 }
 
+test_offer_on_the_first_day_belongs_to_the_stretch if {
+	o := found(worker("2024-05-01", [], [offer("e1", "2024-05-01", null)]))
+	object.keys(o) == {"first, before 2024-05-01", "second, after 2024-05-01"}
+	o["second, after 2024-05-01"].by == null
+}
+
 test_start_before_the_ordinance if {
 	object.keys(found(worker("2007-05-01", [], []))) == {"first, since 2007-05-01"}
 	object.keys(found(worker("2007-05-01", [], [offer("e1", "2024-04-01", null)]))) == {"first, since 2007-05-01", "after e1"}

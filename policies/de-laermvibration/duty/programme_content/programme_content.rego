@@ -46,6 +46,8 @@ covered := null if {
 	hidden
 } else := count(lacking) == 0
 
-said := sprintf("the programme does not hold: %s", [replace(concat(", ", lacking), "_", " ")]) if count(lacking) > 0
-
-else := null
+said := "the programme on record does not say what it holds" if {
+	hidden
+} else := sprintf("the programme does not hold: %s", [replace(concat(", ", lacking), "_", " ")]) if {
+	count(lacking) > 0
+} else := null

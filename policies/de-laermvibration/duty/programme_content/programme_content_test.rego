@@ -27,6 +27,7 @@ test_heads_not_recorded if {
 	answer(dossier([paper([])])) == {null}
 	some o in programme_content.obligations with input as dossier([paper([])]) with data.parameters.programme_heads as parameter
 	count(o.missing) == 1
+	contains(o.note, "does not say")
 }
 
 test_law_names_no_heads_on_that_day if {

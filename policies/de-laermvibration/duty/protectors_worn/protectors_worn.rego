@@ -24,9 +24,19 @@ obligations contains {
 	"facts": {"compulsory_since": since},
 } if {
 	since != null
+	something_to_wear
 }
 
 not_owed contains "the records do not show exposure at or above the upper action values now" if since == null
+
+not_owed contains "no protector at hand, which is a finding of its own" if {
+	since != null
+	not something_to_wear
+}
+
+something_to_wear if input.protection != null
+
+something_to_wear if worn != null
 
 current := {stretch.from | some stretch in input.exposed.upper_reached; stretch.current == true}
 

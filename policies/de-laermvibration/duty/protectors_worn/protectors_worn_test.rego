@@ -4,7 +4,7 @@ import data.duty.protectors_worn
 import rego.v2
 
 worker(current, wear) := {
-	"wear": wear,
+	"wear": wear, "protection": {"date": "2024-01-10", "ref": "protector_issue/p1"},
 	"exposed": {"upper_reached": [{"from": "2024-01-01", "to": null, "current": current}]},
 }
 
@@ -28,6 +28,13 @@ test_never_looked_at if {
 	holds(worker(true, null)) == {null}
 	holds(worker(true, check("2024-05-02", null))) == {null}
 	count(protectors_worn.not_owed) == 0 with input as worker(true, null)
+}
+
+test_no_protector_is_another_finding if {
+	without := object.union(worker(true, null), {"protection": null})
+	holds(without) == set()
+	count(protectors_worn.not_owed) == 1 with input as without
+	holds(object.union(worker(true, check("2024-05-02", false)), {"protection": null})) == {false}
 }
 
 test_check_from_before_the_exposure if {

@@ -22,6 +22,18 @@ obligations contains {
 	"because": [request.ref],
 } if {
 	some request in requests
+	dated(request)
+}
+
+obligations contains {
+	"key": request.ref,
+	"holds": null,
+	"note": "the worker asked for an appointment, and neither an offer nor a visit has a day",
+	"missing": ["the day of the offer or of the appointment"],
+	"because": [request.ref],
+} if {
+	some request in requests
+	not dated(request)
 }
 
 not_owed contains "no wish of the worker for an appointment is on record" if count(requests) == 0
@@ -32,6 +44,10 @@ requests := [examination |
 	examination.purpose == "on_request"
 	examination.answer != "declined"
 ]
+
+dated(request) if request.offered_on != null
+
+dated(request) if request.attended_on != null
 
 held(request) := null if {
 	request.attended_on == null

@@ -17,7 +17,27 @@ test_not_held if {
 	count(requested_appointment.not_owed) == 0 with input as worker("on_request", null, null)
 }
 
-test_held if found(worker("on_request", "accepted", "2024-04-20")) == {{"date": "2024-04-20", "ref": "e1"}}
+test_no_day_at_all if {
+	dossier := {"examinations": [{
+		"ref": "e1", "kind": "health_appointment", "purpose": "on_request", "answer": null,
+		"offered_on": null, "attended_on": null,
+	}]}
+	{o.holds | some o in requested_appointment.obligations} == {null} with input as dossier
+}
+
+test_held_without_an_offer if {
+	dossier := {"examinations": [{
+		"ref": "e1", "kind": "health_appointment", "purpose": "on_request", "answer": null,
+		"offered_on": null, "attended_on": "2024-04-20",
+	}]}
+	found(dossier) == {{"date": "2024-04-20", "ref": "e1"}}
+}
+
+test_held if {
+	some o in requested_appointment.obligations with input as worker("on_request", "accepted", "2024-04-20")
+	o.by == {"date": "2024-04-20", "ref": "e1"}
+	o.after == "2024-04-01"
+}
 
 test_no_wish if {
 	every dossier in [{"examinations": []}, worker("periodic", "accepted", null), worker("on_request", "declined", null)] {

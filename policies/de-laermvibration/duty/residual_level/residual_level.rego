@@ -17,7 +17,11 @@ import rego.v2
 
 obligations contains object.union(estimate, {"key": "not too loud", "at_most": "residual_top"}) if protected_now
 
-obligations contains object.union(estimate, {"key": "not too quiet", "at_least": "residual_floor"}) if protected_now
+# A level that is not known is said once.
+obligations contains object.union(estimate, {"key": "not too quiet", "at_least": "residual_floor"}) if {
+	protected_now
+	input.protection.under_db != null
+}
 
 not_owed contains "the records do not show exposure above the lower action values now" if not above_now
 

@@ -23,6 +23,7 @@ test_both_ends_are_compared if {
 
 test_no_estimate if {
 	some o in residual_level.obligations with input as worker(true, muff(null))
+	values(worker(true, muff(null))) == {"not too loud": null}
 	o.value == null
 	o.missing == ["H of the protector p1"]
 }

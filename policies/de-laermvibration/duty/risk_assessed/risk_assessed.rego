@@ -29,8 +29,7 @@ obligations contains {
 	"missing": ["whether the group works in noise"],
 	"note": "no assessment is on record, and nobody has said whether the group works in noise",
 } if {
-	not in_noise
-	input.suspected_noisy == null
+	nobody_knows
 	count(papers) == 0
 }
 
@@ -39,25 +38,28 @@ not_owed contains "nothing suggests that the group works in noise" if {
 	input.suspected_noisy == false
 }
 
-not_owed contains "measured, and below the lower action values" if {
-	not in_noise
-	input.suspected_noisy == true
-}
-
-not_owed contains "assessed, though nobody has said whether the group works in noise" if {
-	not in_noise
-	input.suspected_noisy == null
+not_owed contains "nobody has said whether the group works in noise, but it was assessed" if {
+	nobody_knows
 	count(papers) > 0
 }
 
-# Noise that is suspected is assessed until it is known to stay below the lower action values.
+not_owed contains "measured below the lower action values, and nobody suspects noise" if {
+	not in_noise
+	input.suspected_noisy == null
+	not nobody_knows
+}
+
+# Noise that is suspected is assessed in writing, also where it turns out to stay below the lower action values.
 in_noise if {
 	some stretch in input.exposed.lower_reached
 	stretch.current == true
 }
 
-in_noise if {
-	input.suspected_noisy == true
+in_noise if input.suspected_noisy == true
+
+nobody_knows if {
+	not in_noise
+	input.suspected_noisy == null
 	some stretch in input.exposure_unknown.lower_reached
 	common.covers(stretch, input.as_of)
 }

@@ -21,6 +21,8 @@ test_nothing_considered if {
 }
 
 test_considered if {
+	some o in risk_eliminated.obligations with input as group([control("studied", "enclosure", null)], [])
+	o.note == null
 	holds(group([control("studied", "enclosure", null)], [])) == {true}
 	holds(group([], [{"kind": "means_register", "ref": "document/d1"}])) == {true}
 	done(group([control("studied", "enclosure", null), control("no", null, null)], [])) == set()

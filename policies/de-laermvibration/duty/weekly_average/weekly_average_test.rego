@@ -22,7 +22,13 @@ test_conditions_met if {
 	count(weekly_average.not_owed) == 0 with input as group(true, true, true, [paper], 84.9)
 }
 
-test_conditions_not_met if held(group(true, true, false, [], 84.9)) == {"days vary": false, "permission": false}
+test_conditions_not_met if {
+	held(group(true, true, false, [], 84.9)) == {"days vary": false, "permission": false}
+	notes := {o.note | some o in weekly_average.obligations; o.key != "level of the week"} with input as group(true, true, false, [], 84.9)
+	count({note | some note in notes; note != null}) == 2
+	quiet := {o.note | some o in weekly_average.obligations; o.key != "level of the week"} with input as group(true, true, true, [paper], 84.9)
+	quiet == {null}
+}
 
 test_not_known_whether_days_vary if {
 	held(group(true, true, null, [paper], null))["days vary"] == null

@@ -12,6 +12,7 @@
 #   remedy: Take the worker out of that work until they have taken part.
 package duty.work_without_appointment
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -61,7 +62,17 @@ refused := [appointment.ref |
 	appointment.attended_on == null
 	appointment.offered_on != null
 	not since(appointment.offered_on)
+	not only_offered(appointment.offered_on)
 ]
+
+# Between the lower and the upper values the appointment was one that a worker may refuse.
+only_offered(day) if {
+	some stretch in input.exposed.lower_exceeded
+	common.covers(stretch, day)
+	every loud in input.exposed.upper_reached {
+		not common.covers(loud, day)
+	}
+}
 
 since(day) if {
 	some appointment in appointments

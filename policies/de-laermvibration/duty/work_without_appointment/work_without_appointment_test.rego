@@ -4,7 +4,10 @@ import data.duty.work_without_appointment
 import rego.v2
 
 worker(current, examinations) := {
-	"exposed": {"upper_reached": [{"from": "2024-01-01", "to": null, "current": current}]},
+	"exposed": {
+		"lower_exceeded": [{"from": "2022-01-01", "to": null, "current": true}],
+		"upper_reached": [{"from": "2024-01-01", "to": null, "current": current}],
+	},
 	"examinations": examinations,
 }
 
@@ -25,6 +28,12 @@ test_took_part_since if {
 	some o in work_without_appointment.obligations with input as worker(true, [declined("2024-04-01"), attended("2024-04-01")])
 	o.holds == true
 	o.because == ["examination/e2"]
+}
+
+test_refusal_of_an_offered_appointment_is_none if {
+	holds(worker(true, [declined("2023-12-31")])) == set()
+	holds(worker(true, [declined("2021-12-31")])) == {false}
+	count(work_without_appointment.not_owed) == 1 with input as worker(true, [declined("2023-12-31")])
 }
 
 test_nothing_on_record if {

@@ -32,7 +32,7 @@ papers := [paper | some paper in input.documents; paper.kind == "risk_assessment
 heads := common.at(data.parameters.assessment_heads, input.as_of)
 
 # Several documents of the kind add up.
-lacking := sort({head | some head in heads} - {head | some paper in papers; some head in paper.covers})
+lacking := sort({head | some head in heads} - common.covered(papers))
 
 hidden if heads == null
 
@@ -47,6 +47,8 @@ covered := null if {
 	hidden
 } else := count(lacking) == 0
 
-said := sprintf("the risk assessment does not cover: %s", [replace(concat(", ", lacking), "_", " ")]) if count(lacking) > 0
-
-else := null
+said := "the document does not say which heads it covers" if {
+	hidden
+} else := sprintf("the risk assessment does not cover: %s", [common.in_words(lacking)]) if {
+	count(lacking) > 0
+} else := null

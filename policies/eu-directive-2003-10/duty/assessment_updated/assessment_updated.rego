@@ -23,11 +23,50 @@ obligations contains {
 	"because": [change.ref],
 } if {
 	some change in material
+	matters(change)
 }
 
-not_owed contains "no change that may matter to the assessment is on record" if count(material) == 0
+# Whether an assessment of before must change, nobody can tell before somebody has said what the change does.
+obligations contains {
+	"key": change.id,
+	"holds": null,
+	"note": sprintf("nobody has said whether the change of %s raises exposure: %s", [change.date, about(change)]),
+	"missing": ["whether the change raises exposure, or a review of the assessment since"],
+	"because": [change.ref],
+} if {
+	some change in material
+	not matters(change)
+}
 
-material := [change | some change in input.changes; change.raises_exposure != "no"]
+not_owed contains "no risk assessment is on record, which is a finding of its own where one is owed" if count(papers) == 0
+
+not_owed contains "no change that may matter to the assessment is on record" if {
+	count(papers) > 0
+	count(material) == 0
+}
+
+papers := [paper | some paper in input.documents; paper.kind == "risk_assessment"]
+
+material := [change |
+	count(papers) > 0
+	not quiet
+	some change in input.changes
+	change.raises_exposure != "no"
+]
+
+# Nothing suggests that the group works in noise, and the change did not bring it there.
+quiet if {
+	input.suspected_noisy == false
+	count([stretch | some stretch in input.exposed.lower_reached; stretch.current == true]) == 0
+}
+
+matters(change) if change.raises_exposure == "yes"
+
+matters(change) if {
+	some paper in papers
+	some day in [paper.date, paper.reviewed_on]
+	day >= change.date
+}
 
 about(change) := change.what if {
 	change.what != null

@@ -34,7 +34,7 @@ papers := [paper | some paper in input.documents; paper.kind == "consultation"]
 heads := common.at(data.parameters.consultation_heads, input.as_of)
 
 # Several documents of the kind add up.
-lacking := sort({head | some head in heads} - {head | some paper in papers; some head in paper.covers})
+lacking := sort({head | some head in heads} - common.covered(papers))
 
 hidden if heads == null
 
@@ -53,6 +53,8 @@ covered := false if {
 
 said := "no consultation of the workers or their representatives is on record" if {
 	count(papers) == 0
-} else := sprintf("the workers were not consulted on: %s", [replace(concat(", ", lacking), "_", " ")]) if {
+} else := "the record does not say on what the workers were consulted" if {
+	hidden
+} else := sprintf("the workers were not consulted on: %s", [common.in_words(lacking)]) if {
 	count(lacking) > 0
 } else := null

@@ -29,7 +29,14 @@ test_noise_is_not_the_cause if {
 	count(damage_informed.not_owed) == 1 with input as worker(null, [])
 }
 
+test_the_latest_opinion_counts if {
+	other := done("medical_opinion", "not_work_related")
+	answer(worker(null, [other, from_noise])) == {null}
+	answer(worker(null, [from_noise, other])) == set()
+}
+
 test_found_after_a_hearing_test if {
 	noted := done("damage_found", null)
 	answer({"examinations": [], "audiograms": [{"ref": "audiogram/a1", "date": "2025-03-01", "follow_ups": [noted, from_noise]}]}) == {null}
+	answer({"examinations": [], "audiograms": [{"ref": "audiogram/a1", "date": "2025-03-01", "follow_ups": [from_noise]}]}) == set()
 }

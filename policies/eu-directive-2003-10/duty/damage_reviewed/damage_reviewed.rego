@@ -39,9 +39,11 @@ first_of(kinds, case) := {"date": done.date, "ref": done.ref} if {
 	done := [done | some done in case.damage.follow_ups; done.kind in kinds; done.date >= case.opinion.date][0]
 } else := null
 
+# The latest opinion on the cause counts, so that of a specialist after that of the doctor.
 from_noise := [{"damage": damage, "opinion": done} |
 	some damage in found
-	some done in [opinions(damage)[0]]
+	said := opinions(damage)
+	done := said[count(said) - 1]
 	done.result == "work_related"
 ]
 
@@ -61,5 +63,5 @@ found := array.concat(
 opinions(damage) := [done |
 	some done in damage.follow_ups
 	done.kind in {"damage_opinion", "medical_opinion"}
-	done.result != null
+	done.result in {"work_related", "not_work_related"}
 ]

@@ -39,8 +39,15 @@ test_noise_is_not_the_cause if {
 	count(damage_reviewed.not_owed) == 1 with input as worker([])
 }
 
+test_the_latest_opinion_counts if {
+	other := done("medical_opinion", "2025-03-15", "not_work_related")
+	count(answer(worker([other, from_noise]))) == 3
+	answer(worker([from_noise, other])) == {}
+}
+
 test_found_after_a_hearing_test if {
 	noted := done("damage_found", "2025-03-05", null)
 	found := answer({"examinations": [], "audiograms": [{"ref": "audiogram/a1", "date": "2025-03-01", "follow_ups": [noted, from_noise]}]})
 	count(found) == 3
+	answer({"examinations": [], "audiograms": [{"ref": "audiogram/a1", "date": "2025-03-01", "follow_ups": [from_noise]}]}) == {}
 }

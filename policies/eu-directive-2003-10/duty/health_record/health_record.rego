@@ -21,12 +21,19 @@ obligations contains {
 	"because": common.refs(papers),
 	"facts": {"workers_at_or_above_the_lower_values": input.enrolled_now},
 } if {
-	in_noise
+	under_surveillance
 }
 
-not_owed contains "nobody has been at or above the lower action values" if not in_noise
+not_owed contains "nobody is above the upper action values, and no arrangement for health surveillance is on record" if {
+	not under_surveillance
+}
 
-in_noise if input.enrolled_ever > 0
+under_surveillance if "upper_exceeded" in input.levels_now
+
+under_surveillance if {
+	some paper in input.documents
+	paper.kind in {"surveillance_arrangement", "health_surveillance"}
+}
 
 papers := [paper | some paper in input.documents; paper.kind == "health_records"]
 

@@ -3,7 +3,12 @@ package duty.health_record_test
 import data.duty.health_record
 import rego.v2
 
-site(ever, documents) := {"enrolled_ever": ever, "enrolled_now": ever, "documents": documents}
+site(ever, documents) := {
+	"enrolled_now": ever, "documents": documents,
+	"levels_now": [level | some level in ["lower_reached", "upper_exceeded"]; ever > 0],
+}
+
+arranged := {"kind": "surveillance_arrangement", "date": "2024-05-02", "ref": "document/d3"}
 
 paper := {"kind": "health_records", "date": "2024-05-02", "ref": "document/d1"}
 
@@ -22,6 +27,8 @@ test_document if {
 	o.holds == true
 	o.because == ["document/d1"]
 }
+
+test_surveillance_that_is_arranged_has_records if holds(site(0, [arranged])) == {false}
 
 test_nobody_in_noise if {
 	holds(site(0, [])) == set()

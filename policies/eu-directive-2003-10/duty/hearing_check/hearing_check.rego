@@ -12,6 +12,7 @@
 #   remedy: Offer the worker a hearing check and record the offer.
 package duty.hearing_check
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -19,19 +20,19 @@ obligations contains {
 	"holds": count(offered) > 0,
 	"note": said,
 	"because": offered,
-	"facts": {"above_since": min({stretch.from | some stretch in above_now})},
+	"facts": {"above_since": common.current_since(input.exposed.upper_exceeded)},
 } if {
-	count(above_now) > 0
+	above_now
 }
 
-not_owed contains "the records do not show exposure above the upper action values now" if count(above_now) == 0
+not_owed contains "the records do not show exposure above the upper action values now" if not above_now
 
-above_now := [stretch | some stretch in input.exposed.upper_exceeded; stretch.current == true]
+above_now if common.any_current(input.exposed.upper_exceeded)
 
 # A test on record was available; so was one that was offered and declined.
 offered := array.concat(
 	[test.ref | some test in input.audiograms; test.invalidated == false],
-	[examination.ref | some examination in input.examinations],
+	common.refs(input.examinations),
 )
 
 said := "exposure is above the upper action values, and no hearing check was made or offered" if count(offered) == 0

@@ -23,6 +23,7 @@ test_tested_or_offered if {
 	holds(worker(true, [audiogram(false)], [])) == {true}
 	some o in hearing_check.obligations with input as worker(true, [], [{"ref": "examination/e1"}])
 	o.holds == true
+	o.note == null
 	o.because == ["examination/e1"]
 }
 

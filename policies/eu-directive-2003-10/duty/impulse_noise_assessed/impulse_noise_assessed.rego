@@ -36,7 +36,12 @@ no_noise_expected if {
 	count(input.measurements) == 0
 }
 
-with_peak := [measurement | some measurement in input.measurements; measurement.peak_dbc != null]
+# A peak of before a change counts until the group was measured again.
+with_peak := [measurement |
+	some measurement in input.measurements
+	measurement.current == true
+	measurement.peak_dbc != null
+]
 
 highest := max([measurement.peak_dbc | some measurement in with_peak]) if count(with_peak) > 0
 
@@ -50,6 +55,6 @@ answer if {
 
 said := null if {
 	answer == true
-} else := "the noise holds impulses, and no C-weighted peak level is on record" if {
+} else := "the noise holds impulses, and no C-weighted peak level of the group as it is is on record" if {
 	answer == false
-} else := "no C-weighted peak level is on record, and the record of the group does not say that it needs none"
+} else := "no C-weighted peak level of the group as it is is on record, and the record of the group does not say that it needs none"

@@ -5,7 +5,7 @@ import rego.v2
 
 group(impulsive, measurements) := {"suspected_noisy": true, "impulsive": impulsive, "measurements": measurements}
 
-peak(dbc) := {"date": "2024-01-10", "ref": "measurement/m1", "peak_dbc": dbc}
+peak(dbc) := {"date": "2024-01-10", "ref": "measurement/m1", "current": true, "peak_dbc": dbc}
 
 holds(dossier) := found if found := {o.holds | some o in impulse_noise_assessed.obligations} with input as dossier
 
@@ -21,12 +21,18 @@ test_peak_on_record if {
 test_impulses_without_peak if {
 	some o in impulse_noise_assessed.obligations with input as group(true, [peak(null)])
 	o.holds == false
+	contains(o.note, "the noise holds impulses")
 	o.facts.highest_peak_dbc == null
+}
+
+test_measured_again_without_peak if {
+	holds(group(true, [object.union(peak(131), {"current": false}), peak(null)])) == {false}
 }
 
 test_nobody_has_said if {
 	some o in impulse_noise_assessed.obligations with input as group(null, [peak(null)])
 	o.holds == null
+	contains(o.note, "does not say that it needs none")
 	count(o.missing) == 1
 	count(reasons(group(null, []))) == 0
 }

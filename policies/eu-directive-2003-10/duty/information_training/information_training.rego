@@ -20,14 +20,14 @@ obligations contains {
 	"holds": input.training != null,
 	"note": said,
 	"because": common.refs([input.training]),
-	"facts": {"exposed_since": min({stretch.from | some stretch in current})},
+	"facts": {"exposed_since": common.current_since(input.exposed.lower_reached)},
 } if {
-	count(current) > 0
+	exposed_now
 }
 
-not_owed contains "the records do not show exposure at or above the lower action values now" if count(current) == 0
+not_owed contains "the records do not show exposure at or above the lower action values now" if not exposed_now
 
-current := [stretch | some stretch in input.exposed.lower_reached; stretch.current == true]
+exposed_now if common.any_current(input.exposed.lower_reached)
 
 said := "no information or training on noise is on record" if {
 	input.training == null

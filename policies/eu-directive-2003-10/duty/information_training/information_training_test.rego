@@ -22,6 +22,7 @@ test_never_trained if {
 test_trained if {
 	some o in information_training.obligations with input as worker(true, session)
 	o.holds == true
+	o.note == null
 	o.because == ["training/t1"]
 }
 

@@ -12,6 +12,7 @@
 #   remedy: Have the risk judged, or offer the test.
 package duty.preventive_audiometry
 
+import data.common
 import rego.v2
 
 # Below the upper values the right depends on whether the assessment shows a risk to health, which a professional judges.
@@ -20,25 +21,22 @@ obligations contains {
 	"ask": "Does the assessment show a risk to this worker's health, so that preventive audiometry is to be available?",
 	"of": "occupational physician",
 	"by": first_offer,
-	"facts": {"above_since": min({stretch.from | some stretch in above_now})},
+	"facts": {"above_since": common.current_since(input.exposed.lower_exceeded)},
 } if {
-	count(above_now) > 0
+	above_now
 	not above_the_upper
 }
 
-not_owed contains "the records do not show exposure above the lower action values now" if count(above_now) == 0
+not_owed contains "the records do not show exposure above the lower action values now" if not above_now
 
 not_owed contains "above the upper action values the worker has a right to a hearing check, which is a duty of its own" if {
-	count(above_now) > 0
+	above_now
 	above_the_upper
 }
 
-above_now := [stretch | some stretch in input.exposed.lower_exceeded; stretch.current == true]
+above_now if common.any_current(input.exposed.lower_exceeded)
 
-above_the_upper if {
-	some stretch in input.exposed.upper_exceeded
-	stretch.current == true
-}
+above_the_upper if common.any_current(input.exposed.upper_exceeded)
 
 offers := sort(array.concat(
 	[[test.date, test.ref] | some test in input.audiograms; test.invalidated == false],

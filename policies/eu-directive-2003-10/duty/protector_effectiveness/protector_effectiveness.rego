@@ -18,17 +18,20 @@ obligations contains {
 	"holds": count(papers) > 0,
 	"note": said,
 	"because": common.refs(papers),
-	"facts": {"workers": input.workers},
+	"facts": {"workers": input.workers, "with_protectors": input.protector_holders},
 } if {
 	lower_exceeded_now
+	input.protector_holders > 0
 }
 
 not_owed contains "the records do not show exposure above the lower action values now" if not lower_exceeded_now
 
-lower_exceeded_now if {
-	some stretch in input.exposed.lower_exceeded
-	stretch.current == true
+not_owed contains "nobody in the group has a protector at hand, which is a finding of each worker" if {
+	lower_exceeded_now
+	input.protector_holders == 0
 }
+
+lower_exceeded_now if common.any_current(input.exposed.lower_exceeded)
 
 papers := [paper | some paper in input.documents; paper.kind in {"attenuation_evaluation", "protector_maintenance"}]
 

@@ -4,7 +4,7 @@ import data.duty.protector_selection
 import rego.v2
 
 group(current, documents) := {
-	"workers": 4, "documents": documents,
+	"workers": 4, "protector_holders": 2, "documents": documents,
 	"exposed": {"lower_exceeded": [{"from": "2024-01-01", "to": null, "current": current}]},
 }
 
@@ -26,6 +26,12 @@ test_document if {
 	some o in protector_selection.obligations with input as group(true, [paper])
 	o.holds == true
 	o.because == ["document/d1"]
+}
+
+test_nobody_has_a_protector if {
+	without := object.union(group(true, []), {"protector_holders": 0})
+	holds(without) == set()
+	count(reasons(without)) == 1
 }
 
 test_not_at_that_level_now if {

@@ -22,6 +22,7 @@ test_none_at_hand if {
 test_at_hand if {
 	some o in protectors_available.obligations with input as worker(true, muff)
 	o.holds == true
+	o.note == null
 	o.because == ["protector_issue/p1"]
 }
 

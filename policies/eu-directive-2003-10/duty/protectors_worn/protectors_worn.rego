@@ -24,15 +24,21 @@ obligations contains {
 	"facts": {"compulsory_since": since},
 } if {
 	since != null
+	something_to_wear
 }
 
 not_owed contains "the records do not show exposure at or above the upper action values now" if since == null
 
-current := {stretch.from | some stretch in input.exposed.upper_reached; stretch.current == true}
+not_owed contains "no protector at hand, which is a finding of its own" if {
+	since != null
+	not something_to_wear
+}
 
-since := min(current) if count(current) > 0
+something_to_wear if input.protection != null
 
-else := null
+something_to_wear if worn != null
+
+since := common.current_since(input.exposed.upper_reached)
 
 # A check from before the exposure began says nothing of it.
 counts if {

@@ -12,6 +12,7 @@
 #   remedy: Delimit the area and restrict access, or record why that is not feasible or not justified.
 package duty.zone_access
 
+import data.common
 import rego.v2
 
 # Where it is not feasible or not justified, a document that says so answers the question.
@@ -27,10 +28,7 @@ obligations contains {
 
 not_owed contains "the records do not show exposure above the upper action values now" if not upper_exceeded_now
 
-upper_exceeded_now if {
-	some stretch in input.exposed.upper_exceeded
-	stretch.current == true
-}
+upper_exceeded_now if common.any_current(input.exposed.upper_exceeded)
 
 papers := [paper | some paper in input.documents; paper.kind in {"access_restriction", "zone_plan"}]
 

@@ -38,7 +38,7 @@ verdict := {
 	count(latest.covers) == 0
 } else := {
 	"holds": false,
-	"note": sprintf("the risk assessment of %s leaves out: %s", [latest.date, concat(", ", [replace(head, "_", " ") | some head in left_out])]),
+	"note": sprintf("the risk assessment of %s leaves out: %s", [latest.date, common.in_words(left_out)]),
 } if {
 	count(left_out) > 0
 } else := {
@@ -60,10 +60,7 @@ concerned if {
 	common.covers(stretch, input.as_of)
 }
 
-concerned if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+concerned if common.any_current(input.exposed.lower)
 
 not_owed contains "nothing suggests noise at a lower exposure action value" if not concerned
 

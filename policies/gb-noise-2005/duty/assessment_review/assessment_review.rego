@@ -13,6 +13,7 @@
 #   remedy: Review the risk assessment in view of the change and date the review, or record that the change does not raise exposure.
 package duty.assessment_review
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -23,6 +24,7 @@ obligations contains {
 	"because": [change.ref],
 	"facts": {"change": change.what, "workers": input.workers},
 } if {
+	owed
 	some change in input.changes
 	change.raises_exposure == "yes"
 }
@@ -35,6 +37,7 @@ obligations contains {
 	"because": [change.ref, reviewed_since(change)[0]],
 	"facts": {"change": change.what, "workers": input.workers},
 } if {
+	owed
 	some change in of_unknown_effect
 	count(reviewed_since(change)) > 0
 }
@@ -48,18 +51,47 @@ obligations contains {
 	"because": [change.ref],
 	"facts": {"change": change.what, "workers": input.workers},
 } if {
+	owed
 	some change in of_unknown_effect
 	count(reviewed_since(change)) == 0
 }
 
-not_owed contains "no change that may raise exposure" if {
-	every change in input.changes { change.raises_exposure == "no" }
+not_owed contains "no change that may raise exposure" if not changed
+
+not_owed contains "there is no risk assessment to review; whether one is owed, risk-assessment tells" if {
+	changed
+	count(papers) == 0
 }
+
+not_owed contains "the group is known to be below the lower exposure action values now" if {
+	changed
+	count(papers) > 0
+	not concerned
+}
+
+owed if {
+	concerned
+	count(papers) > 0
+}
+
+changed if {
+	some change in input.changes
+	change.raises_exposure != "no"
+}
+
+# At or above a lower action value now, or not known to be below.
+concerned if common.any_current(input.exposed.lower)
+
+concerned if {
+	some stretch in input.exposure_unknown.lower
+	common.covers(stretch, input.as_of)
+}
+
+papers := [paper | some paper in input.documents; paper.kind == "risk_assessment"]
 
 of_unknown_effect := [change | some change in input.changes; not change.raises_exposure in ["yes", "no"]]
 
 reviewed_since(change) := [paper.ref |
-	some paper in input.documents
-	paper.kind == "risk_assessment"
+	some paper in papers
 	max([day | some day in [paper.date, paper.reviewed_on]; day != null]) >= change.date
 ]

@@ -24,26 +24,44 @@ change(effect) := {"id": "c1", "date": "2025-03-01", "ref": "change/c1", "what":
 
 paper(day, reviewed) := {"kind": "risk_assessment", "date": day, "reviewed_on": reviewed, "ref": "document/ra"}
 
-group(changes, documents) := {"workers": 4, "changes": changes, "documents": documents}
+group(changes, documents) := {
+	"workers": 4, "as_of": "2026-06-30", "exposed": {"lower": [now]}, "exposure_unknown": {"lower": []},
+	"changes": changes, "documents": documents,
+}
+
+old := paper("2020-01-01", null)
 
 test_a_change_that_raises_exposure if {
-	found := obligation(group([change("yes")], []))
+	found := obligation(group([change("yes")], [old]))
 	found.after == "2025-03-01"
 	found.by == "document.risk_assessment"
-	duty.not_owed == set() with input as group([change("yes")], [])
+	duty.not_owed == set() with input as group([change("yes")], [old])
 }
 
 test_effect_not_known if {
 	every effect in ["unknown", null] {
-		obligation(group([change(effect)], [])).holds == null
 		obligation(group([change(effect)], [paper("2025-02-28", null)])).holds == null
 		obligation(group([change(effect)], [paper("2025-03-01", null)])).holds == true
 		obligation(group([change(effect)], [paper("2020-01-01", "2025-03-01")])).because == ["change/c1", "document/ra"]
-		obligation(group([change(effect)], [object.union(paper("2025-03-01", null), {"kind": "another"})])).holds == null
+		obligation(group([change(effect)], [old, object.union(paper("2025-03-01", null), {"kind": "another"})])).holds == null
 	}
 }
 
 test_no_change_that_matters if {
 	quiet(group([], []))
 	quiet(group([change("no")], []))
+}
+
+test_no_assessment_to_review if {
+	quiet(group([change("yes")], []))
+	quiet(group([change("unknown")], [object.union(old, {"kind": "another"})]))
+}
+
+test_quiet_group if {
+	below := {"exposed": {"lower": [past]}}
+	every effect in ["yes", null] {
+		quiet(object.union(group([change(effect)], [old]), below))
+	}
+	not_known := object.union(below, {"exposure_unknown": {"lower": [open]}})
+	obligation(object.union(group([change("yes")], [old]), not_known)).by == "document.risk_assessment"
 }

@@ -12,11 +12,12 @@
 #   remedy: Check whether the risk assessment still holds and date the review.
 package duty.assessment_review_interval
 
+import data.common
 import rego.v2
 
 obligations contains {
 	"every": "assessment_review_interval",
-	"during": {"from": papers[0].date, "to": spell.to},
+	"during": {"from": max([papers[0].date, spell.from]), "to": spell.to},
 	"by": "document.risk_assessment",
 } if {
 	count(papers) > 0
@@ -28,8 +29,7 @@ not_owed contains "no risk assessment, or nobody at or above a lower exposure ac
 
 owed if {
 	count(papers) > 0
-	some spell in input.exposed.lower
-	spell.current == true
+	common.any_current(input.exposed.lower)
 }
 
 papers := [paper | some paper in input.documents; paper.kind == "risk_assessment"]

@@ -31,6 +31,11 @@ test_from_the_first_assessment_on if {
 	duty.not_owed == set() with input as group([now], [paper("risk_assessment")])
 }
 
+test_from_the_start_of_the_noise_on if {
+	later := object.union(now, {"from": "2024-03-01"})
+	obligation(group([later], [paper("risk_assessment")])).during == {"from": "2024-03-01", "to": null}
+}
+
 test_no_assessment if quiet(group([now], [paper("another")]))
 
 test_nobody_exposed_now if quiet(group([past], [paper("risk_assessment")]))

@@ -20,6 +20,17 @@ obligations contains {
 	"touches": "test.use",
 } if {
 	owed
+	not unknown_audiometer
+}
+
+obligations contains {
+	"holds": null,
+	"note": "tests were made with an audiometer of which there is neither a record nor a calibration",
+	"missing": ["which audiometer was used, and its calibrations"],
+	"facts": {"tests": input.tests},
+} if {
+	owed
+	unknown_audiometer
 }
 
 not_owed contains "no hearing test was made with it" if not owed
@@ -27,4 +38,9 @@ not_owed contains "no hearing test was made with it" if not owed
 owed if {
 	input.tests > 0
 	input.in_use != null
+}
+
+unknown_audiometer if {
+	input.registered == false
+	input.latest_calibration == null
 }

@@ -27,6 +27,13 @@ test_in_use if {
 	duty.not_owed == set() with input as {"tests": 3, "in_use": now}
 }
 
+test_audiometer_not_recorded if {
+	unknown := {"tests": 3, "in_use": now, "registered": false, "latest_calibration": null}
+	obligation(unknown).holds == null
+	obligation(object.union(unknown, {"latest_calibration": {"date": "2024-01-10"}})).every == "audiometer_interval"
+	obligation(object.union(unknown, {"registered": true})).every == "audiometer_interval"
+}
+
 test_not_used if {
 	quiet({"tests": 0, "in_use": now})
 	quiet({"tests": 3, "in_use": null})

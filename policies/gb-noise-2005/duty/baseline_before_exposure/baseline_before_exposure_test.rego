@@ -49,3 +49,14 @@ test_hired_before_the_law if {
 	quiet(worker([now], "2006-04-06", [audiogram]))
 	obligation(worker([now], "2006-04-07", [audiogram])).by == "test.done"
 }
+
+moved(from, to, unknown) := object.union(worker([now], "2001-01-01", [audiogram]), {
+	"exposures": [{"from": "2001-01-01", "to": "2020-01-01", "group": from}, {"from": "2020-01-01", "to": null, "group": to}],
+	"exposure_unknown": {"upper": unknown},
+})
+
+test_job_changers if {
+	obligation(moved("store", "foundry", [])).before == "2020-01-01"
+	quiet(moved("foundry", "foundry", []))
+	quiet(moved("store", "foundry", [{"from": "2019-01-01", "to": "2020-01-01", "reason": "not measured"}]))
+}

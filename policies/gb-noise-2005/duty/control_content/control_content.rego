@@ -39,7 +39,7 @@ verdict := {
 	count(latest.covers) == 0
 } else := {
 	"holds": false,
-	"note": sprintf("the programme of measures of %s leaves out: %s", [latest.date, concat(", ", [replace(head, "_", " ") | some head in left_out])]),
+	"note": sprintf("the programme of measures of %s leaves out: %s", [latest.date, common.in_words(left_out)]),
 } if {
 	count(left_out) > 0
 } else := {
@@ -55,10 +55,7 @@ papers := [paper | some paper in input.documents; paper.kind == "control_program
 
 latest := papers[count(papers) - 1]
 
-concerned if {
-	some spell in input.exposed.upper
-	spell.current == true
-}
+concerned if common.any_current(input.exposed.upper)
 
 not_owed contains "the group is not known to be at or above an upper exposure action value" if not concerned
 

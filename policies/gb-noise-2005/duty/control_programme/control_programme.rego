@@ -50,10 +50,7 @@ not_owed contains "the group is not at or above an upper exposure action value, 
 	count(not_known) == 0
 }
 
-at_upper if {
-	some spell in input.exposed.upper
-	spell.current == true
-}
+at_upper if common.any_current(input.exposed.upper)
 
 # Of a group whose levels were never assessed levels-assessed tells.
 not_known := [stretch.reason |

@@ -46,21 +46,21 @@ by_doctor(damage) := [act | some act in examined(damage); act.by_is in data.meas
 
 by_somebody(damage) := [act | some act in examined(damage); act.by_is == null]
 
-# An examination recorded as a follow-up, a doctor's opinion, or the finding itself where a doctor made it.
+# An examination recorded as a follow-up, a doctor's opinion, or the examination itself that found it.
 examined(damage) := array.concat(
-	[damage | damage.by_is != null],
+	[damage | damage.examined == true],
 	[act | some act in since(damage); act.kind in ["damage_examined", "damage_opinion"]],
 )
 
 # Hearing damage that was found: as the outcome of an examination, or recorded as found in an audiogram. What follows
 # from it, the other duties of regulation 9(4) take from here.
 damages := array.concat(
-	[{"date": e.attended_on, "ref": e.ref, "by_is": e.by_is} |
+	[{"date": e.attended_on, "ref": e.ref, "by_is": e.by_is, "examined": true} |
 		some e in input.examinations
 		e.damage == true
 		e.attended_on != null
 	],
-	[{"date": act.date, "ref": act.ref, "by_is": null} |
+	[{"date": act.date, "ref": act.ref, "by_is": null, "examined": false} |
 		some audiogram in input.audiograms
 		some act in audiogram.follow_ups
 		act.kind == "damage_found"

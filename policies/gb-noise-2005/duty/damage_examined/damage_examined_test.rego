@@ -29,7 +29,7 @@ found_by(by, acts) := {
 worker(examinations, audiograms) := {"examinations": examinations, "audiograms": audiograms}
 
 test_not_examined if {
-	found := obligation(worker([found_by(null, [])], []))
+	found := obligation(worker([found_by("technician", [])], []))
 	found.holds == false
 	found.key == "2025-02-01"
 	found.because == ["examination/e1"]
@@ -48,20 +48,22 @@ test_examined_by_somebody if {
 	found := obligation(worker([found_by("technician", [act("damage_examined", null)])], []))
 	found.holds == null
 	found.missing == ["the profession of the examiner"]
+	obligation(worker([found_by(null, [])], [])).note == "the worker was examined on 2025-02-01, and it is not known by whom"
 }
 
 test_examined_by_another_profession if {
-	obligation(worker([found_by(null, [act("damage_examined", "technician")])], [])).holds == false
+	obligation(worker([found_by("technician", [act("damage_examined", "technician")])], [])).holds == false
 }
 
 test_found_in_an_audiogram if {
 	audiogram := {"date": "2025-02-01", "ref": "audiogram/a1", "follow_ups": [act("damage_found", "technician"), act("damage_examined", "physician")]}
 	obligation(worker([], [audiogram])).because == ["follow_up/damage_found", "follow_up/damage_examined"]
+	obligation(worker([], [object.union(audiogram, {"follow_ups": [act("damage_found", null)]})])).holds == false
 }
 
 test_what_was_done_before_does_not_count if {
 	before := object.union(act("damage_examined", "physician"), {"date": "2025-01-31"})
-	obligation(worker([found_by(null, [before])], [])).holds == false
+	obligation(worker([found_by("technician", [before])], [])).holds == false
 }
 
 test_opinions_are_those_of_doctors if {

@@ -13,6 +13,7 @@
 #   remedy: Choose a protector whose attenuation fits the noise.
 package duty.ear_level
 
+import data.common
 import rego.v2
 
 obligations contains object.union(estimate, {"key": "enough", "below": "ear_level_ceiling"}) if {
@@ -21,7 +22,7 @@ obligations contains object.union(estimate, {"key": "enough", "below": "ear_leve
 }
 
 obligations contains object.union(estimate, {"key": "not too much", "at_least": "ear_level_floor"}) if {
-	at_upper
+	at_upper_level
 	input.protection != null
 	input.protection.under_db != null
 }
@@ -33,10 +34,10 @@ not_owed contains "no protector at hand, which is a finding of its own" if {
 	input.protection == null
 }
 
-at_upper if {
-	some spell in input.exposed.upper
-	spell.current == true
-}
+at_upper if common.any_current(input.exposed.upper)
+
+# Over-protection is a matter of the level; peaks alone do not show it.
+at_upper_level if common.any_current(input.exposed.upper_level)
 
 estimate := {
 	"value": input.protection.under_db,

@@ -25,7 +25,7 @@ muff(under, missing) := {
 	"missing": missing, "method": "SNR", "working": "97 - 27 + 4 = 74", "mark": null,
 }
 
-worker(spells, protection) := {"exposed": {"upper": spells}, "protection": protection}
+worker(spells, protection) := {"exposed": {"upper": spells, "upper_level": spells}, "protection": protection}
 
 test_both_ends if {
 	found := {o.key: o | some o in duty.obligations} with input as worker([now], muff(74, []))
@@ -34,6 +34,11 @@ test_both_ends if {
 	found["not too much"].at_least == "ear_level_floor"
 	count(found) == 2
 	duty.not_owed == set() with input as worker([now], muff(74, []))
+}
+
+test_peaks_alone_show_no_over_protection if {
+	by_peak := object.union(worker([now], muff(60, [])), {"exposed": {"upper": [now], "upper_level": []}})
+	obligation(by_peak).key == "enough"
 }
 
 test_not_estimated if {

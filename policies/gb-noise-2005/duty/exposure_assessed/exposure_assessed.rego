@@ -2,7 +2,7 @@
 # title: Exposure of every employee known
 # description: >-
 #   The assessment shows whether each employee is likely to be exposed at or above a lower exposure action value. So
-#   every employee belongs to a group whose exposure is known for the whole time, and nobody at or above an upper
+#   every employee belongs to a group whose exposure is known since the Regulations came into force, and nobody at or above an upper
 #   exposure action value is left out of the programme.
 # custom:
 #   cite: Control of Noise at Work Regulations reg 5(2)
@@ -13,6 +13,7 @@
 #   remedy: Complete the assignments of the worker, or assess the levels of the group; take the worker into the programme.
 package duty.exposure_assessed
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -50,11 +51,16 @@ obligations contains {
 
 left_out if {
 	input.on_roll == false
-	some spell in input.exposed.upper
-	spell.current == true
+	common.any_current(input.exposed.upper)
 }
 
-unknown := input.exposure_unknown.lower
+# The Regulations do not ask about the time before they came into force.
+unknown := [stretch | some stretch in input.exposure_unknown.lower; not before_the_law(stretch)]
+
+before_the_law(stretch) if {
+	stretch.to != null
+	stretch.to <= data.parameters.lower_action_value.values[0].from
+}
 
 reasons := sort({stretch.reason | some stretch in unknown; stretch.reason != null})
 

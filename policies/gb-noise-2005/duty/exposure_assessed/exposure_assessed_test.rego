@@ -49,4 +49,10 @@ test_not_known if {
 	found.facts.not_known == [{"from": "2024-01-01", "to": null}]
 }
 
+test_time_before_the_law if {
+	before := {"from": "2001-01-01", "to": "2006-04-06", "reason": "no value"}
+	obligation(worker({"exposure_unknown": {"lower": [before]}})).holds == true
+	obligation(worker({"exposure_unknown": {"lower": [object.union(before, {"to": "2006-04-07"})]}})).holds == null
+}
+
 test_nobody_exempt if count(duty.not_owed) == 0 with input as worker({})

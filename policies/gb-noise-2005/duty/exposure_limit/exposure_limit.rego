@@ -63,14 +63,12 @@ any_above if above[_]
 
 above[name] if {
 	some name in ["limit_level", "limit_peak"]
-	some spell in input.exposed[name]
-	spell.current == true
+	common.any_current(input.exposed[name])
 }
 
 # Of a worker who is not known to be at or above a lower action value, exposure-assessed tells.
 not_known := [stretch.reason |
-	some spell in input.exposed.lower
-	spell.current == true
+	common.any_current(input.exposed.lower)
 	some stretch in input.exposure_unknown.limit
 	common.covers(stretch, input.as_of)
 ]
@@ -172,7 +170,7 @@ without(channel) := found if {
 
 now := [exposure | some exposure in input.exposures; common.covers(exposure, input.as_of)]
 
-exposure_refs := [exposure.ref | some exposure in now; exposure.ref != null]
+exposure_refs := common.refs(now)
 
 protector_refs := [input.protection.ref, sprintf("protector/%s", [input.protection.protector])]
 

@@ -39,7 +39,7 @@ verdict(paper) := {
 	count(paper.covers) == 0
 } else := {
 	"holds": false,
-	"note": sprintf("a limit value was exceeded on %s, and the record lacks: %s", [paper.date, concat(", ", [replace(word, "_", " ") | some word in lacking(paper)])]),
+	"note": sprintf("a limit value was exceeded on %s, and the record lacks: %s", [paper.date, common.in_words(lacking(paper))]),
 } if {
 	count(lacking(paper)) > 0
 } else := {

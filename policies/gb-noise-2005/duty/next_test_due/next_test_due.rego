@@ -12,6 +12,7 @@
 #   remedy: Test the worker now; the clinic wanted it by the day given.
 package duty.next_test_due
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -34,10 +35,7 @@ not_owed contains "the worker is not known to be at or above a lower exposure ac
 	not exposed
 }
 
-exposed if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+exposed if common.any_current(input.exposed.lower)
 
 wanted := [e |
 	some e in input.examinations

@@ -18,14 +18,22 @@ import rego.v2
 obligations contains {
 	"key": use.id,
 	"on": use.date,
-	"holds": count(lacking(use)) == 0,
+	"holds": checked(use),
 	"note": said(use),
+	"missing": ["which instrument was used, and its checks" | checked(use) == null],
 	"because": [use.ref],
 } if {
 	some use in input.noise_measurements
 }
 
 not_owed contains "no noise measurement was made with it" if count(input.noise_measurements) == 0
+
+# Of a measurement that names no instrument of the records nobody can say what was done with it.
+checked(use) if {
+	count(lacking(use)) == 0
+} else := null if {
+	input.registered == false
+} else := false
 
 lacking(use) := array.concat(
 	common.missing(use.check_before_db, "before"),

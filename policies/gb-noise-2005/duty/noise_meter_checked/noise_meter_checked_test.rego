@@ -31,4 +31,12 @@ test_one_missing if {
 	obligation({"noise_measurements": [use(null, null)]}).note == "no check with a calibrator is on record before and after the measurement"
 }
 
+test_instrument_not_recorded if {
+	found := obligation({"registered": false, "noise_measurements": [use(94, null)]})
+	found.holds == null
+	found.missing == ["which instrument was used, and its checks"]
+	obligation({"registered": false, "noise_measurements": [use(94, 94)]}).holds == true
+	obligation({"registered": true, "noise_measurements": [use(94, null)]}).holds == false
+}
+
 test_not_used if quiet({"noise_measurements": []})

@@ -51,10 +51,7 @@ obligations contains {
 
 not_owed contains "the group is not known to be at or above a lower exposure action value" if not exposed
 
-exposed if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+exposed if common.any_current(input.exposed.lower)
 
 latest := input.controls[count(input.controls) - 1]
 

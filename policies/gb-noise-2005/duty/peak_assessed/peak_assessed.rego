@@ -12,6 +12,7 @@
 #   remedy: Measure the C-weighted peak, or record that the noise holds no impulses.
 package duty.peak_assessed
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -25,7 +26,7 @@ obligations contains {
 
 obligations contains {
 	"holds": false,
-	"note": "the noise holds impulses, but no C-weighted peak is on record",
+	"note": "the noise holds impulses, but no C-weighted peak is on record for the group as it is now",
 	"facts": {"workers": input.workers},
 } if {
 	noisy
@@ -35,7 +36,7 @@ obligations contains {
 
 obligations contains {
 	"holds": null,
-	"note": "it is not known whether the noise holds impulses, and no C-weighted peak is on record",
+	"note": "it is not known whether the noise holds impulses, and no C-weighted peak is on record for the group as it is now",
 	"missing": ["a C-weighted peak level, or that the noise holds no impulses"],
 	"facts": {"workers": input.workers},
 } if {
@@ -54,11 +55,9 @@ concerned if {
 	noisy
 }
 
-measured := [m | some m in input.measurements; m.peak_dbc != null]
+# Peaks that describe the group as it is: a peak from before a change, after which the group was measured again, does not.
+measured := [m | some m in input.measurements; m.peak_dbc != null; m.current == true]
 
 noisy if input.suspected_noisy == true
 
-noisy if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+noisy if common.any_current(input.exposed.lower)

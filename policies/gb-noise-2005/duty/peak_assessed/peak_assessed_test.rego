@@ -25,7 +25,7 @@ group(change) := object.union(
 	change,
 )
 
-peak := {"peak_dbc": 128, "ref": "measurement/m1"}
+peak := {"peak_dbc": 128, "ref": "measurement/m1", "current": true}
 
 test_not_known_whether_impulsive if {
 	duty.not_owed == set() with input as group({})
@@ -43,6 +43,10 @@ test_measured if {
 		found.holds == true
 		found.because == ["measurement/m1"]
 	}
+}
+
+test_peak_from_before_a_change if {
+	obligation(group({"impulsive": true, "measurements": [object.union(peak, {"current": false})]})).holds == false
 }
 
 test_no_impulses if quiet(group({"impulsive": false}))

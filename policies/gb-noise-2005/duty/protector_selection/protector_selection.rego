@@ -44,9 +44,6 @@ not_owed contains "nobody in the group has a protector" if {
 	input.protector_holders == 0
 }
 
-exposed if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+exposed if common.any_current(input.exposed.lower)
 
 papers := [paper | some paper in input.documents; paper.kind in ["protector_selection", "attenuation_evaluation"]]

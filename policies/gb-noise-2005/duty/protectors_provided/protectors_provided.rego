@@ -70,15 +70,11 @@ need_not_be if exempted
 
 need_not_be if input.protection != null
 
-at_upper if {
-	some spell in input.exposed.upper
-	spell.current == true
-}
+at_upper if common.any_current(input.exposed.upper)
 
 # Of a worker who is not known to be at or above a lower action value, exposure-assessed tells.
 not_known := [stretch.reason |
-	some spell in input.exposed.lower
-	spell.current == true
+	common.any_current(input.exposed.lower)
 	some stretch in input.exposure_unknown.upper
 	common.covers(stretch, input.as_of)
 ]

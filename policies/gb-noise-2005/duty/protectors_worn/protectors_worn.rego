@@ -37,23 +37,23 @@ obligations contains {
 	not checked
 }
 
-not_owed contains "exposure is not known to be at or above an upper exposure action value" if count(at_upper) == 0
+not_owed contains "exposure is not known to be at or above an upper exposure action value" if not at_upper
 
 not_owed contains "no protector at hand, which is a finding of its own" if {
-	count(at_upper) > 0
+	at_upper
 	input.protection == null
 }
 
 owed if {
-	count(at_upper) > 0
+	at_upper
 	input.protection != null
 }
 
-at_upper := [spell | some spell in input.exposed.upper; spell.current == true]
+at_upper if common.any_current(input.exposed.upper)
 
 checked if {
 	input.wear != null
-	input.wear.date >= min([spell.from | some spell in at_upper])
+	input.wear.date >= common.current_since(input.exposed.upper)
 }
 
 said := {

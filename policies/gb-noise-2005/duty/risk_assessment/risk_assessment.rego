@@ -51,8 +51,7 @@ papers := [paper | some paper in input.documents; paper.kind == "risk_assessment
 
 # The first of these that fits: noise that is known or suspected, noise of which nothing is known, quiet work.
 liable if {
-	some spell in input.exposed.lower
-	spell.current == true
+	common.any_current(input.exposed.lower)
 } else if {
 	input.suspected_noisy == true
 	not_known

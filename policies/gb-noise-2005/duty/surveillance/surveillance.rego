@@ -15,6 +15,7 @@
 #   remedy: Place the worker under health surveillance and offer a hearing test.
 package duty.surveillance
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -29,10 +30,10 @@ obligations contains {
 obligations contains {
 	"holds": false,
 	"note": "exposure is at or above an upper exposure action value, and no hearing test was offered or made",
-	"facts": {"exposed_since": min([spell.from | some spell in at_upper])},
+	"facts": {"exposed_since": common.current_since(input.exposed.upper)},
 	"because": [exposure.ref | some exposure in input.exposures; exposure.to == null; exposure.ref != null],
 } if {
-	count(at_upper) > 0
+	at_upper
 	count(steps) == 0
 }
 
@@ -41,16 +42,15 @@ not_owed contains "exposure is not known to be at or above an upper exposure act
 }
 
 # At particular risk is, between the action values, who is known to have hearing damage.
-at_risk if count(at_upper) > 0
+at_risk if at_upper
 
 at_risk if {
-	some spell in input.exposed.lower
-	spell.current == true
+	common.any_current(input.exposed.lower)
 	some examination in input.examinations
 	examination.damage == true
 }
 
-at_upper := [spell | some spell in input.exposed.upper; spell.current == true]
+at_upper if common.any_current(input.exposed.upper)
 
 steps := array.concat(
 	[audiogram.ref | some audiogram in input.audiograms; audiogram.invalidated == false],

@@ -2,7 +2,7 @@
 # title: Hearing test attended
 # description: >-
 #   The employee attends the procedures of health surveillance that the employer asks for, in working hours and at
-#   the cost of the employer. An offer that was declined or not answered stays open until the worker has come; one
+#   the cost of the employer. The latest offer that was declined or not answered stays open until the worker has come; one
 #   of which nothing more is on record is unproven.
 # custom:
 #   cite: Control of Noise at Work Regulations reg 9(5)
@@ -27,6 +27,7 @@ obligations contains {
 } if {
 	owed
 	some offer in offers
+	not offered_again(offer)
 }
 
 not_owed contains "no offer of a hearing test is on record" if count(offers) == 0
@@ -36,10 +37,7 @@ not_owed contains "the worker is not at or above a lower exposure action value n
 	not owed
 }
 
-owed if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+owed if common.any_current(input.exposed.lower)
 
 offers := [offer | some offer in input.examinations; offer.kind == "hearing_test"; offer.offered_on != null]
 
@@ -50,6 +48,13 @@ attended(offer) if {
 } else := false if {
 	offer.answer in ["declined", "no_answer"]
 } else := null
+
+# An offer without a test that a later offer took the place of: the later one is judged.
+offered_again(offer) if {
+	attended(offer) != true
+	some later in offers
+	later.offered_on > offer.offered_on
+}
 
 # A test after the offer, whether it was made under another offer or without one.
 later_tests(offer) := [day |

@@ -50,6 +50,13 @@ test_tested_later if {
 	obligation(worker([offer("declined", null), later], [])).holds == true
 }
 
+test_offered_again if {
+	again := object.union(offer("no_answer", null), {"id": "e2", "offered_on": "2025-02-01"})
+	obligation(worker([offer("declined", null), again], [])).key == "e2"
+	both := {o.key: o.holds | some o in duty.obligations} with input as worker([offer("declined", null), again], [{"date": "2024-06-01"}])
+	both == {"e1": true, "e2": false}
+}
+
 test_nothing_offered if {
 	quiet(worker([], []))
 	quiet(worker([object.union(offer("declined", null), {"kind": "health_appointment"})], []))

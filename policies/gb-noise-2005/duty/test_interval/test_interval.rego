@@ -20,7 +20,7 @@ obligations contains {
 	"every": "test_interval_first",
 	"until": "test_interval_first_years",
 	"then": "test_interval_later",
-	"since": hired,
+	"since": hired(spell),
 	"during": {"from": max([spell.from, first]), "to": spell.to},
 	"by": "test.done",
 } if {
@@ -58,4 +58,8 @@ tests := [day |
 	day != null
 ]
 
-hired := max([stretch.from | some stretch in input.employed])
+# The start of the employment in which the stretch begins; at the earliest the day on which the guidance begins.
+hired(spell) := max(array.concat(
+	[data.parameters.test_interval_first_years.values[0].from],
+	[stretch.from | some stretch in input.employed; stretch.from <= spell.from],
+))

@@ -39,6 +39,14 @@ test_from_the_start_of_exposure_on if {
 	obligation(worker([now], [audiogram("2019-12-01", false)])).during.from == "2020-01-01"
 }
 
+test_years_count_from_the_employment_of_the_stretch if {
+	hired_again := [{"from": "2010-01-01", "to": "2016-01-01"}, {"from": "2019-01-01", "to": null}]
+	w := object.union(worker([object.union(past, {"from": "2010-01-01", "to": "2016-01-01"})], [audiogram("2010-01-01", false)]), {"employed": hired_again})
+	obligation(w).since == "2010-01-01"
+	long_ago := object.union(worker([now], [audiogram("2022-02-01", false)]), {"employed": [{"from": "2001-01-01", "to": null}]})
+	obligation(long_ago).since == "2006-04-06"
+}
+
 test_outcome_only if {
 	examinations := [
 		{"kind": "hearing_test", "attended_on": "2022-03-01"}, {"kind": "hearing_test", "attended_on": null},

@@ -2,7 +2,8 @@
 # title: Repeat test after a worsening (guidance)
 # description: >-
 #   Guidance, not law. A worsening of more than 10 dB at any tested frequency against the test before calls for a
-#   repeat test within a reasonable time, of the order of three months.
+#   repeat test within a reasonable time, of the order of three months. Where the test before is of before the
+#   edition of 2021, 500 and 8000 Hz need not be there to compare.
 # custom:
 #   cite: HSE L108 (2021), audiometric testing (guidance)
 #   subject: worker
@@ -47,10 +48,20 @@ not_owed contains "no later test shows a worsening against the one before" if {
 worse(audiogram) if {
 	some ear in ["left", "right"]
 	audiogram.schemes.worsened[ear] == true
+} else := false if {
+	of_an_earlier_edition(before(audiogram))
+	every ear in ["left", "right"] { audiogram.schemes.worsened_core[ear] == false }
 } else := null if {
 	some ear in ["left", "right"]
 	audiogram.schemes.worsened[ear] == null
 } else := false
+
+# A test from before the edition of 2021, which did not ask for 500 and 8000 Hz yet.
+of_an_earlier_edition(audiogram) if common.at(data.parameters.test_frequencies, audiogram.date) == null
+
+before(audiogram) := earlier[count(earlier) - 1] if {
+	earlier := [other | some other in counted; other.date < audiogram.date]
+}
 
 # Tests since the edition of 2021 that come after another one, while at or above an upper exposure action value.
 judged := [audiogram |

@@ -25,6 +25,8 @@ audiogram(id, day, left, right) := {
 	"schemes": {"worsened": {"left": left, "right": right}},
 }
 
+core(left) := {"schemes": {"worsened_core": {"left": left, "right": false}}}
+
 first := audiogram("a1", "2020-02-01", null, null)
 
 worker(spells, audiograms) := {"exposed": {"upper": spells}, "audiograms": audiograms, "examinations": []}
@@ -45,6 +47,14 @@ test_repeated if {
 
 test_not_comparable if {
 	obligation(worker([now], [first, audiogram("a2", "2024-02-01", null, false)])).holds == null
+}
+
+test_the_test_before_is_of_an_earlier_edition if {
+	second := audiogram("a2", "2021-02-01", null, null)
+	quiet(worker([now], [first, object.union(second, core(false))]))
+	obligation(worker([now], [first, object.union(second, core(null))])).holds == null
+	third := object.union(audiogram("a3", "2024-02-01", null, null), core(false))
+	obligation(worker([now], [first, object.union(second, core(false)), third])).key == "a3"
 }
 
 test_not_worse if {

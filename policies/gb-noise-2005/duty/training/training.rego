@@ -12,6 +12,7 @@
 #   remedy: Inform, instruct and train the worker, and record the day and the topics.
 package duty.training
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -33,7 +34,4 @@ obligations contains {
 
 not_owed contains "exposure is not known to be at or above a lower exposure action value" if not exposed
 
-exposed if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+exposed if common.any_current(input.exposed.lower)

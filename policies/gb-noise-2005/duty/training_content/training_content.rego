@@ -41,7 +41,7 @@ verdict := {
 	required == null
 } else := {
 	"holds": false,
-	"note": sprintf("the training up to %s left out: %s", [input.training.date, concat(", ", [replace(head, "_", " ") | some head in left_out])]),
+	"note": sprintf("the training up to %s left out: %s", [input.training.date, common.in_words(left_out)]),
 } if {
 	count(left_out) > 0
 } else := {
@@ -53,10 +53,7 @@ required := common.at(data.parameters.training_heads, input.training.date)
 
 left_out := [head | some head in required; not head in input.training.topics]
 
-exposed if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+exposed if common.any_current(input.exposed.lower)
 
 not_owed contains "exposure is not known to be at or above a lower exposure action value" if not exposed
 

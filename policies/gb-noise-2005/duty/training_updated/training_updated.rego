@@ -13,6 +13,7 @@
 #   remedy: Instruct the group on the change, and record it.
 package duty.training_updated
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -38,7 +39,4 @@ changed if {
 	change.raises_exposure == "yes"
 }
 
-exposed if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+exposed if common.any_current(input.exposed.lower)

@@ -12,6 +12,7 @@
 #   remedy: Use the daily exposure for this group, or record that its exposure varies markedly from day to day.
 package duty.weekly_average
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -38,6 +39,9 @@ noisy if {
 	found != null
 	input.suspected_noisy == null
 }
+
+# Noise that reaches a lower value on the day, whatever was expected.
+noisy if common.at(data.parameters.lower_action_value, input.as_of) <= input.now.channels.daily.at_most
 
 said := {
 	true: "the exposure of the group varies markedly from day to day",

@@ -45,6 +45,14 @@ test_measured_group if {
 	obligation(group({"suspected_noisy": null, "task_day": survey})).holds == null
 }
 
+daily(level) := {"suspected_noisy": false, "as_of": "2026-06-30", "now": {"channels": {"daily": {"at_most": level}}}}
+
+test_noise_that_was_not_expected if {
+	obligation(group(daily(80))).holds == null
+	quiet(group(daily(79.9)))
+	quiet(group(daily(null)))
+}
+
 test_daily_exposure if quiet(group({"choices": {"weekly_average": false}}))
 
 test_quiet_work if {

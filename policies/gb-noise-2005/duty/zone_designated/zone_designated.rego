@@ -77,12 +77,14 @@ undecided if {
 	count(not_known) > 0
 }
 
-not_known := [stretch.reason | some stretch in input.exposure_unknown.upper; common.covers(stretch, input.as_of)]
+# Of an area in which nobody is known to be at or above a lower action value risk-assessment and levels-assessed tell.
+not_known := [stretch.reason |
+	common.any_current(input.exposed.lower)
+	some stretch in input.exposure_unknown.upper
+	common.covers(stretch, input.as_of)
+]
 
-zone if {
-	some spell in input.exposed.upper
-	spell.current == true
-}
+zone if common.any_current(input.exposed.upper)
 
 exempted if input.choices.exemption in object.keys(exemption_cite)
 

@@ -54,8 +54,11 @@ test_record_of_another_area_or_kind if {
 }
 
 test_not_known if {
-	unknown := {"exposed": {"upper": []}, "exposure_unknown": {"upper": [open]}}
+	unknown := {"exposed": {"lower": [now], "upper": []}, "exposure_unknown": {"upper": [open]}}
 	obligation(area(unknown)).holds == null
 	duty.not_owed == set() with input as area(unknown)
 	quiet(area(object.union(unknown, {"choices": {"exemption": "defence"}})))
+	every lower in [[], [past]] {
+		quiet(area(object.union(unknown, {"exposed": {"lower": lower, "upper": []}})))
+	}
 }

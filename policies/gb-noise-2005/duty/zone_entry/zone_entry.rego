@@ -12,6 +12,7 @@
 #   remedy: See to it that nobody enters the zone without protectors, and record a check of the area.
 package duty.zone_entry
 
+import data.common
 import rego.v2
 
 obligations contains object.union(verdict, {"facts": {"workers": input.workers}}) if {
@@ -62,10 +63,7 @@ verdict := {
 
 not_owed contains "nobody is known to be at or above an upper exposure action value in the area" if not zone
 
-zone if {
-	some spell in input.exposed.upper
-	spell.current == true
-}
+zone if common.any_current(input.exposed.upper)
 
 exempted if input.choices.exemption in object.keys(exemption_cite)
 

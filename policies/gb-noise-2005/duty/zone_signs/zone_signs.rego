@@ -58,10 +58,7 @@ names(paper) if input.id in paper.covers
 
 not_owed contains "nobody is known to be at or above an upper exposure action value in the area" if not zone
 
-zone if {
-	some spell in input.exposed.upper
-	spell.current == true
-}
+zone if common.any_current(input.exposed.upper)
 
 exempted if input.choices.exemption in object.keys(exemption_cite)
 

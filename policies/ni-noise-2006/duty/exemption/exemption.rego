@@ -51,7 +51,7 @@ verdict := {"holds": false, "note": "the site claims an exemption, and no certif
 	count(latest.covers) == 0
 } else := {
 	"holds": false,
-	"note": sprintf("not shown: %s", [concat(", ", [replace(word, "_", " ") | some word in lacking])]),
+	"note": sprintf("not shown: %s", [common.in_words(lacking)]),
 	"because": [latest.ref],
 } if {
 	count(lacking) > 0

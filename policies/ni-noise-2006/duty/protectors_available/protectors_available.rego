@@ -56,15 +56,9 @@ concerned if {
 	not at_upper
 }
 
-at_lower if {
-	some spell in input.exposed.lower
-	spell.current == true
-}
+at_lower if common.any_current(input.exposed.lower)
 
-at_upper if {
-	some spell in input.exposed.upper
-	spell.current == true
-}
+at_upper if common.any_current(input.exposed.upper)
 
 available if count(papers) > 0
 

@@ -28,6 +28,10 @@ test_question_is_open if {
 
 test_later_study_answers_it if asked(group(above, [enclosure, study("2024-05-01")])).by == {"date": "2024-05-01", "ref": "control/study"}
 
+test_study_that_is_still_open_answers_nothing if {
+	asked(group(above, [enclosure, object.union(study("2024-06-01"), {"feasible": "studied"})])).by == null
+}
+
 test_nothing_in_place if {
 	none := group(above, [study("2024-05-01")])
 	count(as_low_as_feasible.obligations) == 0 with input as none

@@ -40,6 +40,11 @@ test_lost if {
 	not "for" in object.keys(found)
 }
 
+test_lost_of_who_was_hired_again if {
+	again := {"employed": [{"from": "2015-01-01", "to": "2018-01-01", "current": false}, {"from": "2020-01-01", "to": null, "current": true}]}
+	not "for" in object.keys(obligation(worker(object.union(again, {"missing_audiograms": [lost]}))))
+}
+
 test_tested_and_not_on_file if {
 	found := obligation(worker({"examinations": [attended("hearing_test", "2024-06-01")]}))
 	found.holds == false
@@ -55,6 +60,12 @@ test_kept_for_some_time_after_employment if {
 test_nothing_lost_of_who_left if {
 	audiogram_records_kept.obligations == set() with input as worker(left)
 	count(audiogram_records_kept.not_owed) == 1 with input as worker(left)
+}
+
+test_lost_and_nothing_else_on_file if {
+	alone := worker({"audiograms": [], "missing_audiograms": [lost]})
+	obligation(alone).holds == false
+	count(audiogram_records_kept.not_owed) == 0 with input as alone
 }
 
 test_never_tested if {

@@ -78,6 +78,10 @@ test_answer_not_recorded if {
 	obligation(worker(tested, false, [offer(null, "2023-10-01")])).by.ref == "audiogram/a1"
 }
 
+test_declined_counts_more_than_an_open_answer if {
+	obligation(worker({}, false, [offer("declined", "2023-10-01"), offer(null, "2023-11-01")])).lifted != ""
+}
+
 test_offer_of_something_else if {
 	appointment := object.union(offer("declined", "2023-10-01"), {"kind": "health_appointment"})
 	attended := object.union(offer("declined", "2023-10-01"), {"attended_on": "2023-11-01"})

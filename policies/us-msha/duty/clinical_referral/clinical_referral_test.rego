@@ -53,6 +53,15 @@ test_valid_audiogram_since if {
 	obligation(worker([invalid([done("referral_decision", "referral_needed", "physician")]), valid])).by == null
 }
 
+test_another_invalid_audiogram_settles_nothing if {
+	again := object.union(invalid([done("referral", null, "physician")]), {"id": "a3", "date": "2024-04-10"})
+	{o.key | some o in clinical_referral.obligations} == {"a2", "a3"} with input as worker([invalid([]), again])
+}
+
+test_test_of_one_ear_settles_nothing if {
+	obligation(worker([invalid([]), object.union(valid, {"ears_with_result": 1})])).of == "physician or audiologist"
+}
+
 test_nothing_invalid if {
 	every tests in [[], [valid], [object.union(invalid([]), {"enrolled": false})]] {
 		clinical_referral.obligations == set() with input as worker(tests)

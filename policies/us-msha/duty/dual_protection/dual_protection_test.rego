@@ -50,6 +50,11 @@ test_not_known_whether_above if {
 	holds(object.union(unknown, {"enrolled": [formerly]})) == set()
 }
 
+test_known_to_be_above_counts_more if {
+	both := object.union(with_types(["dual"]), {"exposure_unknown": {"dual": [{"from": "2024-01-01", "to": null, "reason": "not measured"}]}})
+	holds(both) == {true}
+}
+
 test_not_above if {
 	quiet := object.union(worker, {"exposed": {"dual": [formerly]}})
 	holds(quiet) == set()

@@ -18,6 +18,17 @@ test_measured if {
 	every suspected in [true, false, null] { holds(group(survey, suspected, [survey])) == {true} }
 }
 
+test_measured_group_is_never_not_owed if {
+	count(exposure_evaluated.not_owed) == 0 with input as group(survey, false, [survey])
+}
+
+test_quiet_group_with_a_measurement_that_gives_nothing if {
+	holds(group(null, false, [survey])) == set()
+	count(exposure_evaluated.not_owed) == 1 with input as group(null, false, [survey])
+}
+
+test_worked_out_from_tasks if holds(group(survey, true, [])) == {true}
+
 test_suspected_and_never_measured if holds(group(null, true, [])) == {false}
 
 test_measured_without_result if holds(group(null, true, [survey])) == {null}

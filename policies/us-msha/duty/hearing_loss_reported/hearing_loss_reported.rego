@@ -73,7 +73,7 @@ shown_before(ear, test) if {
 }
 
 undecided(test) if {
-	count(shown(test)) == 0
+	count(new_ears(test)) == 0
 	null in {test.schemes.reportable.left, test.schemes.reportable.right}
 }
 

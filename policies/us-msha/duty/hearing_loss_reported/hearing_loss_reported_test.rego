@@ -91,6 +91,17 @@ test_new_baseline_after_an_absence_shows_no_loss if {
 	count(hearing_loss_reported.not_owed) == 1 with input as anew
 }
 
+test_other_ear_not_known_after_a_loss_that_was_reported if {
+	later := worker([loss({}), audiogram("a3", "2025-03-05", true, null)])
+	some o in hearing_loss_reported.obligations with input as later
+	o.key == "a3"
+	o.holds == null
+}
+
+test_loss_of_one_ear_is_one_matter_where_the_other_is_not_known if {
+	obligation(worker([audiogram("a2", "2024-03-05", true, null)])).within == "report_time"
+}
+
 test_no_loss if {
 	every test in [audiogram("a2", "2024-03-05", false, false), loss({"to_compare": false})] {
 		hearing_loss_reported.obligations == set() with input as worker([test])

@@ -48,6 +48,7 @@ test_response if {
 
 test_threshold_not_recorded if {
 	found := by_key(group({"doses": [dose(null, 130)]}))
+	object.keys(found) == {"m1/full shift", "m1/response", "m1/null dBA/threshold"}
 	found["m1/null dBA/threshold"].value == null
 	found["m1/null dBA/threshold"].missing == ["the integration threshold"]
 }

@@ -43,3 +43,9 @@ test_not_in_the_program_now if {
 	holds(dossier) == set()
 	count(reasons(dossier)) == 1
 }
+
+test_no_longer_in_the_program if {
+	left := object.union(worker(fitting, null), {"enrolled": [{"from": "2022-01-01", "to": "2024-01-01", "current": false}]})
+	holds(left) == set()
+	count(reasons(left)) == 1
+}

@@ -78,7 +78,10 @@ compulsory_days := array.concat([spell.from | some spell in above_limit], [shift
 
 above_limit := [spell | some spell in input.exposed.limit; spell.current == true]
 
-shifts := [shift | some shift in input.shifts; in_program]
+shifts := [shift | some shift in input.shifts; in_program; not shift.ref in set_anew]
+
+# A test that became the new baseline after a long absence is compared with no other.
+set_anew := {revision.audiogram | some revision in input.revisions; revision.result == "new_baseline"}
 
 reasons := array.concat(
 	["exposure above the permissible exposure level" | count(above_limit) > 0],

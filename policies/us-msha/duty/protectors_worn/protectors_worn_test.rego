@@ -13,14 +13,14 @@ baseline := {"date": "2024-12-01", "ref": "audiogram/a1"}
 
 worker := {
 	"as_of": "2026-06-30", "exposed": {"limit": []}, "exposure_unknown": {"limit": []}, "shifts": [],
-	"enrolled": [enrolled(baseline, false)], "examinations": [], "wear": null,
+	"enrolled": [enrolled(baseline, false)], "examinations": [], "revisions": [], "wear": null,
 }
 
 wear(worn, day) := {"date": day, "ref": "wear_check/w1", "worn": worn, "own": true}
 
 above(check) := object.union(worker, {"exposed": {"limit": [since("2024-01-01")]}, "wear": check})
 
-shifted(check) := object.union(worker, {"shifts": [{"date": "2025-03-05"}], "wear": check})
+shifted(check) := object.union(worker, {"shifts": [{"date": "2025-03-05", "ref": "audiogram/a2"}], "wear": check})
 
 not_known := object.union(worker, {"exposure_unknown": {"limit": [{"from": "2025-01-01", "to": null, "reason": "not measured"}]}})
 
@@ -50,7 +50,7 @@ test_never_checked if {
 test_check_before_it_was_compulsory_does_not_count if holds(shifted(wear(true, "2025-03-04"))) == {null}
 
 test_check_counts_from_the_earlier_of_two_reasons if {
-	both := object.union(above(wear(true, "2024-06-01")), {"shifts": [{"date": "2025-03-05"}]})
+	both := object.union(above(wear(true, "2024-06-01")), {"shifts": [{"date": "2025-03-05", "ref": "audiogram/a2"}]})
 	holds(both) == {true}
 	{o.facts.compulsory | some o in protectors_worn.obligations} == {["exposure above the permissible exposure level", "a standard threshold shift"]} with input as both
 }
@@ -64,6 +64,10 @@ test_not_known_whether_compulsory if {
 	count(reasons(not_known)) == 0
 }
 
+test_shift_decides_even_where_exposure_is_not_known if {
+	holds(object.union(shifted(wear(true, "2026-05-05")), {"exposure_unknown": not_known.exposure_unknown})) == {true}
+}
+
 test_miner_not_known_to_be_in_the_program if {
 	outside := object.union(not_known, {"enrolled": []})
 	holds(outside) == set()
@@ -73,6 +77,13 @@ test_miner_not_known_to_be_in_the_program if {
 test_shift_matters_only_in_the_program if {
 	left := object.union(shifted(null), {"enrolled": [object.union(formerly, {"baseline": baseline, "baseline_mobile": false})]})
 	holds(left) == set()
+}
+
+anew(result) := object.union(shifted(null), {"revisions": [{"audiogram": "audiogram/a2", "result": result}]})
+
+test_new_baseline_after_an_absence_shows_no_shift if {
+	holds(anew("new_baseline")) == set()
+	holds(anew("persistent")) == {null}
 }
 
 test_waits_for_a_baseline if {
@@ -89,6 +100,8 @@ test_declined_the_test if {
 	waits(object.union(waiting, {"examinations": [offer("declined", "2024-03-01")]})) == set()
 	waits(object.union(waiting, {"examinations": [offer("declined", "2023-03-01")]})) == {"no baseline/2024-01-01"}
 	waits(object.union(waiting, {"examinations": [offer("accepted", "2024-03-01")]})) == {"no baseline/2024-01-01"}
+	appointment := object.union(offer("declined", "2024-03-01"), {"kind": "health_appointment"})
+	waits(object.union(waiting, {"examinations": [appointment]})) == {"no baseline/2024-01-01"}
 }
 
 test_not_compulsory if {

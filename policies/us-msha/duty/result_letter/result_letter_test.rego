@@ -43,7 +43,9 @@ test_not_written if {
 }
 
 test_not_known_whether_in_writing if {
-	by_key(worker({"notices": [told("result", "2024-03-20", null)]})).a2.holds == null
+	unclear := by_key(worker({"notices": [told("result", "2024-03-20", null)]})).a2
+	unclear.holds == null
+	unclear.note == "the result of the audiogram of 2024-03-05 was received on 2024-03-12"
 	by_key(worker({"notices": [told("result", "2024-03-20", null), told("result", "2024-03-21", true)]})).a2.by.date == "2024-03-21"
 }
 

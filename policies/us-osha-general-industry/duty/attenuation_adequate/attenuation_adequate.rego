@@ -70,30 +70,21 @@ said := "the level under the protector cannot be estimated" if {
 # The protector handed over, its model with the rating, and what the exposure of today rests on.
 records := array.concat(
 	[input.protection.ref, sprintf("protector/%s", [input.protection.protector])],
-	[exposure.ref | some exposure in exposures_now; exposure.ref != null],
+	common.refs(exposures_now),
 )
 
 exposures_now := [exposure | some exposure in input.exposures; common.covers(exposure, input.as_of)]
 
-in_program_now if {
-	some spell in input.enrolled
-	spell.current == true
-}
+in_program_now if common.any_current(input.enrolled)
 
 has_protector if {
 	in_program_now
 	input.protection != null
 }
 
-after_shift if {
-	some spell in input.after_shift
-	spell.current == true
-}
+after_shift if common.any_current(input.after_shift)
 
-above_limit_or_not_known if {
-	some spell in input.exposed.limit
-	spell.current == true
-}
+above_limit_or_not_known if common.any_current(input.exposed.limit)
 
 above_limit_or_not_known if {
 	some stretch in input.exposure_unknown.limit

@@ -13,6 +13,7 @@
 #   remedy: Add what the records lack, from the test sheets, the calibration reports and the noise measurements.
 package duty.audiogram_record_content
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -29,7 +30,7 @@ obligations contains {
 	"holds": false,
 	"note": sprintf("audiometric records that lack contents: %d (%s)", [count(incomplete), concat(", ", lacking)]),
 	"facts": {"audiograms": count(program_tests), "incomplete": count(incomplete), "lacking": lacking},
-	"because": [test.ref | some test in incomplete],
+	"because": common.refs(incomplete),
 } if {
 	count(incomplete) > 0
 }

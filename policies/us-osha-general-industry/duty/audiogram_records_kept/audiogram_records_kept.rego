@@ -12,6 +12,7 @@
 #   remedy: Find the missing audiogram, at the clinic or testing firm if need be, and file it.
 package duty.audiogram_records_kept
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -37,10 +38,7 @@ obligations contains {
 	count(input.audiograms) > 0
 }
 
-employed if {
-	some stretch in input.employed
-	stretch.current
-}
+employed if common.any_current(input.employed)
 
 not_owed contains "the worker is no longer employed" if not employed
 

@@ -12,6 +12,7 @@
 #   remedy: Tell the worker the result of the noise measurement, and keep a record of it.
 package duty.exposure_notice
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -20,7 +21,7 @@ obligations contains {
 	"by": result.notice,
 	"note": said(result),
 	"facts": {"dose_pct": result.dose_pct, "measured_on": result.date},
-	"because": [link.ref | some link in [result, result.notice]; link != null],
+	"because": common.refs([result, result.notice]),
 } if {
 	some result in input.results
 }

@@ -18,6 +18,7 @@
 #     not, enter it on the log with the hearing-loss column ticked.
 package duty.hearing_loss_recorded
 
+import data.common
 import rego.v2
 
 obligations contains object.union(verdict(loss), {
@@ -71,7 +72,7 @@ question(loss, why) := {
 
 records(loss) := array.concat(
 	[loss.ref, loss.compared_with],
-	[link.ref | some link in links(loss); link != null],
+	common.refs(links(loss)),
 )
 
 links(loss) := [loss.retest, loss.work_related, loss.not_work_related, loss.other_opinion, loss.entry, loss.removal]

@@ -97,10 +97,7 @@ limit_not_known := [stretch.reason |
 	common.covers(stretch, input.as_of)
 ]
 
-in_program if {
-	some spell in input.enrolled
-	spell.current == true
-}
+in_program if common.any_current(input.enrolled)
 
 spells_with_van := [spell | some spell in input.enrolled; with_van(spell)]
 

@@ -13,12 +13,13 @@
 #   remedy: Tell the worker how the later audiogram was interpreted, and keep a record of it.
 package duty.shift_not_persistent_notice
 
+import data.common
 import rego.v2
 
 obligations contains object.union(verdict(later), {
 	"key": sprintf("%s/%s", [later.id, trim_prefix(later.shift.ref, "audiogram/")]),
 	"facts": {"ears": later.ears},
-	"because": [link.ref | some link in [later.shift, later, later.notice]; link != null],
+	"because": common.refs([later.shift, later, later.notice]),
 }) if {
 	some later in to_be_told
 }

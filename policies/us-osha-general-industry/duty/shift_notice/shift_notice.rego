@@ -14,6 +14,7 @@
 #   remedy: Inform the worker of the shift in writing now, and keep a dated copy.
 package duty.shift_notice
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -53,9 +54,6 @@ found(shift) := sprintf("the test of %s shows a shift, of which the worker was t
 	shift.oral_notice != null
 } else := sprintf("the test of %s shows a shift, of which the worker is to be informed in writing", [shift.date])
 
-records(shift) := [link.ref |
-	some link in [shift.first_test, shift, input.baseline, shift.notice, shift.unclear_notice, shift.oral_notice]
-	link != null
-]
+records(shift) := common.refs([shift.first_test, shift, input.baseline, shift.notice, shift.unclear_notice, shift.oral_notice])
 
 not_owed contains "no audiogram made while in the program shows a shift" if count(input.shifts) == 0

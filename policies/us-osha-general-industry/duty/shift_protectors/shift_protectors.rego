@@ -16,6 +16,7 @@
 #     physician's opinion on whether noise at work caused or aggravated the shift.
 package duty.shift_protectors
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -36,7 +37,7 @@ obligations contains {
 	"note": asked(step, shift),
 	"facts": {"ears": shift.ears, "protector_at_hand": shift.had_protector},
 	"health": shift.hearing,
-	"because": [link.ref | some link in [shift, step.done, shift.other_opinion]; link != null],
+	"because": common.refs([shift, step.done, shift.other_opinion]),
 } if {
 	some shift in input.shifts
 	some step in owed(shift)

@@ -16,15 +16,13 @@
 #     answer, and refer the worker if it is yes.
 package duty.shift_referral
 
+import data.common
 import rego.v2
 
 obligations contains object.union(verdict(shift), {
 	"key": shift.id,
 	"health": shift.hearing,
-	"because": [link.ref |
-		some link in [shift, shift.not_work_related, shift.referral_decision, shift.referral]
-		link != null
-	],
+	"because": common.refs([shift, shift.not_work_related, shift.referral_decision, shift.referral]),
 }) if {
 	some shift in followed_up
 }
