@@ -185,6 +185,9 @@ type Duty struct {
 	Text        string   // the module as written
 }
 
+// Guidance says whether the duty stands in guidance beside the law: its title says so.
+func (d *Duty) Guidance() bool { return strings.HasSuffix(d.Title, "(guidance)") }
+
 // Duty gives a duty by its id.
 func (b *Bundle) Duty(id string) (*Duty, bool) {
 	for _, d := range b.Duties {

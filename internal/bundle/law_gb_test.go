@@ -73,8 +73,11 @@ func TestParagraphsOfGreatBritain(t *testing.T) { holdToParagraphs(t, takeBundle
 func TestCategoriesOfL108AreOff(t *testing.T) {
 	b := takeBundle(t, britain)
 	assert.NotEmpty(t, b.Paragraphs["L108 categories"].Outside)
-	require.Len(t, b.Measures.Hearing.Others, 1)
-	assert.Equal(t, "worsened", b.Measures.Hearing.Others[0].Name)
+	require.Len(t, b.Measures.Hearing.Others, 2)
+	for i, name := range []string{"worsened", "worsened_core"} {
+		other := b.Measures.Hearing.Others[i]
+		assert.Equal(t, []string{name, "change", "repeat_change"}, []string{other.Name, other.Of, other.Above})
+	}
 	assert.Nil(t, b.Measures.Hearing.AgeCorrection)
 	assert.Empty(t, b.Measures.Hearing.Shift.Rule, "the law knows no threshold shift")
 }

@@ -99,8 +99,12 @@ func (b *Builder) levelSpells(pieces []stretch) (map[string][]Spell, map[string]
 	for _, level := range b.levels {
 		var yes []calendar.Spell
 		open := []Open{}
-		for _, p := range splitAt(pieces, b.lawDays(level)) {
-			if p.From > b.AsOf {
+		days, first := b.lawDays(level), Date(0)
+		if len(days) > 0 && slices.Min(days) <= b.AsOf {
+			first = slices.Min(days)
+		}
+		for _, p := range splitAt(pieces, days) {
+			if p.From > b.AsOf || p.From < first { // the law knew no such level yet
 				continue
 			}
 			found := b.reaches(level, p.on, max(p.From, 1))

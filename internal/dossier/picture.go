@@ -2,6 +2,8 @@ package dossier
 
 import (
 	"math"
+	"slices"
+	"strings"
 
 	"hearduty/internal/record"
 )
@@ -19,7 +21,7 @@ type MeasuredLevel struct {
 type LevelLine struct {
 	Name, Parameter string
 	DB              float64
-	Limit           bool // the level named limit; else it is one that enrols or the like
+	Limit           bool // a level whose name begins with limit; else it is one that enrols or the like
 }
 
 // LevelUnit says what the levels of the enrolling channel are.
@@ -96,7 +98,14 @@ func (b *Builder) LevelLines() []LevelLine {
 				continue
 			}
 		}
-		out = append(out, LevelLine{Name: name, Parameter: parameter, DB: v, Limit: name == "limit"})
+		line := LevelLine{Name: name, Parameter: parameter, DB: v, Limit: strings.HasPrefix(name, "limit")}
+		if i := slices.IndexFunc(out, func(l LevelLine) bool { return l.DB == v }); i >= 0 { // one line a level
+			if line.Limit && !out[i].Limit {
+				out[i] = line
+			}
+			continue
+		}
+		out = append(out, line)
 	}
 	return out
 }

@@ -40,6 +40,7 @@ type settled struct {
 // settleAnswer settles what one duty returned. Silence is never taken for compliance: a rule that failed,
 // returned nothing, or returned what cannot be read gives an unproven outcome.
 func settleAnswer(s *settler, a Answer) []settled {
+	s.duty = a.Duty
 	if a.Err != nil {
 		return []settled{{outcome: outcome{status: finding.Unproven, message: sentence(fmt.Sprintf("The rule of this duty failed: %v", a.Err))}}}
 	}

@@ -273,7 +273,7 @@ func (c *check) judgeAll(ctx context.Context) error {
 				return err
 			}
 			if c.wants(f, listed) {
-				c.gallery.hang(c.portraitOf(b, f))
+				c.gallery.hang(c.portraitOf(b, f), slices.Index(c.benches[b.site.ID], b))
 			}
 		}
 		return nil
@@ -305,7 +305,7 @@ func (c *check) judgeWorker(ctx context.Context, w *dossier.WorkerRecords) error
 				b.ears.add(file.Input.(*dossier.Worker))
 			}
 			if c.wants(file, listed) {
-				c.gallery.hang(c.portraitOfWorker(b, file, w))
+				c.gallery.hang(c.portraitOfWorker(b, file, w), slices.Index(c.benches[b.site.ID], b))
 			}
 		}
 		c.observeWorker(site, &observed, w)

@@ -57,11 +57,11 @@ func days(n int) string {
 }
 
 // limitWords says a value beside its limit.
-func limitWords(o *obligation, u used, bound float64) string {
+func (s *settler) limitWords(o *obligation, u used, bound float64) string {
 	relation := map[string]string{"at_most": "at most", "below": "below", "at_least": "at least", "above": "above"}[o.compare]
 	who := "the law"
-	if u.value.Seen == "memory" {
-		who = "this bundle" // the number was not read in the text
+	if u.value.Seen == "memory" || s.bundle.About.Kind != "law" || s.duty != nil && s.duty.Guidance() {
+		who = "this bundle" // the number was not read in the text, or is none of the law
 	}
 	return fmt.Sprintf("%s; %s asks for %s %s", withUnit(o.value, u.unit), who, relation, withUnit(bound, u.unit))
 }

@@ -13,11 +13,16 @@ import (
 )
 
 // gallery gathers the portraits of subjects with listed findings. Where several bundles judge a site, the
-// first of them that has a finding of the subject gives its portrait.
+// first of them, as the site names them, that has a finding of the subject gives its portrait.
 type gallery struct {
 	mu   sync.Mutex
-	list []finding.Portrait
-	has  map[portraitKey]bool
+	hung map[portraitKey]placed
+}
+
+// placed is a portrait with the place of its bundle among those of the site.
+type placed struct {
+	finding.Portrait
+	place int
 }
 
 type portraitKey struct {
@@ -30,27 +35,32 @@ func (c *check) wants(f *dossier.File, listed int) bool {
 	return c.Portraits && listed > 0 && c.wanted == "" && f != nil
 }
 
-func (g *gallery) hang(p finding.Portrait) {
+// hang takes a portrait, drawn by the bundle that has a place among those of the site. The first in place stays,
+// whichever comes first.
+func (g *gallery) hang(p finding.Portrait, place int) {
 	g.mu.Lock()
 	defer g.mu.Unlock()
 	key := portraitKey{p.Site, p.Subject}
-	if g.has[key] {
+	if other, ok := g.hung[key]; ok && other.place <= place {
 		return
 	}
-	if g.has == nil {
-		g.has = map[portraitKey]bool{}
+	if g.hung == nil {
+		g.hung = map[portraitKey]placed{}
 	}
-	g.has[key] = true
-	g.list = append(g.list, p)
+	g.hung[key] = placed{p, place}
 }
 
 // sorted gives the portraits by site, kind and id.
 func (g *gallery) sorted() []finding.Portrait {
-	slices.SortFunc(g.list, func(a, b finding.Portrait) int {
+	var list []finding.Portrait
+	for _, p := range g.hung {
+		list = append(list, p.Portrait)
+	}
+	slices.SortFunc(list, func(a, b finding.Portrait) int {
 		return cmp.Or(cmp.Compare(a.Site, b.Site), cmp.Compare(slices.Index(dossier.Kinds, a.Subject.Kind), slices.Index(dossier.Kinds, b.Subject.Kind)),
 			cmp.Compare(a.Subject.ID, b.Subject.ID))
 	})
-	return g.list
+	return list
 }
 
 // painter draws one portrait.

@@ -23,7 +23,7 @@ func (a *painter) group(d *dossier.Group) {
 		x.Results = append(x.Results, resultOf(m, a.file.Refs.Of(m.Rec)))
 	}
 	for _, l := range b.LevelLines() {
-		line := finding.Line{Name: l.Name + " level", DB: tenths(l.DB), Grade: "action"}
+		line := finding.Line{Name: levelName(l.Name), DB: tenths(l.DB), Grade: "action"}
 		if l.Limit {
 			line.Grade = "limit"
 		}
@@ -44,6 +44,14 @@ func (a *painter) group(d *dossier.Group) {
 		a.linked(c.Date, "control", phrase(c.Type+" control", c.What), plainState, c.Ref)
 	}
 	a.documents(d.Documents)
+}
+
+// levelName writes the name of an exposure level in words.
+func levelName(name string) string {
+	if strings.Contains(name, "level") {
+		return words(name)
+	}
+	return words(name) + " level"
 }
 
 func (a *painter) area(d *dossier.Area) {

@@ -35,6 +35,7 @@ type used struct {
 // settler settles the obligations of one dossier.
 type settler struct {
 	bundle *bundle.Bundle
+	duty   *bundle.Duty // whose obligations are settled; nil if it is not known
 	file   *dossier.File
 	asOf   calendar.Date
 	brief  func(*outcome) bool // whether an outcome is only counted, so that it needs no words; nil for never
@@ -296,9 +297,9 @@ func (s *settler) limit(o *obligation) outcome {
 		return out
 	}
 	out.facts = map[string]any{"value": o.value}
-	out.message = sentence(limitWords(o, u, bound))
+	out.message = sentence(s.limitWords(o, u, bound))
 	if o.note != "" {
-		out.message = sentence(o.note + ": " + limitWords(o, u, bound))
+		out.message = sentence(o.note + ": " + s.limitWords(o, u, bound))
 	}
 	return out
 }

@@ -103,7 +103,7 @@ func (v *Veil) code(k Kind, id string) code {
 func (v *Veil) Err() error { return v.err }
 
 // codes finds what may be a code in a text.
-var codes = regexp.MustCompile(`[WPAMC][0-9A-HJKMNP-TV-Z]{10}`)
+var codes = regexp.MustCompile(`[WPAMCE][0-9A-HJKMNP-TV-Z]{10}`)
 
 // Real puts the ids back in place of the codes in a text.
 func (v *Veil) Real(text string) string {

@@ -2,7 +2,8 @@
 # title: Shared helpers
 # description: >-
 #   The few words that the duties of all bundles have in common. They take what a duty hands them and answer with yes,
-#   a day, a number or words, never with records: of what a shared rule returns, a misspelt fact is no compile error.
+#   a day, a number or words, never with records: of what a shared rule returns, a misspelt fact is no compile error. They are called for every
+#   subject and are written to be quick.
 package common
 
 import rego.v2
@@ -26,15 +27,11 @@ over(stretch, day) if {
 }
 
 # Whether one of the stretches runs today.
-any_current(stretches) if {
-	some stretch in stretches
-	stretch.current == true
-}
+any_current(stretches) if stretches[_].current == true
 
 # Since when that is so: the first day of the stretches that run today, or null if none does.
-current_since(stretches) := min(days) if {
-	days := {stretch.from | some stretch in stretches; stretch.current == true}
-	count(days) > 0
+current_since(stretches) := day if {
+	day := min([stretch.from | some stretch in stretches; stretch.current == true])
 } else := null
 
 # Why something is not known on a day: each reason once. A stretch without a reason counts with an empty one.
@@ -51,7 +48,7 @@ covered(papers) := {word | some paper in papers; some word in paper.covers}
 in_words(words) := replace(concat(", ", words), "_", " ")
 
 # The references of those records that there are.
-refs(links) := [link.ref | some link in links; link != null; link.ref != null]
+refs(links) := [ref | ref := links[_].ref; ref != null]
 
 # What the records lack: the words, if the value is not known.
 missing(value, words) := [words] if value == null

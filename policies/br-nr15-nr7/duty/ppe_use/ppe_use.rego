@@ -60,4 +60,4 @@ said := {
 	null: "the check does not say whether the worker wore a protector",
 }
 
-above_limit if common.any_current(input.exposed.limit)
+above_limit if above_since != null

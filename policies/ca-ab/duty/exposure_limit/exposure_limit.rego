@@ -64,8 +64,7 @@ default level := null
 level := input.now.channels.day.level_dba if {
 	input.now.channels.day.level_dba != null
 } else := input.now.channels.day.at_least if {
-	some spell in input.exposed.daily
-	spell.current
+	common.any_current(input.exposed.daily)
 } else := input.now.channels.day.at_most if {
 	every stretch in input.exposure_unknown.daily {
 		not common.covers(stretch, input.as_of)

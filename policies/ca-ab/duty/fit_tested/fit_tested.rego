@@ -30,8 +30,7 @@ not_owed contains "the worker does not wear protectors above their level now, or
 concerned if {
 	common.at(data.parameters.fit_test_methods, input.as_of) != null
 	input.protection != null
-	some spell in input.exposed.protectors
-	spell.current
+	common.any_current(input.exposed.protectors)
 }
 
 default holds := false

@@ -65,7 +65,4 @@ measured if surveyed
 
 measured if count(input.measurements) > 0
 
-not_known_now := [stretch.reason |
-	some stretch in input.exposure_unknown.assessment
-	common.covers(stretch, input.as_of)
-]
+not_known_now := common.reasons(input.exposure_unknown.assessment, input.as_of)

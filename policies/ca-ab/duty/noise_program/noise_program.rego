@@ -31,7 +31,7 @@ obligations contains {
 	"holds": held(content),
 	"note": note(content),
 	"missing": common.missing(held(content), "what the program covers"),
-	"because": [paper.ref | some paper in papers],
+	"because": common.refs(papers),
 } if {
 	owed
 	count(papers) > 0
@@ -42,7 +42,7 @@ not_owed contains "nobody is known to be exposed to excess noise now" if not owe
 
 owed if input.enrolled_now > 0
 
-covered := {content | some paper in papers; some content in paper.covers}
+covered := common.covered(papers)
 
 held(content) if content in covered
 

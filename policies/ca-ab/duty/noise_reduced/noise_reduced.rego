@@ -12,6 +12,7 @@
 #   remedy: Have a competent person study the measures, put the reasonably practicable ones in place, and record the study.
 package duty.noise_reduced
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -30,7 +31,7 @@ obligations contains {
 	"ask": "Which measures are reasonably practicable to reduce the noise of this group?",
 	"of": "competent person (engineering)",
 	"by": answer,
-	"because": [control.ref | some control in input.controls],
+	"because": common.refs(input.controls),
 	"facts": {"workers": input.workers, "measures": [control.what | some control in input.controls]},
 } if {
 	above
@@ -39,10 +40,7 @@ obligations contains {
 
 not_owed contains "the exposure is not known to be above the level of assessment now" if not above
 
-above if {
-	some spell in input.exposed.assessment
-	spell.current
-}
+above if common.any_current(input.exposed.assessment)
 
 # A measure is owed until it is in place, or until a later record on the same measure says otherwise.
 not_in_place := [control |

@@ -12,12 +12,13 @@
 #   remedy: Designate the professional in writing, and file the designation.
 package duty.professional_designated
 
+import data.common
 import rego.v2
 
 obligations contains {
 	"holds": count(papers) > 0,
 	"note": note,
-	"because": [paper.ref | some paper in papers],
+	"because": common.refs(papers),
 	"facts": {"workers_in_noise": input.enrolled_now},
 } if {
 	owed

@@ -56,8 +56,7 @@ not_owed contains "the worker is not above the level of protectors now, or has n
 
 concerned if {
 	input.protection != null
-	some spell in input.exposed.protectors
-	spell.current
+	common.any_current(input.exposed.protectors)
 }
 
 # The highest that the exposure can be today.

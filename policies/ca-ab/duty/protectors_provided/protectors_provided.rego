@@ -19,7 +19,7 @@ obligations contains {
 	"key": spell.from,
 	"holds": input.protection != null,
 	"note": note,
-	"because": array.concat(common.refs([input.protection]), [result.ref | some result in input.results]),
+	"because": array.concat(common.refs([input.protection]), common.refs(input.results)),
 	"facts": {"exposed_since": spell.from, "working": input.exposure_working},
 } if {
 	some spell in above
@@ -44,9 +44,6 @@ note := "the worker is above the level of protectors and has none" if {
 	input.protection == null
 } else := null
 
-not_known_now := [stretch.reason |
-	some stretch in input.exposure_unknown.protectors
-	common.covers(stretch, input.as_of)
-]
+not_known_now := common.reasons(input.exposure_unknown.protectors, input.as_of)
 
 above := [spell | some spell in input.exposed.protectors; spell.current]

@@ -23,12 +23,12 @@ obligations contains {
 	"because": common.refs([input.wear]),
 	"facts": {"exposed_since": since},
 } if {
-	count(above) > 0
+	above
 }
 
-not_owed contains "the worker is not known to be above the level of protectors now" if count(above) == 0
+not_owed contains "the worker is not known to be above the level of protectors now" if not above
 
-since := min([spell.from | some spell in above])
+since := common.current_since(input.exposed.protectors)
 
 default worn := null
 
@@ -44,4 +44,4 @@ said := {
 	null: "no check since protectors are to be worn says whether the worker wears them",
 }
 
-above := [spell | some spell in input.exposed.protectors; spell.current]
+above if since != null

@@ -13,6 +13,7 @@
 #   remedy: Find the missing test at the technician or clinic, and record that it was done.
 package duty.test_records_kept
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -43,6 +44,6 @@ not_owed contains "the records speak of no hearing test" if {
 }
 
 tests := array.concat(
-	[a.ref | some a in input.audiograms],
+	common.refs(input.audiograms),
 	[e.ref | some e in input.examinations; e.kind == "hearing_test"; e.attended_on != null],
 )

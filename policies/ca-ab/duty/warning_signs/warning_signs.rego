@@ -11,12 +11,13 @@
 #   remedy: Post warning signs at the periphery of the area, and keep a dated photo or checklist.
 package duty.warning_signs
 
+import data.common
 import rego.v2
 
 obligations contains {
 	"holds": count(signs) > 0,
 	"note": note,
-	"because": [sign.ref | some sign in signs],
+	"because": common.refs(signs),
 	"facts": {"workers": input.workers},
 } if {
 	above
@@ -24,10 +25,7 @@ obligations contains {
 
 not_owed contains "the area is not known to be above the limits now" if not above
 
-above if {
-	some spell in input.exposed.limit
-	spell.current
-}
+above if common.any_current(input.exposed.limit)
 
 signs := [paper | some paper in input.documents; paper.kind == "zone_signs"]
 

@@ -28,10 +28,7 @@ obligations contains {
 
 not_owed contains "the worker is not known to be exposed to excess noise now" if not owed
 
-owed if {
-	some spell in input.enrolled
-	spell.current
-}
+owed if common.any_current(input.enrolled)
 
 covered(_) := false if input.training == null
 

@@ -2,7 +2,8 @@
 # title: Means in place before the next evaluation
 # description: >-
 #   The reasonable means that an evaluation found are fully implemented before the start of the next evaluation, that
-#   is before its five years are over, or before it was made if that was earlier.
+#   is before its five years are over, or before it was made if that was earlier. A means that was not begun while the
+#   limits are kept is asked about where its beginning is.
 # custom:
 #   cite: r. 13, s. 133
 #   subject: group
@@ -12,6 +13,7 @@
 #   remedy: Complete the means, and record the day on which it was put in place.
 package duty.means_finished
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -26,13 +28,34 @@ obligations contains {
 	evaluation := evaluation_of(control)
 }
 
-not_owed contains "no means was found reasonable by an evaluation of this section" if {
+not_owed contains "no means that an evaluation of this section found is to be completed, for a situation above a limit" if {
 	every control in found {
 		not evaluation_of(control)
 	}
 }
 
-found := [control | some control in input.controls; control.feasible == "yes"]
+found := [control |
+	count(input.exposed.limit) > 0
+	some control in input.controls
+	control.feasible == "yes"
+	not left_open(control)
+]
+
+left_open(control) if {
+	control.started_on == null
+	control.installed_on == null
+	within_now
+}
+
+# The situation was above a limit and is within the limits now.
+within_now if {
+	every spell in input.exposed.limit {
+		spell.current == false
+	}
+	every stretch in input.exposure_unknown.limit {
+		not common.covers(stretch, input.as_of)
+	}
+}
 
 in_place(control) := {"date": control.installed_on, "ref": control.ref} if {
 	control.installed_on != null

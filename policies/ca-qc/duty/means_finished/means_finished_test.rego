@@ -14,7 +14,10 @@ control := {
 
 group(evaluations, changes, control) := {
 	"evaluations": evaluations, "changes": changes, "controls": [control], "choices": {"early_evaluation": "not_counted"},
+	"as_of": "2026-06-30", "exposed": {"limit": [{"from": "2023-06-16", "to": null, "current": true}]}, "exposure_unknown": {"limit": []},
 }
+
+over := {"exposed": {"limit": [{"from": "2023-06-16", "to": "2025-01-08", "current": false}]}}
 
 change(day, raises) := {"id": "x", "date": day, "ref": "change/x", "raises_exposure": raises}
 
@@ -45,6 +48,22 @@ test_change_in_between if {
 	ends(group([evaluation], [change("2024-02-02", "no")], control)) == {["2029-02-01", null]}
 	ends(group([evaluation], [change("2024-03-02", "yes")], control)) == {["2029-02-01", null]}
 	ends(group([evaluation], [change("2024-02-01", "yes")], control)) == {["2029-02-01", null]}
+}
+
+test_within_the_limits_by_now if {
+	kept := object.union(group([evaluation], [], control), over)
+	ends(kept) == set()
+	count(means_finished.not_owed) == 1 with input as kept
+	unknown := object.union(kept, {"exposure_unknown": {"limit": [{"from": "2025-01-08", "to": null, "reason": "not measured since"}]}})
+	ends(unknown) == {["2029-02-01", null]}
+	begun := object.union(group([evaluation], [], object.union(control, {"started_on": "2025-02-01"})), over)
+	ends(begun) == {["2029-02-01", null]}
+}
+
+test_never_above_a_limit if {
+	quiet := object.union(group([evaluation], [], control), {"exposed": {"limit": []}})
+	ends(quiet) == set()
+	count(means_finished.not_owed) == 1 with input as quiet
 }
 
 test_not_reasonable if {

@@ -2,7 +2,8 @@
 # title: Means begun within the year
 # description: >-
 #   In the year following the evaluation the employer begins to implement all reasonable means at the source that it
-#   found and, if these are not enough, other means to meet the limits.
+#   found and, if these are not enough, other means to meet the limits. Where the limits are kept by now, whether a
+#   means that was not begun is one at the source is a judgement.
 # custom:
 #   cite: r. 13, s. 133
 #   subject: group
@@ -12,6 +13,7 @@
 #   remedy: Begin the means now, and record the day on which the work on it began.
 package duty.means_started
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -24,15 +26,48 @@ obligations contains {
 } if {
 	some control in found
 	start := start_of(control)
+	not left_open(control)
 }
 
-not_owed contains "no means was found reasonable by an evaluation of this section" if {
+obligations contains {
+	"key": sprintf("%s/%s", [control.date, control.what]),
+	"ask": "The limits are kept now. Is this a means at the source, which is to be begun all the same?",
+	"of": "competent person (engineering)",
+	"by": null,
+	"note": sprintf("%s: %s", [control.what, start.note]),
+	"because": start.refs,
+} if {
+	some control in found
+	start := start_of(control)
+	left_open(control)
+}
+
+not_owed contains "no means was found reasonable by an evaluation of this section, for a situation above a limit" if {
 	every control in found {
 		not start_of(control)
 	}
 }
 
-found := [control | some control in input.controls; control.feasible == "yes"]
+found := [control |
+	count(input.exposed.limit) > 0
+	some control in input.controls
+	control.feasible == "yes"
+]
+
+left_open(control) if {
+	begun(control) == null
+	within_now
+}
+
+# The situation was above a limit and is within the limits now.
+within_now if {
+	every spell in input.exposed.limit {
+		spell.current == false
+	}
+	every stretch in input.exposure_unknown.limit {
+		not common.covers(stretch, input.as_of)
+	}
+}
 
 commencement := min([period.from | some period in data.parameters.sections_in_force.values])
 

@@ -14,7 +14,10 @@ control := {
 
 group(evaluations, changes, control) := {
 	"evaluations": evaluations, "changes": changes, "controls": [control], "choices": {"early_evaluation": "not_counted"},
+	"as_of": "2026-06-30", "exposed": {"limit": [{"from": "2023-06-16", "to": null, "current": true}]}, "exposure_unknown": {"limit": []},
 }
+
+over := {"exposed": {"limit": [{"from": "2023-06-16", "to": "2025-01-08", "current": false}]}}
 
 change(day, raises) := {"id": "x", "date": day, "ref": "change/x", "raises_exposure": raises}
 
@@ -60,6 +63,22 @@ test_change_in_between if {
 	starts(group([evaluation], [change("2024-02-02", "no")], control)) == {["2024-02-01", null]}
 	starts(group([evaluation], [change("2024-03-02", "yes")], control)) == {["2024-02-01", null]}
 	starts(group([], [change("2024-02-02", "yes")], control)) == set()
+}
+
+test_within_the_limits_by_now if {
+	kept := object.union(group([evaluation], [], control), over)
+	{o.by | some o in means_started.obligations; o.ask} == {null} with input as kept
+	starts(kept) == set()
+	unknown := object.union(kept, {"exposure_unknown": {"limit": [{"from": "2025-01-08", "to": null, "reason": "not measured since"}]}})
+	starts(unknown) == {["2024-02-01", null]}
+	begun := object.union(group([evaluation], [], object.union(control, {"started_on": "2025-02-01"})), over)
+	starts(begun) == {["2024-02-01", {"date": "2025-02-01", "ref": "control/c"}]}
+}
+
+test_never_above_a_limit if {
+	quiet := object.union(group([evaluation], [], control), {"exposed": {"limit": []}})
+	starts(quiet) == set()
+	count(means_started.not_owed) == 1 with input as quiet
 }
 
 test_not_reasonable if {

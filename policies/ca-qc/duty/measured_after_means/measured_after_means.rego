@@ -26,9 +26,15 @@ obligations contains {
 	of_day := [control | some control in installed; control.installed_on == day]
 }
 
-not_owed contains "no means was put in place since the section came into force" if count(installed) == 0
+not_owed contains "no means was put in place in a situation at risk since the section came into force" if count(installed) == 0
 
+at_risk if count(input.exposed.limit) > 0
+
+at_risk if input.suspected_noisy == true
+
+# What is put in place for a whole area says nothing of its quiet situations.
 installed := [control |
+	at_risk
 	some control in input.controls
 	control.installed_on != null
 	common.at(data.parameters.sections_in_force, control.installed_on) != null

@@ -54,4 +54,4 @@ said := {
 	null: "no check since the limit is exceeded says whether the worker wears protectors",
 }
 
-above if common.any_current(input.exposed.limit)
+above if since != null

@@ -12,6 +12,7 @@
 #   remedy: Ask the physician for the certificate, and record its day and the next date.
 package duty.appointment_certificate
 
+import data.common
 import rego.v2
 
 # The law sets no time.
@@ -38,8 +39,7 @@ not_owed contains "not employed now, or no appointment that was attended is on r
 
 # Of somebody who has left, nothing of it may be left.
 appointments := [examination |
-	some spell in input.employed
-	spell.current == true
+	common.any_current(input.employed)
 	some examination in input.examinations
 	examination.kind == "health_appointment"
 	examination.attended_on != null

@@ -12,6 +12,7 @@
 #   remedy: Let a physician with that title hold the appointments, and record who held them.
 package duty.appointment_physician
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -28,8 +29,7 @@ not_owed contains "not employed now, or no appointment that was attended is on r
 
 # Of somebody who has left, nothing of it may be left.
 appointments := [examination |
-	some spell in input.employed
-	spell.current == true
+	common.any_current(input.employed)
 	some examination in input.examinations
 	examination.kind == "health_appointment"
 	examination.attended_on != null

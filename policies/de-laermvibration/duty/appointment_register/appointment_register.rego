@@ -12,6 +12,7 @@
 #   remedy: Record the occasion; after the end of the employment hand the worker a copy and delete the rest.
 package duty.appointment_register
 
+import data.common
 import rego.v2
 
 # That the register is kept is shown by the appointments themselves; each needs its occasion.
@@ -30,7 +31,7 @@ obligations contains {
 	"key": "deleted",
 	"holds": false,
 	"note": "the worker has left, and the register still holds their appointments",
-	"because": [appointment.ref | some appointment in appointments],
+	"because": common.refs(appointments),
 	"facts": {"appointments": count(appointments)},
 } if {
 	not employed_now
@@ -39,10 +40,7 @@ obligations contains {
 
 not_owed contains "no appointment is on record" if count(appointments) == 0
 
-employed_now if {
-	some spell in input.employed
-	spell.current == true
-}
+employed_now if common.any_current(input.employed)
 
 appointments := [examination | some examination in input.examinations; examination.kind == "health_appointment"]
 

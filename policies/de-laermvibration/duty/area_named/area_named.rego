@@ -12,6 +12,7 @@
 #   remedy: Record the area where the group works.
 package duty.area_named
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -25,10 +26,7 @@ obligations contains {
 
 not_owed contains "the records do not show exposure above the upper action values now" if not upper_exceeded_now
 
-upper_exceeded_now if {
-	some stretch in input.exposed.upper_exceeded
-	stretch.current == true
-}
+upper_exceeded_now if common.any_current(input.exposed.upper_exceeded)
 
 said := "no record says where the group works, so that nobody can tell which workplace is to be marked" if {
 	input.area == null

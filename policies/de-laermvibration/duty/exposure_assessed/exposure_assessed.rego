@@ -56,20 +56,12 @@ not_owed contains "the exposure of the worker's group is not known, which is a f
 	not own
 }
 
-employed_now if {
-	some spell in input.employed
-	spell.current == true
-}
+employed_now if common.any_current(input.employed)
 
 # The action values and the limit as a whole: the level of the day or week, or the peak.
 values := ["lower_reached", "lower_exceeded", "upper_reached", "upper_exceeded", "limit"]
 
-open_now := sort({said |
-	some value in values
-	some stretch in input.exposure_unknown[value]
-	common.covers(stretch, input.as_of)
-	said := concat("", [text | some text in [stretch.reason]; text != null])
-})
+open_now := common.reasons([stretch | some value in values; some stretch in input.exposure_unknown[value]], input.as_of)
 
 exposures_now := [exposure | some exposure in input.exposures; common.covers(exposure, input.as_of)]
 

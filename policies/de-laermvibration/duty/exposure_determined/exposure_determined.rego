@@ -55,9 +55,4 @@ said := null if {
 # The action values and the limit as a whole: the level of the day or week, or the peak.
 values := ["lower_reached", "lower_exceeded", "upper_reached", "upper_exceeded", "limit"]
 
-open_now := sort({text |
-	some value in values
-	some stretch in input.exposure_unknown[value]
-	common.covers(stretch, input.as_of)
-	text := concat("", [word | some word in [stretch.reason]; word != null])
-})
+open_now := common.reasons([stretch | some value in values; some stretch in input.exposure_unknown[value]], input.as_of)

@@ -60,15 +60,9 @@ not_owed contains "the records do not show exposure above the limit now, protect
 	not peak_over
 }
 
-level_over if {
-	some stretch in input.exposed.ear_level_exceeded
-	stretch.current == true
-}
+level_over if common.any_current(input.exposed.ear_level_exceeded)
 
-peak_over if {
-	some stretch in input.exposed.limit_peak_exceeded
-	stretch.current == true
-}
+peak_over if common.any_current(input.exposed.limit_peak_exceeded)
 
 exposures_now := [exposure | some exposure in input.exposures; common.covers(exposure, input.as_of)]
 
@@ -121,5 +115,5 @@ shown := {"protector": [model | some held in [input.protection]; model := held.p
 
 records := array.concat(
 	common.refs([input.protection]),
-	[exposure.ref | some exposure in exposures_now; exposure.ref != null],
+	common.refs(exposures_now),
 )

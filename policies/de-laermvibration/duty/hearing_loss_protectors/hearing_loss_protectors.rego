@@ -41,16 +41,9 @@ not_owed contains "at or above the upper action values all wear protectors, whic
 	compulsory_for_all
 }
 
-compulsory_for_all if {
-	some stretch in input.exposed.upper_reached
-	stretch.current == true
-}
+compulsory_for_all if common.any_current(input.exposed.upper_reached)
 
-current := {stretch.from | some stretch in input.exposed.lower_reached; stretch.current == true}
-
-since := min(current) if count(current) > 0
-
-else := null
+since := common.current_since(input.exposed.lower_reached)
 
 tests := [test | some test in input.audiograms; test.invalidated == false]
 

@@ -34,10 +34,7 @@ not_owed contains "no training is on record, which is a finding of its own" if {
 	input.training == null
 }
 
-exposed_now if {
-	some stretch in input.exposed.lower_reached
-	stretch.current == true
-}
+exposed_now if common.any_current(input.exposed.lower_reached)
 
 topics := common.at(data.parameters.instruction_topics, input.as_of)
 
@@ -53,6 +50,6 @@ covered := null if {
 
 said := "the training on record does not say what it covered" if {
 	hidden
-} else := sprintf("the training did not cover: %s", [replace(concat(", ", lacking), "_", " ")]) if {
+} else := sprintf("the training did not cover: %s", [common.in_words(lacking)]) if {
 	count(lacking) > 0
 } else := null

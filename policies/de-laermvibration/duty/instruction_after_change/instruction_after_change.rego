@@ -12,6 +12,7 @@
 #   remedy: Instruct the group on the change, and record it.
 package duty.instruction_after_change
 
+import data.common
 import rego.v2
 
 # The law sets no time.
@@ -47,10 +48,7 @@ not_owed contains "no change that may matter to the instruction is on record" if
 	count(material) == 0
 }
 
-lower_reached_now if {
-	some stretch in input.exposed.lower_reached
-	stretch.current == true
-}
+lower_reached_now if common.any_current(input.exposed.lower_reached)
 
 material := [change | some change in input.changes; change.raises_exposure != "no"]
 

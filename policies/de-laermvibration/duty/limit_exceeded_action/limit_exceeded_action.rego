@@ -32,7 +32,7 @@ papers := [paper | some paper in input.documents; paper.kind == "limit_exceeded"
 heads := common.at(data.parameters.ear_action_heads, input.as_of)
 
 # Several documents of the kind add up.
-lacking := sort({head | some head in heads} - {head | some paper in papers; some head in paper.covers})
+lacking := sort({head | some head in heads} - common.covered(papers))
 
 hidden if heads == null
 
@@ -49,6 +49,6 @@ covered := null if {
 
 said := "the document does not say which heads it covers" if {
 	hidden
-} else := sprintf("after the limit was exceeded, no record shows: %s", [replace(concat(", ", lacking), "_", " ")]) if {
+} else := sprintf("after the limit was exceeded, no record shows: %s", [common.in_words(lacking)]) if {
 	count(lacking) > 0
 } else := null

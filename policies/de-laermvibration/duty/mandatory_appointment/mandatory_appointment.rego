@@ -70,11 +70,7 @@ obligations contains {
 
 not_owed contains "the records do not show exposure at or above the upper action values now" if start == null
 
-starts := [stretch.from | some stretch in input.exposed.upper_reached; stretch.current == true]
-
-start := min(starts) if count(starts) > 0
-
-else := null
+start := common.current_since(input.exposed.upper_reached)
 
 timed if {
 	start != null

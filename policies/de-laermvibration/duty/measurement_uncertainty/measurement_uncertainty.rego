@@ -19,7 +19,7 @@ obligations contains {
 	"holds": answer,
 	"note": said,
 	"missing": [words | answer == null; words := "how inexact the level of the group is: an accuracy class, an uncertainty, or a report that covers it"],
-	"because": array.concat(common.refs(reports), [measurement.ref | some measurement in current]),
+	"because": array.concat(common.refs(reports), common.refs(current)),
 } if {
 	count(current) > 0
 }
@@ -51,7 +51,7 @@ current := [measurement |
 
 reports := [paper | some paper in input.documents; paper.kind == "noise_measurement_report"]
 
-covered := {head | some paper in reports; some head in paper.covers}
+covered := common.covered(reports)
 
 said := null if {
 	answer == true

@@ -27,10 +27,7 @@ obligations contains {
 
 not_owed contains "the records do not show exposure above the lower action values now" if not exceeded_now
 
-exceeded_now if {
-	some stretch in input.exposed.lower_exceeded
-	stretch.current == true
-}
+exceeded_now if common.any_current(input.exposed.lower_exceeded)
 
 # The advice may be part of the instruction.
 advised := false if {

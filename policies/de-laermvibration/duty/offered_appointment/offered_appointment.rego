@@ -73,16 +73,9 @@ not_owed contains "at or above the upper action values the appointment is mandat
 	mandatory_now
 }
 
-starts := [stretch.from | some stretch in input.exposed.lower_exceeded; stretch.current == true]
+start := common.current_since(input.exposed.lower_exceeded)
 
-start := min(starts) if count(starts) > 0
-
-else := null
-
-mandatory_now if {
-	some stretch in input.exposed.upper_reached
-	stretch.current == true
-}
+mandatory_now if common.any_current(input.exposed.upper_reached)
 
 owed if {
 	start != null

@@ -31,7 +31,7 @@ papers := [paper | some paper in input.documents; paper.kind == "control_program
 heads := common.at(data.parameters.programme_heads, input.as_of)
 
 # Several documents of the kind add up.
-lacking := sort({head | some head in heads} - {head | some paper in papers; some head in paper.covers})
+lacking := sort({head | some head in heads} - common.covered(papers))
 
 hidden if heads == null
 
@@ -48,6 +48,6 @@ covered := null if {
 
 said := "the programme on record does not say what it holds" if {
 	hidden
-} else := sprintf("the programme does not hold: %s", [replace(concat(", ", lacking), "_", " ")]) if {
+} else := sprintf("the programme does not hold: %s", [common.in_words(lacking)]) if {
 	count(lacking) > 0
 } else := null

@@ -31,10 +31,7 @@ not_owed contains "nobody in the group has a protector at hand, which is a findi
 	input.protector_holders == 0
 }
 
-lower_exceeded_now if {
-	some stretch in input.exposed.lower_exceeded
-	stretch.current == true
-}
+lower_exceeded_now if common.any_current(input.exposed.lower_exceeded)
 
 papers := [paper | some paper in input.documents; paper.kind == "protector_selection"]
 

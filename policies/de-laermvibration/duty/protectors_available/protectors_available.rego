@@ -20,14 +20,14 @@ obligations contains {
 	"holds": input.protection != null,
 	"note": said,
 	"because": common.refs([input.protection]),
-	"facts": {"above_since": min({stretch.from | some stretch in above_now})},
+	"facts": {"above_since": common.current_since(input.exposed.lower_exceeded)},
 } if {
-	count(above_now) > 0
+	above_now
 }
 
-not_owed contains "the records do not show exposure above the lower action values now" if count(above_now) == 0
+not_owed contains "the records do not show exposure above the lower action values now" if not above_now
 
-above_now := [stretch | some stretch in input.exposed.lower_exceeded; stretch.current == true]
+above_now if common.any_current(input.exposed.lower_exceeded)
 
 said := "exposure is above the lower action values, and no protector is on record as handed over and at hand" if {
 	input.protection == null

@@ -38,11 +38,7 @@ something_to_wear if input.protection != null
 
 something_to_wear if worn != null
 
-current := {stretch.from | some stretch in input.exposed.upper_reached; stretch.current == true}
-
-since := min(current) if count(current) > 0
-
-else := null
+since := common.current_since(input.exposed.upper_reached)
 
 # A check from before the exposure began says nothing of it.
 counts if {

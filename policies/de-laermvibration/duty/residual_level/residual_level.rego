@@ -43,7 +43,4 @@ protected_now if {
 	input.protection != null
 }
 
-above_now if {
-	some stretch in input.exposed.lower_exceeded
-	stretch.current == true
-}
+above_now if common.any_current(input.exposed.lower_exceeded)

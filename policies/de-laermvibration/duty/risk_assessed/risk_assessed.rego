@@ -50,10 +50,7 @@ not_owed contains "measured below the lower action values, and nobody suspects n
 }
 
 # Noise that is suspected is assessed in writing, also where it turns out to stay below the lower action values.
-in_noise if {
-	some stretch in input.exposed.lower_reached
-	stretch.current == true
-}
+in_noise if common.any_current(input.exposed.lower_reached)
 
 in_noise if input.suspected_noisy == true
 

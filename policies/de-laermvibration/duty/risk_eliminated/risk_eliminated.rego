@@ -40,10 +40,7 @@ obligations contains {
 
 not_owed contains "the records do not show exposure at or above the lower action values now" if not lower_reached_now
 
-lower_reached_now if {
-	some stretch in input.exposed.lower_reached
-	stretch.current == true
-}
+lower_reached_now if common.any_current(input.exposed.lower_reached)
 
 considered := array.concat(
 	common.refs(input.controls),

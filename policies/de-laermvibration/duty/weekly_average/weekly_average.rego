@@ -57,10 +57,7 @@ elected if {
 	noisy_day
 }
 
-noisy_day if {
-	some stretch in input.exposed.daily_lower_reached
-	stretch.current == true
-}
+noisy_day if common.any_current(input.exposed.daily_lower_reached)
 
 papers := [paper | some paper in input.documents; paper.kind == "weekly_permission"]
 

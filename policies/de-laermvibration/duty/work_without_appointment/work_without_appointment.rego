@@ -43,10 +43,7 @@ not_owed contains "no refusal and no appointment is on record; that none was arr
 	not took_part
 }
 
-reached_now if {
-	some stretch in input.exposed.upper_reached
-	stretch.current == true
-}
+reached_now if common.any_current(input.exposed.upper_reached)
 
 appointments := [examination | some examination in input.examinations; examination.kind == "health_appointment"]
 

@@ -11,6 +11,7 @@
 #   remedy: Fence the area off, or record why that is not technically possible.
 package duty.zone_access
 
+import data.common
 import rego.v2
 
 # Where it is technically not possible, a document that says so answers the question.
@@ -26,10 +27,7 @@ obligations contains {
 
 not_owed contains "the records do not show exposure above the upper action values now" if not upper_exceeded_now
 
-upper_exceeded_now if {
-	some stretch in input.exposed.upper_exceeded
-	stretch.current == true
-}
+upper_exceeded_now if common.any_current(input.exposed.upper_exceeded)
 
 papers := [paper | some paper in input.documents; paper.kind in {"access_restriction", "zone_plan"}]
 

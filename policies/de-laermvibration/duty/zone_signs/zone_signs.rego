@@ -25,10 +25,7 @@ obligations contains {
 
 not_owed contains "the records do not show exposure above the upper action values now" if not upper_exceeded_now
 
-upper_exceeded_now if {
-	some stretch in input.exposed.upper_exceeded
-	stretch.current == true
-}
+upper_exceeded_now if common.any_current(input.exposed.upper_exceeded)
 
 papers := [paper | some paper in input.documents; paper.kind == "zone_signs"]
 

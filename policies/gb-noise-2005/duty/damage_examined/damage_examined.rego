@@ -2,7 +2,7 @@
 # title: Examination by a doctor after hearing damage was found
 # description: >-
 #   Where health surveillance finds that an employee has hearing damage that can be identified, the employer ensures
-#   that a doctor examines the employee.
+#   that a doctor examines the employee. Damage that is found again before that is no further case.
 # custom:
 #   cite: Control of Noise at Work Regulations reg 9(4)
 #   subject: worker
@@ -54,7 +54,22 @@ examined(damage) := array.concat(
 
 # Hearing damage that was found: as the outcome of an examination, or recorded as found in an audiogram. What follows
 # from it, the other duties of regulation 9(4) take from here.
-damages := array.concat(
+damages := [damage | some i, damage in findings; not said_before(i)]
+
+# Found twice on one day, or found again while no doctor has examined the worker since an earlier finding: one case.
+said_before(i) if {
+	some j, other in findings
+	j < i
+	other.date == findings[i].date
+}
+
+said_before(i) if {
+	some other in findings
+	other.date < findings[i].date
+	count([act | some act in by_doctor(other); act.date < findings[i].date]) == 0
+}
+
+findings := array.concat(
 	[{"date": e.attended_on, "ref": e.ref, "by_is": e.by_is, "examined": true} |
 		some e in input.examinations
 		e.damage == true

@@ -73,6 +73,16 @@ test_opinions_are_those_of_doctors if {
 	duty.opinions(duty.damages[0]) == [] with input as by_nurse
 }
 
+test_found_again if {
+	first := found_by("technician", [])
+	again := object.union(first, {"attended_on": "2025-06-01", "ref": "examination/e2"})
+	obligation(worker([first, again], [])).key == "2025-02-01"
+	obligation(worker([first, object.union(first, {"ref": "examination/e2"})], [])).because == ["examination/e1"]
+	examined := object.union(first, {"follow_ups": [act("damage_examined", "physician")]})
+	found := {o.key: o.holds | some o in duty.obligations} with input as worker([examined, again], [])
+	found == {"2025-02-01": true, "2025-06-01": false}
+}
+
 test_no_damage if {
 	quiet(worker([], []))
 	quiet(worker([object.union(found_by(null, []), {"damage": false})], []))

@@ -4,8 +4,8 @@
 #   Where the risk assessment shows a risk to the health of employees, they are placed under suitable health
 #   surveillance, which includes testing of their hearing. The text sets no figure and no time; HSE reads it as
 #   everybody who is regularly exposed at or above an upper exposure action value, and everybody at particular risk.
-#   An offer on record shows that the worker was placed under surveillance; whether the worker came is test-
-#   attended.
+#   An offer on record shows that the worker was placed under surveillance; whether the worker came is told by
+#   test-attended.
 # custom:
 #   cite: Control of Noise at Work Regulations reg 9(1)
 #   subject: worker

@@ -2,8 +2,8 @@
 # title: Interval between hearing tests (guidance)
 # description: >-
 #   Guidance, not law. After the baseline test hearing is tested usually every year in the first two years of
-#   employment, and every three years after that; more often if a problem is found or the risk is high, which next-
-#   test-due asks for. The Irish authority words it as one test within the year after the first. The Regulations set
+#   employment, and every three years after that; more often if a problem is found or the risk is high, which
+#   next-test-due asks for. The Irish authority words it as one test within the year after the first. The Regulations set
 #   no interval.
 # custom:
 #   cite: HSE, Health surveillance for noise (guidance)

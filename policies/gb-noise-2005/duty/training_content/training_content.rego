@@ -4,7 +4,8 @@
 #   The information, instruction and training include nine heads: the nature of the risk; the measures taken; the
 #   limit and action values; the findings of the risk assessment with an explanation; protectors and their correct
 #   use; why and how to detect and report signs of hearing damage; the entitlement to health surveillance and its
-#   purpose; safe working practices; and the collective results of health surveillance, in a form that names nobody.
+#   purpose; safe working practices; and the collective results of health surveillance, in a form that names nobody,
+#   of which there may be none below the upper exposure action values.
 #   Sessions of three years add up, since the text sets no round.
 # custom:
 #   cite: Control of Noise at Work Regulations reg 10(2)
@@ -40,6 +41,13 @@ verdict := {
 } if {
 	required == null
 } else := {
+	"holds": null,
+	"missing": ["whether there are collective results of health surveillance"],
+	"note": sprintf("the training up to %s left out collective results, and it is not known whether there are any for workers below the upper exposure action values", [input.training.date]),
+} if {
+	left_out == ["collective_results"]
+	not at_upper
+} else := {
 	"holds": false,
 	"note": sprintf("the training up to %s left out: %s", [input.training.date, common.in_words(left_out)]),
 } if {
@@ -54,6 +62,9 @@ required := common.at(data.parameters.training_heads, input.training.date)
 left_out := [head | some head in required; not head in input.training.topics]
 
 exposed if common.any_current(input.exposed.lower)
+
+# Where health surveillance is owed, and so there are results of it.
+at_upper if common.any_current(input.exposed.upper)
 
 not_owed contains "exposure is not known to be at or above a lower exposure action value" if not exposed
 

@@ -24,7 +24,7 @@ every_head := data.parameters.training_heads.values[0].value
 
 session(topics) := {"date": "2026-02-01", "ref": "training/t1", "topics": topics, "topics_unrecorded": count(topics) == 0}
 
-worker(spells, training) := {"exposed": {"lower": spells}, "training": training}
+worker(spells, training) := {"exposed": {"lower": spells, "upper": spells}, "training": training}
 
 test_every_head if obligation(worker([now], session(every_head))).holds == true
 
@@ -34,6 +34,15 @@ test_every_single_head_counts if {
 		found.holds == false
 		found.note == sprintf("the training up to 2026-02-01 left out: %s", [replace(head, "_", " ")])
 	}
+}
+
+between(topics) := object.union(worker([now], session(topics)), {"exposed": {"upper": [past]}})
+
+test_collective_results_below_the_upper_values if {
+	some_results := [head | some head in every_head; head != "collective_results"]
+	obligation(between(some_results)).holds == null
+	obligation(between([head | some head in some_results; head != "protectors"])).holds == false
+	obligation(between(every_head)).holds == true
 }
 
 test_topics_not_recorded if obligation(worker([now], session([]))).missing == ["topics of the training"]

@@ -39,10 +39,7 @@ applies if {
 	count(in_place) > 0
 }
 
-above_limit if {
-	some spell in input.exposed.limit
-	spell.current == true
-}
+above_limit if common.any_current(input.exposed.limit)
 
 in_place := [control | some control in input.controls; control.installed_on != null]
 

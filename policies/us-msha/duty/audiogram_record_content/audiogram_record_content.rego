@@ -14,6 +14,7 @@
 #   remedy: Add what the record lacks, from the personnel file and the noise surveys.
 package duty.audiogram_record_content
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -30,7 +31,7 @@ obligations contains {
 	"holds": false,
 	"note": sprintf("audiometric records that lack contents: %d (%s)", [count(incomplete), concat(", ", lacking)]),
 	"facts": {"audiograms": count(program_tests), "incomplete": count(incomplete), "lacking": lacking},
-	"because": [test.ref | some test in incomplete],
+	"because": common.refs(incomplete),
 } if {
 	count(incomplete) > 0
 }

@@ -13,6 +13,7 @@
 #   remedy: Find the missing audiogram, at the clinic or testing firm if need be, and file it.
 package duty.audiogram_records_kept
 
+import data.common
 import rego.v2
 
 obligations contains object.union(lost, {"holds": false}) if {
@@ -63,10 +64,7 @@ on_file(day) if {
 	test.date == day
 }
 
-employed if {
-	some stretch in input.employed
-	stretch.current
-}
+employed if common.any_current(input.employed)
 
 # The day after the last one.
 last_day := max([stretch.to | some stretch in input.employed; stretch.to != null])

@@ -34,7 +34,7 @@ obligations contains {
 	"key": stretch.from,
 	"lifted": sprintf("the miner declined the test that was offered on %s", [declined(stretch)[0].offered_on]),
 	"cite": "30 CFR 62.170(a)(1), 62.140 (summary table)",
-	"because": [offer.ref | some offer in declined(stretch)],
+	"because": common.refs(declined(stretch)),
 } if {
 	some stretch in input.enrolled
 	count(declined(stretch)) > 0
@@ -45,7 +45,7 @@ obligations contains {
 	"holds": null,
 	"note": "a baseline test was offered, and the record does not say what the miner answered",
 	"missing": ["the miner's answer to the offer"],
-	"because": [offer.ref | some offer in unanswered(stretch)],
+	"because": common.refs(unanswered(stretch)),
 } if {
 	some stretch in input.enrolled
 	stretch.baseline == null

@@ -16,6 +16,7 @@
 #     baseline of that ear, and record who judged it and why.
 package duty.baseline_revision
 
+import data.common
 import rego.v2
 
 # A baseline was moved.
@@ -39,7 +40,7 @@ obligations contains {
 	"note": "the next test shows the shift again",
 	"facts": {"ears": again.ears},
 	"health": again.hearing,
-	"because": [link.ref | some link in [again.shift, again, again.opinion]; link != null],
+	"because": common.refs([again.shift, again, again.opinion]),
 } if {
 	some again in input.persistent
 }

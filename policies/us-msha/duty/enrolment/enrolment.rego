@@ -16,13 +16,14 @@
 #     with the settings that the law asks for, or complete the miner's assignments.
 package duty.enrolment
 
+import data.common
 import rego.v2
 
 obligations contains {
 	"holds": false,
 	"note": "exposure is at or above the action level, but the employer's roll leaves the miner out of the program",
 	"facts": {
-		"exposed_since": min([stretch.from | some stretch in input.enrolled; stretch.current]),
+		"exposed_since": common.current_since(input.enrolled),
 		"working": input.exposure_working,
 	},
 	"because": array.concat([sprintf("worker/%s", [input.id])], deciding),
@@ -57,8 +58,7 @@ obligations contains {
 # Whoever is exposed at or above the action level today belongs in the program, whatever the roll says.
 left_out if {
 	input.on_roll == false
-	some stretch in input.enrolled
-	stretch.current
+	common.any_current(input.enrolled)
 }
 
 unknown := input.exposure_unknown.action

@@ -34,7 +34,7 @@ verdict := {"holds": false, "note": "no record shows that the evaluators were in
 	count(covered) == 0
 } else := {
 	"holds": false,
-	"note": sprintf("the document leaves out: %s", [concat(", ", [replace(item, "_", " ") | some item in left_out])]),
+	"note": sprintf("the document leaves out: %s", [common.in_words(left_out)]),
 } if {
 	count(left_out) > 0
 } else := {"holds": true}
@@ -45,7 +45,7 @@ affected if input.enrolled_ever > 0
 
 papers := [paper | some paper in input.documents; paper.kind == "instruction"]
 
-covered := {item | some paper in papers; some item in paper.covers}
+covered := common.covered(papers)
 
 asked_for := ["part_62", "test_records"]
 

@@ -63,10 +63,7 @@ not_owed contains "the group is not above the permissible exposure, or was never
 	count(reasons_not_known) == 0
 }
 
-above_limit if {
-	some spell in input.exposed.limit
-	spell.current == true
-}
+above_limit if common.any_current(input.exposed.limit)
 
 # A group that was never measured is the matter of 62.110(a), not of this duty.
 reasons_not_known := [stretch.reason |

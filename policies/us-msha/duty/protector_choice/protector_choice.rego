@@ -51,7 +51,4 @@ has_protector if {
 	input.protection != null
 }
 
-in_program_now if {
-	some spell in input.enrolled
-	spell.current == true
-}
+in_program_now if common.any_current(input.enrolled)

@@ -52,10 +52,7 @@ not_owed contains "no protector at hand, which is a finding of its own" if {
 	not has_protector
 }
 
-in_program_now if {
-	some spell in input.enrolled
-	spell.current == true
-}
+in_program_now if common.any_current(input.enrolled)
 
 has_protector if {
 	in_program_now

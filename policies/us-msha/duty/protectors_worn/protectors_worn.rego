@@ -102,10 +102,7 @@ limit_not_known := [stretch.reason |
 	common.covers(stretch, input.as_of)
 ]
 
-in_program if {
-	some spell in input.enrolled
-	spell.current == true
-}
+in_program if common.any_current(input.enrolled)
 
 waiting := [spell | some spell in input.enrolled; waits(spell); not declined(spell)]
 

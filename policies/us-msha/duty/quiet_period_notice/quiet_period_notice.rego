@@ -13,14 +13,12 @@
 #     Add the sentence to the letter or message that invites miners to the baseline test, and keep a record of it.
 package duty.quiet_period_notice
 
+import data.common
 import rego.v2
 
 obligations contains object.union(verdict, {
 	"on": input.baseline.date,
-	"because": [link.ref |
-		some link in [input.baseline, input.baseline.quiet_notice, input.baseline.late_quiet_notice]
-		link != null
-	],
+	"because": common.refs([input.baseline, input.baseline.quiet_notice, input.baseline.late_quiet_notice]),
 }) if {
 	input.baseline != null
 	input.baseline.in_program

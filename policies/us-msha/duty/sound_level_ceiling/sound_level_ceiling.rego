@@ -32,7 +32,7 @@ obligations contains {
 	"at_most": "sound_level_ceiling",
 	"note": "a highest continuous level is on record from before a change or control, and none since",
 	"missing": ["the highest continuous level as it is now"],
-	"because": [measurement.ref | some measurement in measured_before],
+	"because": common.refs(measured_before),
 	"facts": {"workers": input.workers},
 } if {
 	count(noisy) == 0

@@ -32,10 +32,7 @@ said := {
 	null: "the record of the latest training does not say whether it was certified",
 }
 
-in_program if {
-	some stretch in input.enrolled
-	stretch.current
-}
+in_program if common.any_current(input.enrolled)
 
 not_owed contains "the miner is not in the program now" if not in_program
 

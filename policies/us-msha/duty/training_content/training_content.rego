@@ -40,7 +40,7 @@ verdict := {
 	required == null
 } else := {
 	"holds": false,
-	"note": sprintf("the training of %s left out: %s", [input.training.date, concat(", ", [replace(topic, "_", " ") | some topic in left_out])]),
+	"note": sprintf("the training of %s left out: %s", [input.training.date, common.in_words(left_out)]),
 } if {
 	count(left_out) > 0
 } else := {
@@ -52,10 +52,7 @@ required := common.at(data.parameters.training_topics, input.training.date)
 
 left_out := [topic | some topic in required; not topic in input.training.topics]
 
-in_program if {
-	some stretch in input.enrolled
-	stretch.current
-}
+in_program if common.any_current(input.enrolled)
 
 not_owed contains "the miner is not in the program now" if not in_program
 

@@ -72,8 +72,7 @@ level := null if {
 
 one_of_two_is_not_enough if {
 	count(input.protection.types) > 1
-	some stretch in input.exposed.double
-	stretch.current
+	common.any_current(input.exposed.double)
 	input.protection.under_par_db != null
 	input.protection.under_par_db >= target
 }
@@ -92,10 +91,10 @@ missing := ["the personal attenuation rating of both protectors together"] if {
 
 # When it is not asked.
 
-not_owed contains "the records do not show exposure at or above the REL now" if count(now) == 0
+not_owed contains "the records do not show exposure at or above the REL now" if not in_program_now
 
 not_owed contains "no protector at hand, which is a finding of its own" if {
-	count(now) > 0
+	in_program_now
 	input.protection == null
 }
 
@@ -105,9 +104,9 @@ not_owed contains "no fit test of the protector at hand, which is a finding of i
 	input.protection.fit_test == null
 }
 
-now := [stretch | some stretch in input.enrolled; stretch.current]
+in_program_now if common.any_current(input.enrolled)
 
 has_protector if {
-	count(now) > 0
+	in_program_now
 	input.protection != null
 }

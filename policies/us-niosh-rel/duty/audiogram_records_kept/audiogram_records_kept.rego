@@ -13,6 +13,7 @@
 #     Find the missing audiogram, at the clinic or testing firm if need be, and file it.
 package duty.audiogram_records_kept
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -48,10 +49,7 @@ obligations contains {
 	count(input.audiograms) > 0
 }
 
-employed if {
-	some stretch in input.employed
-	stretch.current
-}
+employed if common.any_current(input.employed)
 
 left_on := max([stretch.to | some stretch in input.employed; stretch.to != null])
 

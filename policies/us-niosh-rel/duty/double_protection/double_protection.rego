@@ -33,15 +33,11 @@ not_owed contains "exposure is not at or above the level for double protection n
 	count(not_known) == 0
 }
 
-owed if {
-	some spell in input.exposed.double
-	spell.current == true
-}
+owed if common.any_current(input.exposed.double)
 
 # Of a worker who is not known to be in the program, enrolment tells.
 not_known := [stretch.reason |
-	some spell in input.enrolled
-	spell.current == true
+	common.any_current(input.enrolled)
 	some stretch in input.exposure_unknown.double
 	common.covers(stretch, input.as_of)
 ]
@@ -62,7 +58,7 @@ verdict := {"holds": false, "note": "exposure is at or above the level for doubl
 	type == null
 } else := {
 	"holds": false,
-	"note": sprintf("exposure is at or above the level for double protection, and only this is at hand: %s", [concat(", ", [replace(type, "_", " ") | some type in input.protection.types])]),
+	"note": sprintf("exposure is at or above the level for double protection, and only this is at hand: %s", [common.in_words(input.protection.types)]),
 }
 
 at_hand(types) := [type | some type in input.protection.types; type in types]

@@ -15,13 +15,14 @@
 #     assignments.
 package duty.enrolment
 
+import data.common
 import rego.v2
 
 obligations contains {
 	"holds": false,
 	"note": "exposure is at or above the REL, but the employer's roll leaves the worker out of the program",
 	"facts": {
-		"exposed_since": min([stretch.from | some stretch in input.enrolled; stretch.current]),
+		"exposed_since": common.current_since(input.enrolled),
 		"working": input.exposure_working,
 	},
 	"because": array.concat([sprintf("worker/%s", [input.id])], deciding),
@@ -56,8 +57,7 @@ obligations contains {
 # Whoever is exposed at or above the REL today belongs in the program, whatever the roll says.
 left_out if {
 	input.on_roll == false
-	some stretch in input.enrolled
-	stretch.current
+	common.any_current(input.enrolled)
 }
 
 unknown := input.exposure_unknown.rel

@@ -65,10 +65,7 @@ not_owed contains "the group is not at or above the REL, or was never measured" 
 	count(reasons_not_known) == 0
 }
 
-at_the_rel if {
-	some spell in input.exposed.rel
-	spell.current == true
-}
+at_the_rel if common.any_current(input.exposed.rel)
 
 # A group that was never measured is the matter of initial-assessment, not of this duty.
 reasons_not_known := [stretch.reason |

@@ -21,7 +21,7 @@ obligations contains object.union(verdict, {
 	"because": common.refs([input.protection, input.protection.fit_test]),
 	"facts": {"protector": input.protection.protector, "personal_attenuation_rating_db": input.protection.par_db},
 }) if {
-	count(now) > 0
+	in_program_now
 	input.protection != null
 	in_force
 }
@@ -49,15 +49,15 @@ verdict := {
 	"on": input.protection.fit_test.date,
 }
 
-not_owed contains "the records do not show exposure at or above the REL now" if count(now) == 0
+not_owed contains "the records do not show exposure at or above the REL now" if not in_program_now
 
 not_owed contains "no protector at hand, which is a finding of its own" if {
-	count(now) > 0
+	in_program_now
 	input.protection == null
 }
 
 not_owed contains "individual fit testing was not yet recommended" if not in_force
 
-now := [stretch | some stretch in input.enrolled; stretch.current]
+in_program_now if common.any_current(input.enrolled)
 
 in_force if common.at(data.parameters.fit_tested_target, input.as_of) != null

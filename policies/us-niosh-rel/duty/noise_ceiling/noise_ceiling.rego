@@ -33,7 +33,7 @@ obligations contains {
 obligations contains {
 	"key": sprintf("%s/peak", [measurement.id]),
 	"value": measurement.peak_db,
-	"at_most": "noise_ceiling",
+	"at_most": "peak_ceiling",
 	"on": measurement.date,
 	"note": said(measurement, measurement.peak_db, "peak level"),
 	"missing": common.missing(measurement.peak_db, "the peak level"),

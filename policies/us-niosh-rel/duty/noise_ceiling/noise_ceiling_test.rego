@@ -35,6 +35,7 @@ test_peak_of_impulses if {
 	found["m1/peak"].missing == ["the peak level"]
 	known := by_key(group(true, [{"max_dba": 110, "peak_db": 141, "peak_weighting": "C"}]))
 	known["m1/peak"].value == 141
+	known["m1/peak"].at_most == "peak_ceiling"
 	known["m1/peak"].facts.weighting == "C"
 }
 

@@ -40,7 +40,4 @@ said := "it is not known from how many models the worker could choose" if {
 	input.protection.choices_offered == null
 } else := "number of models to choose from"
 
-in_program_now if {
-	some spell in input.enrolled
-	spell.current == true
-}
+in_program_now if common.any_current(input.enrolled)

@@ -42,8 +42,7 @@ meetings := [spell.from | some stretch in tested; some spell in input.exposed.tw
 
 # Of a worker who is not known to be in the program, enrolment tells.
 not_known := [open.reason |
-	some stretch in tested
-	stretch.current
+	common.any_current(tested)
 	some open in input.exposure_unknown.twice
 	common.covers(open, input.as_of)
 ]

@@ -51,10 +51,7 @@ not_owed contains "signs are posted, whether or not they are needed" if {
 	count(signs) > 0
 }
 
-noisy if {
-	some spell in input.exposed.rel
-	spell.current
-}
+noisy if common.any_current(input.exposed.rel)
 
 not_known := [open.reason | some open in input.exposure_unknown.rel; common.covers(open, input.as_of)]
 
