@@ -63,6 +63,21 @@ func TestAfterwards(t *testing.T) {
 	assert.Empty(t, judge(t, "2024-01-01", records...).worker().Audiograms[1].FollowUps, "only where the measures ask for it")
 }
 
+// What follows a test of which the outcome alone is on record is not of the audiogram before it, unless it names that.
+func TestAfterwardsOfAnOutcomeAlone(t *testing.T) {
+	m := osha().Measures
+	m.Hearing.Afterwards = true
+	named := follow("referral", "a1", "2021-04-01")
+	w := asked{asOf: "2024-01-01", measures: m}.judge(t, noisy(tested("a1", "2020-03-01", "baseline", 10, 10),
+		examined("e1", "hearing_test", "", "2021-03-01"), examined("e2", "health_appointment", "", "2020-04-01"),
+		follow("retraining", "", "2020-05-01"), follow("medical_opinion", "", "2021-03-01"), named, notice("result", "2021-03-02", record.Yes), notice("result", "2020-03-05", record.Yes))...).worker()
+	require.Len(t, w.Audiograms[0].FollowUps, 2)
+	assert.Equal(t, "retraining", w.Audiograms[0].FollowUps[0].Type)
+	assert.Equal(t, "referral", w.Audiograms[0].FollowUps[1].Type)
+	require.Len(t, w.Audiograms[0].Notices, 1)
+	assert.Equal(t, day("2020-03-05"), w.Audiograms[0].Notices[0].Date)
+}
+
 // Without a shift in the measures no test is compared, and nothing fails.
 func TestLawWithoutAShift(t *testing.T) {
 	m := osha().Measures

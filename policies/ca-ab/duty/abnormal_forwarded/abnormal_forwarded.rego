@@ -36,7 +36,7 @@ first(test) := {"date": list[0][0], "ref": list[0][1]} if {
 # Tests that are abnormal: by the former definitions, by what was done or told after them, or by the outcome that the
 # clinic gave.
 abnormal := array.concat(
-	[{"id": a.id, "date": a.date, "ref": a.ref, "definitions": shown(a), "done": own(a, a.follow_ups), "told": told_of(a)} |
+	[{"id": a.id, "date": a.date, "ref": a.ref, "definitions": shown(a), "done": a.follow_ups, "told": told_of(a)} |
 		some a in input.audiograms
 		a.in_program
 		count(shown(a)) + count(marks(a)) > 0
@@ -55,27 +55,13 @@ found_abnormal(e) if e.damage == true
 found_abnormal(e) if e.result in ["early_signs", "concern", "worse", "referred"]
 
 marks(audiogram) := array.concat(
-	[done.ref | some done in own(audiogram, audiogram.follow_ups); done.kind in ["referral", "history_forwarded", "medical_opinion"]],
-	[notice.ref | some notice in own(audiogram, audiogram.notices); notice.about in ["abnormal_result", "shift"]],
+	[done.ref | some done in audiogram.follow_ups; done.kind in ["referral", "history_forwarded", "medical_opinion"]],
+	[notice.ref | some notice in audiogram.notices; notice.about in ["abnormal_result", "shift"]],
 )
 
-# What was done or told after an audiogram and before the next test of which the outcome alone is on record.
-own(audiogram, list) := [item |
-	some item in list
-	every e in input.examinations {
-		not comes_between(e, audiogram, item)
-	}
-]
-
-comes_between(e, audiogram, item) if {
-	e.kind == "hearing_test"
-	e.attended_on > audiogram.date
-	e.attended_on <= item.date
-}
-
 told_of(audiogram) := array.concat(
-	[[notice.date, notice.ref] | some notice in own(audiogram, audiogram.notices); notice.about in ["abnormal_result", "shift"]],
-	[[done.date, done.ref] | some done in own(audiogram, audiogram.follow_ups); done.kind == "worker_informed"],
+	[[notice.date, notice.ref] | some notice in audiogram.notices; notice.about in ["abnormal_result", "shift"]],
+	[[done.date, done.ref] | some done in audiogram.follow_ups; done.kind == "worker_informed"],
 )
 
 results_of(e) := array.concat(

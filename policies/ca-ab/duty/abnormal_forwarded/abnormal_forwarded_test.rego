@@ -63,16 +63,6 @@ test_outcome_of_the_same_day_counts_once if {
 	{o.key | some o in abnormal_forwarded.obligations} == {"a1"} with input as both
 }
 
-test_what_follows_a_later_outcome_is_not_of_an_earlier_test if {
-	later := object.union(examination, {"attended_on": "2022-03-20", "result": null})
-	every test in [told, referred] {
-		normal := object.union(test, {"schemes": audiogram("2022-03-05", no, no).schemes})
-		dossier := object.union(worker([normal]), {"examinations": [later]})
-		count(abnormal_forwarded.obligations) == 0 with input as dossier
-		count(abnormal_forwarded.not_owed) == 1 with input as dossier
-	}
-}
-
 test_outcomes if {
 	count(abnormal_forwarded.not_owed) == 0 with input as by_outcome({})
 	count(abnormal_forwarded.not_owed) == 0 with input as by_outcome({"result": null, "damage": true})

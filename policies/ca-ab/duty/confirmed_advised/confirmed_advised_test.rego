@@ -54,13 +54,6 @@ test_advised if {
 	{o.health.definitions_met | some o in confirmed_advised.obligations} == {["abnormal_low"]} with input as worker([object.union(told, {"follow_ups": [opinion]})])
 }
 
-test_opinion_on_a_later_outcome_is_not_of_an_earlier_test if {
-	later := object.union(examination, {"attended_on": "2022-03-20", "result": null})
-	dossier := object.union(worker([object.union(told, {"follow_ups": [opinion]})]), {"examinations": [later]})
-	answers(dossier) == set()
-	count(confirmed_advised.not_owed) == 1 with input as dossier
-}
-
 test_opinion_of_unknown_profession_counts if {
 	answers(by_outcome({"follow_ups": [done("medical_opinion", null)]})) == {["e1", "2022-04-02", null]}
 	answers(by_outcome({"follow_ups": [done("medical_opinion", "technician")]})) == set()

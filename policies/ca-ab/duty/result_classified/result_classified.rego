@@ -74,27 +74,13 @@ names(test) := ["abnormal_low", "abnormal_high", "one_sided"] if {
 classification(test) := {"date": marks[0][0], "ref": marks[0][1]} if {
 	marks := sort(array.concat(
 		array.concat(
-			[[done.date, done.ref] | some done in own(test, test.follow_ups)],
-			[[notice.date, notice.ref] | some notice in own(test, test.notices); notice.about in ["result", "abnormal_result", "shift"]],
+			[[done.date, done.ref] | some done in test.follow_ups],
+			[[notice.date, notice.ref] | some notice in test.notices; notice.about in ["result", "abnormal_result", "shift"]],
 		),
 		[[day, test.ref] | some day in [test.reviewed_on, test.compared_on]; day != null],
 	))
 	count(marks) > 0
 } else := null
-
-# What was done or told after an audiogram and before the next test of which the outcome alone is on record.
-own(audiogram, list) := [item |
-	some item in list
-	every e in input.examinations {
-		not comes_between(e, audiogram, item)
-	}
-]
-
-comes_between(e, audiogram, item) if {
-	e.kind == "hearing_test"
-	e.attended_on > audiogram.date
-	e.attended_on <= item.date
-}
 
 # The definitions of the former section 1 that a test meets, in either ear.
 shown(test) := sort({name |

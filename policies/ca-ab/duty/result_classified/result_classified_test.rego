@@ -49,13 +49,6 @@ test_later_the_technician_is_asked if {
 	answers(object.union(later, {"notices": [{"date": "2023-04-05", "ref": "notice/n", "about": "quiet_period"}]})) == {null}
 }
 
-test_what_follows_a_later_outcome_is_not_of_an_earlier_test if {
-	told := object.union(audiogram("2023-03-31", open, open), {"notices": [{"date": "2024-04-05", "ref": "notice/n", "about": "result"}]})
-	outcome := {"kind": "hearing_test", "attended_on": "2024-04-01"}
-	{o.by | some o in result_classified.obligations} == {null} with input as object.union(worker([told]), {"examinations": [outcome]})
-	{o.by.date | some o in result_classified.obligations} == {"2024-04-05"} with input as object.union(worker([told]), {"examinations": [object.union(outcome, {"attended_on": "2024-04-06"})]})
-}
-
 test_not_owed if {
 	outside := object.union(audiogram("2023-03-30", no, no), {"in_program": false})
 	holds(outside) == set()

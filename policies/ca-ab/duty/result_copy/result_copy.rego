@@ -55,7 +55,7 @@ alone := [e |
 
 told_of(audiogram) := sort(array.concat(
 	[[notice.date, notice.ref] |
-		some notice in own(audiogram, audiogram.notices)
+		some notice in audiogram.notices
 		notice.about in ["result", "abnormal_result", "shift"]
 	],
 	results_of(audiogram.date),
@@ -66,17 +66,3 @@ results_of(day) := [[e.results_on, e.ref] |
 	e.attended_on == day
 	e.results_on != null
 ]
-
-# What was done or told after an audiogram and before the next test of which the outcome alone is on record.
-own(audiogram, list) := [item |
-	some item in list
-	every e in input.examinations {
-		not comes_between(e, audiogram, item)
-	}
-]
-
-comes_between(e, audiogram, item) if {
-	e.kind == "hearing_test"
-	e.attended_on > audiogram.date
-	e.attended_on <= item.date
-}

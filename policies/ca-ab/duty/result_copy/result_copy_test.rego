@@ -31,11 +31,6 @@ test_told if {
 	{o.because | some o in result_copy.obligations} == {["audiogram/a1", "notice/n"]} with input as worker([object.union(audiogram, {"notices": [notice("result")]})], [])
 }
 
-test_what_follows_a_later_outcome_is_not_of_an_earlier_test if {
-	told := object.union(audiogram, {"notices": [notice("result")]})
-	holds(worker([told], [object.union(examination, {"attended_on": "2024-03-20"})])) == {["a1", false], ["e1", false]}
-}
-
 test_outcome_of_the_same_day if {
 	same := object.union(examination, {"attended_on": "2024-03-05", "results_on": "2024-03-06"})
 	holds(worker([audiogram], [same])) == {["a1", true]}
