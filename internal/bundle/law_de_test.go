@@ -19,7 +19,7 @@ const (
 	deNoise      = "LärmVibrationsArbSchV "
 	deKs         = "DGUV Information 212-024 8.3"
 	deNoiseFrom  = "2007-03-09" // BGBl I 2007 p. 261; the day is from memory
-	deHealthFrom = "2008-12-24" // BGBl I 2008 p. 2768; the day is from a lecture of an authority
+	deHealthFrom = "2008-12-24" // BGBl I 2008 p. 2768; the day is from a presentation by an authority
 	deRules2017  = "2017-09-05" // GMBl 2017 no 34/35
 )
 
