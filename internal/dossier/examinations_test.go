@@ -123,3 +123,17 @@ func TestAreas(t *testing.T) {
 	assert.False(t, dossier.HasSeries("site", "document.riskassessment"))
 	assert.False(t, dossier.HasSeries("worker", "document.risk_assessment"))
 }
+
+// A document that names a group or an area but no site belongs to the site of that.
+func TestDocumentsWithoutASite(t *testing.T) {
+	on := day("2021-01-01")
+	j := judge(t, "2024-01-01", noisy(&record.Group{Group: "g9", Site: "s9", Area: "far"},
+		&record.Document{Type: "schedule", Group: "g1", Date: on}, &record.Document{Type: "zone_plan", Area: "hall-g1", Date: on},
+		&record.Document{Type: "competence", Date: on}, &record.Document{Type: "logbook", Group: "g9", Date: on},
+		&record.Document{Type: "calculator", Area: "far", Date: on}, &record.Document{Type: "transfer", Group: "nowhere", Date: on})...)
+	kinds := []string{}
+	for _, d := range j.siteDossier().Documents {
+		kinds = append(kinds, d.Type)
+	}
+	assert.ElementsMatch(t, []string{"schedule", "zone_plan", "competence"}, kinds)
+}

@@ -281,13 +281,23 @@ func (b *Builder) SiteDossier(u *Usage) *File {
 	}
 	file := &File{Kind: KindSite, ID: d.ID, Site: d.ID, Input: d, Series: map[string][]Link{}, Refs: refs}
 	d.Documents = b.documents(file, func(doc *record.Document) bool {
-		return doc.Site == b.Place.ID || doc.Site == "" && doc.Group == "" && doc.Area == ""
+		return doc.Site == b.Place.ID || doc.Site == "" && b.belongs(doc)
 	})
 	for _, year := range slices.Sorted(maps.Keys(u.logs)) {
 		d.LogYears = append(d.LogYears, b.logYear(year, u.logs[year], d.Documents, refs))
 	}
 	u.observeSite(file)
 	return file
+}
+
+// belongs says whether a document that names no site belongs to this one: its group or area is of the site, or it names
+// neither.
+func (b *Builder) belongs(doc *record.Document) bool {
+	if doc.Group != "" {
+		g := b.Registers.Groups[doc.Group]
+		return g != nil && g.Site == b.Place.ID
+	}
+	return doc.Area == "" || slices.Contains(b.areaIDs(), doc.Area)
 }
 
 func (b *Builder) logYear(year int, y *logYear, documents []Document, refs Refs) LogYear {
