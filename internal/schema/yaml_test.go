@@ -62,7 +62,15 @@ func TestBundleFiles(t *testing.T) {
 		if err != nil {
 			t.Fatal(err)
 		}
-		if _, problems := YAML(filepath.Base(filepath.Dir(path)), path, content); problems != nil {
+		name := filepath.Base(filepath.Dir(path))
+		about, err := os.ReadFile(filepath.Join(filepath.Dir(filepath.Dir(path)), "about", "data.yaml"))
+		if err != nil {
+			t.Fatal(err)
+		}
+		if name == "measures" && strings.Contains(string(about), "\nextends:") {
+			continue // it says only what differs; the loader checks what comes of it
+		}
+		if _, problems := YAML(name, path, content); problems != nil {
 			t.Error(problems)
 		}
 	}
