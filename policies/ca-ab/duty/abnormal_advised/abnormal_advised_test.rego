@@ -77,3 +77,15 @@ test_normal_or_outside if {
 		count(abnormal_advised.not_owed) == 1 with input as worker([test])
 	}
 }
+
+test_before_the_law_or_outside_noise if {
+	every dossier in [
+		worker([object.union(told, {"date": "2009-06-30", "follow_ups": [done("medical_opinion", "physician")]})]),
+		by_outcome({"attended_on": "2019-12-31", "follow_ups": [done("medical_opinion", "physician")]}),
+	] {
+		count(abnormal_advised.obligations) == 0 with input as dossier
+		count(abnormal_advised.not_owed) == 1 with input as dossier
+	}
+	first_days := object.union(told, {"date": "2009-07-01", "follow_ups": [done("medical_opinion", "physician")]})
+	count(abnormal_advised.obligations) == 1 with input as worker([first_days])
+}

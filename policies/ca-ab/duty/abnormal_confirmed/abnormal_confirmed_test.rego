@@ -50,10 +50,16 @@ test_no_opinion if {
 }
 
 test_opinion if {
-	every by in [null, "physician", "otolaryngologist", "audiologist"] {
+	every by in ["physician", "otolaryngologist", "audiologist"] {
 		answers(worker([object.union(told, {"follow_ups": [done("medical_opinion", by)]})])) == {["a1", link]}
 	}
 	answers(by_outcome({"follow_ups": [done("medical_opinion", "physician")]})) == {["e1", link]}
+}
+
+test_opinion_of_unknown_profession_does_not_count if {
+	unknown := worker([object.union(told, {"follow_ups": [done("medical_opinion", null)]})])
+	answers(unknown) == {["a1", null]}
+	{o.note | some o in abnormal_confirmed.obligations} == {"the test of 2022-03-05 is abnormal; the profession of whoever gave the opinion of 2022-04-02 is not on record"} with input as unknown
 }
 
 test_opinion_of_a_technician_does_not_count if {
@@ -79,4 +85,16 @@ test_normal_or_outside if {
 		count(abnormal_confirmed.obligations) == 0 with input as worker([test])
 		count(abnormal_confirmed.not_owed) == 1 with input as worker([test])
 	}
+}
+
+test_before_the_law_or_outside_noise if {
+	every dossier in [
+		worker([object.union(told, {"date": "2009-06-30", "follow_ups": [done("medical_opinion", "physician")]})]),
+		by_outcome({"attended_on": "2019-12-31", "follow_ups": [done("medical_opinion", "physician")]}),
+	] {
+		count(abnormal_confirmed.obligations) == 0 with input as dossier
+		count(abnormal_confirmed.not_owed) == 1 with input as dossier
+	}
+	first_days := object.union(told, {"date": "2009-07-01", "follow_ups": [done("medical_opinion", "physician")]})
+	count(abnormal_confirmed.obligations) == 1 with input as worker([first_days])
 }

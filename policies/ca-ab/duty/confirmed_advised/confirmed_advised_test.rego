@@ -72,3 +72,15 @@ test_outcome_of_the_same_day_counts_once if {
 	both := object.union(worker([object.union(audiogram("2024-03-05", yes, no), {"follow_ups": [opinion]})]), {"examinations": [object.union(examination, {"follow_ups": [opinion]})]})
 	{o.key | some o in confirmed_advised.obligations} == {"a1"} with input as both
 }
+
+test_before_the_law_or_outside_noise if {
+	every dossier in [
+		worker([object.union(told, {"date": "2009-06-30", "follow_ups": [done("medical_opinion", "physician")]})]),
+		by_outcome({"attended_on": "2019-12-31", "follow_ups": [done("medical_opinion", "physician")]}),
+	] {
+		count(confirmed_advised.obligations) == 0 with input as dossier
+		count(confirmed_advised.not_owed) == 1 with input as dossier
+	}
+	first_days := object.union(told, {"date": "2009-07-01", "follow_ups": [done("medical_opinion", "physician")]})
+	count(confirmed_advised.obligations) == 1 with input as worker([first_days])
+}

@@ -27,14 +27,25 @@ obligations contains {
 }
 
 obligations contains {
-	"key": content,
-	"holds": held(content),
-	"note": note(content),
-	"missing": common.missing(held(content), "what the program covers"),
+	"key": "contents",
+	"holds": null,
+	"note": "it is not known what the program covers",
+	"missing": ["what the program covers"],
 	"because": common.refs(papers),
 } if {
 	owed
 	count(papers) > 0
+	count(covered) == 0
+}
+
+obligations contains {
+	"key": content,
+	"holds": content in covered,
+	"note": note(content),
+	"because": common.refs(papers),
+} if {
+	owed
+	count(covered) > 0
 	some content in common.at(data.parameters.program_contents, input.as_of)
 }
 
@@ -44,17 +55,8 @@ owed if input.enrolled_now > 0
 
 covered := common.covered(papers)
 
-held(content) if content in covered
-
-held(content) := false if {
-	count(covered) > 0
-	not content in covered
-}
-
-held(_) := null if count(covered) == 0
-
 note(content) := sprintf("the program holds nothing on %s", [replace(content, "_", " ")]) if {
-	held(content) == false
+	not content in covered
 } else := null
 
 papers := [paper |

@@ -16,7 +16,7 @@ import rego.v2
 
 obligations contains {
 	"every": "program_review_interval",
-	"during": {"from": papers[0].date, "to": null},
+	"during": {"from": max([papers[0].date, data.parameters.program_review_interval.values[0].from]), "to": null},
 	"by": ["document.hearing_conservation_programme", "document.written_program"],
 	"because": [papers[0].ref],
 } if {

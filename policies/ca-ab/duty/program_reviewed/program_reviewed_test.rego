@@ -14,6 +14,11 @@ test_every_year_since_the_program if {
 	count(program_reviewed.not_owed) == 0 with input as site([program], 4)
 }
 
+test_program_from_before_the_law if {
+	some o in program_reviewed.obligations with input as site([object.union(program, {"date": "2008-02-10"})], 4)
+	o.during.from == "2009-07-01"
+}
+
 test_not_owed if {
 	every dossier in [site([], 4), site([program], 0)] {
 		count(program_reviewed.obligations) == 0 with input as dossier

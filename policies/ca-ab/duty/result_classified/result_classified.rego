@@ -20,14 +20,16 @@ import rego.v2
 obligations contains {
 	"key": test.id,
 	"on": test.date,
-	"holds": decided(test),
-	"missing": common.missing(decided(test), "the thresholds that the definitions ask for"),
+	"holds": verdict,
+	"missing": common.missing(verdict, "the thresholds that the definitions ask for"),
 	"note": sprintf("test of %s, by the definitions that held on that day", [test.date]),
 	"because": [test.ref],
-	"health": {"definitions_met": shown(test)},
+	"health": {"definitions_met": met},
 } if {
 	some test in tests
-	defined(test)
+	defined(test.date)
+	met := shown(test.schemes)
+	verdict := decided(met, undecided(test.schemes, names(test.ref)))
 }
 
 obligations contains {
@@ -39,36 +41,38 @@ obligations contains {
 	"because": [test.ref],
 } if {
 	some test in tests
-	not defined(test)
+	not defined(test.date)
 }
 
 not_owed contains "no hearing test with thresholds under the program is on record" if count(tests) == 0
 
-tests := [a | some a in input.audiograms; a.in_program]
+tests := [a | some a in input.audiograms; a.in_program; a.date >= first_day]
 
-defined(test) if common.at(data.parameters.abnormal_low, test.date) != null
+# Tests from before the law are not asked about.
+first_day := data.parameters.baseline_time.values[0].from
+
+defined(day) if common.at(data.parameters.abnormal_low, day) != null
 
 # One definition that is met decides; without one all must be refuted. The baseline itself can show no shift.
-decided(test) if count(shown(test)) > 0
+decided(met, _) if count(met) > 0
 
-decided(test) if {
-	count(shown(test)) == 0
-	count(undecided(test)) == 0
+decided(met, open) if {
+	count(met) == 0
+	count(open) == 0
 }
 
-decided(test) := null if {
-	count(shown(test)) == 0
-	count(undecided(test)) > 0
+decided(met, open) := null if {
+	count(met) == 0
+	count(open) > 0
 }
 
-undecided(test) := {name |
-	some name in names(test)
-	some ear in ["left", "right"]
-	test.schemes[name][ear] == null
+undecided(schemes, asked) := {name |
+	some name in asked
+	schemes[name][_] == null
 }
 
-names(test) := ["abnormal_low", "abnormal_high", "one_sided"] if {
-	test.ref == input.baseline.ref
+names(ref) := ["abnormal_low", "abnormal_high", "one_sided"] if {
+	ref == input.baseline.ref
 } else := ["abnormal_low", "abnormal_high", "one_sided", "abnormal_shift"]
 
 classification(test) := {"date": marks[0][0], "ref": marks[0][1]} if {
@@ -83,8 +87,7 @@ classification(test) := {"date": marks[0][0], "ref": marks[0][1]} if {
 } else := null
 
 # The definitions of the former section 1 that a test meets, in either ear.
-shown(test) := sort({name |
+shown(schemes) := sort({name |
 	some name in ["abnormal_low", "abnormal_high", "one_sided", "abnormal_shift"]
-	some ear in ["left", "right"]
-	test.schemes[name][ear] == true
+	schemes[name][_] == true
 })

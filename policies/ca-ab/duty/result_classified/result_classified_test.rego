@@ -53,4 +53,8 @@ test_not_owed if {
 	outside := object.union(audiogram("2023-03-30", no, no), {"in_program": false})
 	holds(outside) == set()
 	count(result_classified.not_owed) == 1 with input as worker([outside])
+	earlier := audiogram("2009-06-30", open, open)
+	holds(earlier) == set()
+	count(result_classified.not_owed) == 1 with input as worker([earlier])
+	holds(audiogram("2009-07-01", no, no)) == {true}
 }

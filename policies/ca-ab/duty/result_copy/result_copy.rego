@@ -35,34 +35,41 @@ note(test) := sprintf("no record shows that the worker was given the result of t
 
 # Hearing tests under the program: those with thresholds, and those of which the outcome alone is on record.
 tests := array.concat(
-	[{"id": a.id, "date": a.date, "ref": a.ref, "told": told_of(a)} |
+	[{"id": a.id, "date": a.date, "ref": a.ref, "told": told_of(a.notices, a.date)} |
 		some a in input.audiograms
 		a.in_program
+		a.date >= first_day
 	],
 	[{"id": e.id, "date": e.attended_on, "ref": e.ref, "told": results_of(e.attended_on)} |
 		some e in alone
 	],
 )
 
+# Tests from before the law are not asked about.
+first_day := data.parameters.test_record_retention.values[0].from
+
+with_thresholds := {a.date | some a in input.audiograms}
+
 alone := [e |
 	some e in input.examinations
 	e.kind == "hearing_test"
 	e.attended_on != null
-	not e.attended_on in {a.date | some a in input.audiograms}
+	not e.attended_on in with_thresholds
 	some spell in input.enrolled
 	common.covers(spell, e.attended_on)
 ]
 
-told_of(audiogram) := sort(array.concat(
+told_of(notices, day) := sort(array.concat(
 	[[notice.date, notice.ref] |
-		some notice in audiogram.notices
+		some notice in notices
 		notice.about in ["result", "abnormal_result", "shift"]
 	],
-	results_of(audiogram.date),
+	results_of(day),
 ))
 
 results_of(day) := [[e.results_on, e.ref] |
 	some e in input.examinations
+	e.kind == "hearing_test"
 	e.attended_on == day
 	e.results_on != null
 ]

@@ -34,10 +34,14 @@ test_told if {
 test_outcome_of_the_same_day if {
 	same := object.union(examination, {"attended_on": "2024-03-05", "results_on": "2024-03-06"})
 	holds(worker([audiogram], [same])) == {["a1", true]}
+	holds(worker([audiogram], [object.union(same, {"kind": "health_appointment"})])) == {["a1", false]}
 }
+
+test_first_day_of_the_law if holds(worker([object.union(audiogram, {"date": "2009-07-01"})], [])) == {["a1", false]}
 
 test_not_owed if {
 	every dossier in [
+		worker([object.union(audiogram, {"date": "2009-06-30"})], []),
 		worker([object.union(audiogram, {"in_program": false})], []), worker([], [object.union(examination, {"attended_on": null})]),
 		worker([], [object.union(examination, {"attended_on": "2019-12-31"})]), worker([], [object.union(examination, {"kind": "health_appointment"})]),
 	] {

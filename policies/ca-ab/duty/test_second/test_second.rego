@@ -2,7 +2,7 @@
 # title: Second test
 # description: >-
 #   The worker is tested again not more than 12 months after the initial baseline test. A record that the test was
-#   done is enough.
+#   done is enough. After a baseline from before the law the 12 months begin with its first day.
 # custom:
 #   cite: OHS Code, s. 223(1)(b)
 #   subject: worker
@@ -17,7 +17,7 @@ import rego.v2
 
 obligations contains {
 	"key": done[0][0],
-	"after": done[0][0],
+	"after": max([done[0][0], data.parameters.second_test_time.values[0].from]),
 	"within": "second_test_time",
 	"no_sooner_than": stretches[0].from,
 	"by": link,

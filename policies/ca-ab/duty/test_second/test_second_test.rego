@@ -38,6 +38,11 @@ test_first_stretch_that_is_not_over_counts if {
 	answers(worker([spell("2018-01-01", "2019-01-01"), spell("2020-01-01", "2022-01-01"), spell("2023-01-01", null)], [audiogram("2019-06-01")], [])) == {["2019-06-01", null, "2020-01-01", "2022-01-01"]}
 }
 
+test_baseline_from_before_the_law if {
+	answers(worker([spell("2009-07-01", null)], [audiogram("2005-03-09")], [])) == {["2009-07-01", null, "2009-07-01", null]}
+	answers(worker([spell("2009-07-01", null)], [audiogram("2009-07-02")], [])) == {["2009-07-02", null, "2009-07-01", null]}
+}
+
 test_not_owed if {
 	every dossier in [worker([now], [], []), worker([], [audiogram("2020-03-02")], []), worker([spell("2018-01-01", "2019-01-01")], [audiogram("2019-01-01")], [])] {
 		answers(dossier) == set()

@@ -27,7 +27,15 @@ not_owed contains "the area is not known to be above the limits now" if not abov
 
 above if common.any_current(input.exposed.limit)
 
-signs := [paper | some paper in input.documents; paper.kind == "zone_signs"]
+# Signs that are up: those taken down again do not count.
+signs := [paper | some paper in input.documents; paper.kind == "zone_signs"; up(paper)]
+
+up(paper) if paper.posted_to == null
+
+up(paper) if {
+	paper.posted_to != null
+	paper.posted_to >= input.as_of
+}
 
 note := "no record shows warning signs for the area" if {
 	count(signs) == 0

@@ -18,13 +18,17 @@ test_educated if {
 }
 
 test_lacking if {
-	holds(worker(null)) == {["noise_effects", false], ["noise_controls", false], ["protectors", false]}
+	holds(worker(null)) == {["training", false]}
 	holds(worker(session(["protectors"], false))) == {["noise_effects", false], ["noise_controls", false], ["protectors", true]}
-	some o in worker_education.obligations with input as worker(null)
+	some o in worker_education.obligations with input as worker(session(["protectors"], false))
 	o.note == "no training on record covers noise controls"
 }
 
-test_topics_not_recorded if holds(worker(session([], true))) == {["noise_effects", null], ["noise_controls", null], ["protectors", null]}
+test_topics_not_recorded if {
+	holds(worker(session([], true))) == {["topics", null]}
+	holds(worker(session(["protectors"], true))) == {["topics", null], ["protectors", true]}
+	holds(worker(session(["noise_effects", "noise_controls", "protectors"], true))) == {["noise_effects", true], ["noise_controls", true], ["protectors", true]}
+}
 
 test_not_owed if {
 	every spells in [[], [{"from": "2020-01-01", "to": "2021-01-01", "current": false}]] {

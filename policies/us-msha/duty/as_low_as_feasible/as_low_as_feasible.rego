@@ -34,14 +34,35 @@ not_owed contains "no control is in place, which is the matter of feasible-contr
 	count(in_place) == 0
 }
 
+not_owed contains "a feasible control is not in place yet, which is the matter of feasible-controls" if {
+	above_limit
+	count(in_place) > 0
+	pending
+}
+
 applies if {
 	above_limit
 	count(in_place) > 0
+	not pending
 }
 
 above_limit if common.any_current(input.exposed.limit)
 
 in_place := [control | some control in input.controls; control.installed_on != null]
+
+# Found feasible and not in place, with no later record on the same control.
+pending if {
+	some i, control in input.controls
+	control.feasible == "yes"
+	control.installed_on == null
+	not replaced(i)
+}
+
+replaced(i) if {
+	some j, later in input.controls
+	j > i
+	later.what == input.controls[i].what
+}
 
 # A study since the last control was put in place that found nothing more to be feasible.
 studies := [control |

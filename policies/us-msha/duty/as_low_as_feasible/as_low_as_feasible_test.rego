@@ -45,3 +45,11 @@ test_not_above_the_limit if {
 	}
 	count(as_low_as_feasible.not_owed) == 0 with input as group(above, [enclosure])
 }
+
+test_feasible_control_that_is_not_in_place_comes_first if {
+	planned := {"date": "2024-06-01", "ref": "control/cab", "what": "cab", "feasible": "yes", "installed_on": null}
+	waits := group(above, [enclosure, planned])
+	count(as_low_as_feasible.obligations) == 0 with input as waits
+	as_low_as_feasible.not_owed == {"a feasible control is not in place yet, which is the matter of feasible-controls"} with input as waits
+	asked(group(above, [enclosure, planned, object.union(planned, {"date": "2024-07-01", "installed_on": "2024-07-01"})])).by == null
+}

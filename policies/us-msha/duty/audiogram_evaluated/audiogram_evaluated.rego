@@ -23,15 +23,35 @@ obligations contains object.union(verdict(test), {
 	some test in program_tests
 }
 
-program_tests := [test | some test in input.audiograms; test.in_program]
+# Of tests from before the law began nothing is owed.
+program_tests := [test |
+	some test in input.audiograms
+	test.in_program
+	test.date >= data.parameters.results_time.values[0].from
+]
 
 evaluators := {"physician", "otolaryngologist", "audiologist", "technician"}
 
 verdict(test) := {
 	"after": test.date,
 	"within": "results_time",
+	"by": {"date": test.reviewed_on, "ref": test.ref},
+} if {
+	test.reviewed_on != null
+	test.reviewer_is in evaluators
+} else := {
+	"after": test.date,
+	"within": "results_time",
 	"by": null,
 	"note": sprintf("no evaluation of the audiogram of %s is on record", [test.date]),
+} if {
+	test.reviewed_on == null
+	test.reviewer_named == false
+} else := {
+	"holds": null,
+	"on": test.date,
+	"note": sprintf("an evaluator of the audiogram of %s is on record, and no day", [test.date]),
+	"missing": ["the day of the evaluation"],
 } if {
 	test.reviewed_on == null
 } else := {
@@ -45,12 +65,6 @@ verdict(test) := {
 	"holds": false,
 	"on": test.date,
 	"note": sprintf("who evaluated the audiogram of %s is neither physician, audiologist nor technician", [test.date]),
-} if {
-	not test.reviewer_is in evaluators
-} else := {
-	"after": test.date,
-	"within": "results_time",
-	"by": {"date": test.reviewed_on, "ref": test.ref},
 }
 
 not_owed contains "there is no audiogram under the program" if count(program_tests) == 0

@@ -11,6 +11,7 @@ worker(change) := {"audiograms": [object.union(
 		"in_program": true,
 		"reviewed_on": "2024-03-10",
 		"reviewer_is": "audiologist",
+		"reviewer_named": true,
 		"hearing": null,
 	},
 	change,
@@ -32,7 +33,7 @@ test_evaluated if {
 }
 
 test_not_evaluated if {
-	found := obligation(worker({"reviewed_on": null, "reviewer_is": null}))
+	found := obligation(worker({"reviewed_on": null, "reviewer_is": null, "reviewer_named": false}))
 	found.by == null
 	found.within == "results_time"
 }
@@ -45,4 +46,16 @@ test_no_test_under_the_program if {
 	audiogram_evaluated.obligations == set() with input as worker({"in_program": false})
 	count(audiogram_evaluated.not_owed) == 1 with input as worker({"in_program": false})
 	count(audiogram_evaluated.not_owed) == 0 with input as worker({})
+}
+
+test_day_of_the_evaluation_not_recorded if {
+	found := obligation(worker({"reviewed_on": null}))
+	found.holds == null
+	found.missing == ["the day of the evaluation"]
+}
+
+test_test_from_before_the_law_began if {
+	count(audiogram_evaluated.obligations) == 0 with input as worker({"date": "2000-09-12"})
+	count(audiogram_evaluated.not_owed) == 1 with input as worker({"date": "2000-09-12"})
+	obligation(worker({"date": "2000-09-13"})).after == "2000-09-13"
 }

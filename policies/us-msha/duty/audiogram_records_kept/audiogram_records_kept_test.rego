@@ -12,6 +12,7 @@ attended(kind, day) := {"id": "e1", "ref": "examination/e1", "kind": kind, "atte
 worker(change) := object.union(
 	{
 		"employed": [{"from": "2020-01-01", "to": null, "current": true}],
+		"enrolled": [{"from": "2020-01-01", "to": null, "current": true}],
 		"missing_audiograms": [],
 		"examinations": [],
 		"audiograms": [audiogram("2024-03-05")],
@@ -47,7 +48,9 @@ test_lost_of_who_was_hired_again if {
 
 test_tested_and_not_on_file if {
 	found := obligation(worker({"examinations": [attended("hearing_test", "2024-06-01")]}))
-	found.holds == false
+	found.after == "2024-06-01"
+	found.within == "results_time"
+	found.by == null
 	found.note == "the miner was tested on 2024-06-01, and no audiogram of that day is on file"
 }
 
@@ -73,4 +76,10 @@ test_never_tested if {
 	audiogram_records_kept.obligations == set() with input as untested
 	audiogram_records_kept.not_owed == {"the records speak of no audiogram"} with input as untested
 	count(audiogram_records_kept.not_owed) == 0 with input as worker({})
+}
+
+test_never_in_the_program if {
+	outside := worker({"enrolled": [], "missing_audiograms": [lost]})
+	audiogram_records_kept.obligations == set() with input as outside
+	audiogram_records_kept.not_owed == {"the miner has never been in the program"} with input as outside
 }

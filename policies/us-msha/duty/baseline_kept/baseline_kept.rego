@@ -3,7 +3,7 @@
 # description: >-
 #   A change of enrolment status is no reason for a new baseline or revised baseline. The operator may establish a new
 #   one only if the miner is away from the mine for more than 6 consecutive months; the decision is recorded as a
-#   baseline revision with the result new_baseline.
+#   baseline revision with the result new_baseline. The absence lies between the baseline that stood and the new one.
 # custom:
 #   cite: 30 CFR 62.170(a)(3)
 #   subject: worker
@@ -33,4 +33,17 @@ new_baselines := {{"date": marked.date, "ref": marked.ref} | some marked in inpu
 	revision.result == "new_baseline"
 }
 
-longest_absence(day) := max(array.concat([0], [absence.months | some absence in input.absences; absence.to <= day]))
+# An absence before the baseline that was replaced is no reason to replace it.
+longest_absence(day) := max(array.concat([0], [absence.months |
+	some absence in input.absences
+	absence.to <= day
+	every earlier in established { not between(earlier, absence.to, day) }
+]))
+
+# Days on which a baseline was established: the first one, and those that were set anew.
+established := {set_anew.date | some set_anew in new_baselines} | {input.baseline.date | input.baseline != null}
+
+between(earlier, back, day) if {
+	earlier >= back
+	earlier < day
+}

@@ -9,7 +9,7 @@ marked := {"date": "2024-03-05", "ref": "audiogram/a3"}
 
 revision(result) := {"date": "2024-03-06", "ref": "follow_up/1", "result": result}
 
-worker(marks, revisions, absences) := {"marked_later": marks, "revisions": revisions, "absences": absences}
+worker(marks, revisions, absences) := {"baseline": {"date": "2020-03-05"}, "marked_later": marks, "revisions": revisions, "absences": absences}
 
 value(dossier) := o.value if some o in baseline_kept.obligations with input as dossier
 
@@ -34,4 +34,12 @@ test_other_revisions_are_another_matter if {
 		count(baseline_kept.not_owed) == 1 with input as dossier
 	}
 	count(baseline_kept.not_owed) == 0 with input as worker([marked], [], [])
+}
+
+test_absence_before_the_baseline_that_was_replaced_does_not_count if {
+	value(worker([marked], [], [away("2020-03-05", 7)])) == 0
+	value(worker([marked], [], [away("2020-03-06", 7)])) == 7
+	second := {"date": "2025-03-05", "ref": "audiogram/a4"}
+	set_twice := worker([marked, second], [], [away("2023-09-01", 7)])
+	{[o.key, o.value] | some o in baseline_kept.obligations} == {["2024-03-05", 7], ["2025-03-05", 0]} with input as set_twice
 }

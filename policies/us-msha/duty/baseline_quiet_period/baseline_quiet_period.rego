@@ -41,7 +41,12 @@ obligations contains {
 asked_of_the_baseline if {
 	input.baseline != null
 	input.baseline.in_program
+	not before_the_law
 }
+
+before_the_law if input.baseline.date < data.parameters.quiet_period.values[0].from
+
+not_owed contains "the baseline is from before the law began" if before_the_law
 
 protectors_instead if input.baseline.quiet_by_protectors == true
 

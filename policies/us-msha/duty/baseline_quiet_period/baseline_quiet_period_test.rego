@@ -46,3 +46,11 @@ test_never_in_the_program if {
 	duty.obligations == set() with input as worker(2, null, false)
 	duty.not_owed == {"the miner has never been in the program"} with input as worker(2, null, false)
 }
+
+test_baseline_from_before_the_law_began if {
+	before := {"baseline": object.union(worker(null, null, true).baseline, {"date": "2000-09-12"})}
+	duty.obligations == set() with input as before
+	duty.not_owed == {"the baseline is from before the law began"} with input as before
+	first_day := {"baseline": object.union(worker(2, null, true).baseline, {"date": "2000-09-13"})}
+	obligation(first_day).value == 2
+}

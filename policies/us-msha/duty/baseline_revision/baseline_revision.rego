@@ -56,17 +56,36 @@ obligations contains {
 	some judged in judgements
 }
 
+# It was so judged, and by whom is not known. Where the next test shows the shift again, that question is put instead.
+obligations contains {
+	"key": sprintf("judged/%s", [judged.date]),
+	"holds": null,
+	"note": sprintf("the shift was judged permanent, or hearing improved, on %s, and it is not known by whom", [judged.date]),
+	"missing": ["the profession of who judged it"],
+	"because": [judged.ref],
+} if {
+	some judged in of_unknown
+}
+
 # A new baseline after a long absence is the matter of baseline-kept.
 revisions := [revision | some revision in input.revisions; not set_anew(revision)]
 
 set_anew(revision) if revision.result == "new_baseline"
 
-judgements := {judged |
+judged_by_anybody := {judged |
 	some test in input.audiograms
 	some judged in test.follow_ups
 	judged.kind in {"persistence_opinion", "medical_opinion"}
 	judged.result in {"persistent", "improved"}
-	judged.by_is in data.measures.hearing.professionals
+}
+
+judgements := {judged | some judged in judged_by_anybody; judged.by_is in data.measures.hearing.professionals}
+
+of_unknown := {judged |
+	some judged in judged_by_anybody
+	judged.by_is == null
+	count(input.persistent) == 0
+	revision_since(judged.date) == null
 }
 
 revision_since(day) := later[0] if {
@@ -116,4 +135,5 @@ not_owed contains "no baseline was moved, and nothing raises the question" if {
 	count(revisions) == 0
 	count(input.persistent) == 0
 	count(judgements) == 0
+	count(of_unknown) == 0
 }

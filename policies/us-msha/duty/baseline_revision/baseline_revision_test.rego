@@ -90,7 +90,7 @@ test_judged_permanent_and_revised if {
 }
 
 test_other_judgements_ask_for_nothing if {
-	every dossier in [judged("not_persistent", "physician"), judged("persistent", "technician"), judged("persistent", null)] {
+	every dossier in [judged("not_persistent", "physician"), judged("persistent", "technician")] {
 		baseline_revision.obligations == set() with input as dossier
 		count(baseline_revision.not_owed) == 1 with input as dossier
 	}
@@ -106,4 +106,15 @@ test_nothing_raises_the_question if {
 	count(baseline_revision.not_owed) == 0 with input as revised({})
 	count(baseline_revision.not_owed) == 0 with input as shown_again(null)
 	count(baseline_revision.not_owed) == 0 with input as judged("persistent", "physician")
+}
+
+test_judged_by_who_is_not_known if {
+	unknown := judged("persistent", null)
+	found := obligation(unknown)
+	found.holds == null
+	found.key == "judged/2024-04-20"
+	found.missing == ["the profession of who judged it"]
+	count(baseline_revision.not_owed) == 0 with input as unknown
+	obligation(object.union(unknown, {"revisions": [revision]})).key == "revision/2024-05-01/left"
+	"ask" in object.keys(obligation(object.union(unknown, {"persistent": shown_again(null).persistent})))
 }

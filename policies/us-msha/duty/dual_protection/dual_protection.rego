@@ -17,7 +17,10 @@ package duty.dual_protection
 import data.common
 import rego.v2
 
-obligations contains object.union(verdict, {"because": common.refs([input.protection])}) if owed
+obligations contains object.union(verdict, {"because": [input.protection.ref]}) if {
+	owed
+	input.protection != null
+}
 
 obligations contains {
 	"holds": null,
@@ -33,6 +36,11 @@ not_owed contains "exposure is not above the dual hearing protection level now" 
 	count(not_known) == 0
 }
 
+not_owed contains "no protector at hand, which is a finding of its own" if {
+	owed
+	input.protection == null
+}
+
 owed if common.any_current(input.exposed.dual)
 
 # Of a miner who is not known to be in the program, enrolment tells.
@@ -42,9 +50,7 @@ not_known := [stretch.reason |
 	common.covers(stretch, input.as_of)
 ]
 
-verdict := {"holds": false, "note": "exposure is above the dual hearing protection level, and no protector is at hand"} if {
-	input.protection == null
-} else := {"holds": true, "note": "an ear plug and an ear muff are at hand"} if {
+verdict := {"holds": true, "note": "an ear plug and an ear muff are at hand"} if {
 	"dual" in input.protection.types
 } else := {"holds": true, "note": "an ear plug and an ear muff are at hand"} if {
 	count(at_hand({"formable", "premolded", "custom"})) > 0

@@ -36,7 +36,10 @@ test_one_of_them_only if {
 	o.because == ["protector_issue/1"]
 }
 
-test_nothing_at_hand if holds(worker) == {false}
+test_nothing_at_hand if {
+	holds(worker) == set()
+	dual_protection.not_owed == {"no protector at hand, which is a finding of its own"} with input as worker
+}
 
 test_type_not_recorded if holds(with_types(["earmuff", null])) == {null}
 
@@ -59,5 +62,5 @@ test_not_above if {
 	quiet := object.union(worker, {"exposed": {"dual": [formerly]}})
 	holds(quiet) == set()
 	count(dual_protection.not_owed) == 1 with input as quiet
-	count(dual_protection.not_owed) == 0 with input as worker
+	count(dual_protection.not_owed) == 0 with input as with_types(["dual"])
 }

@@ -25,7 +25,7 @@ obligations contains object.union(verdict(test), {
 	"facts": {"ears": new_ears(test)},
 	"health": test.hearing,
 }) if {
-	some test in standing_tests
+	some test in showing
 	count(new_ears(test)) > 0
 }
 
@@ -38,15 +38,13 @@ obligations contains {
 	"health": test.hearing,
 	"because": [test.ref],
 } if {
-	some test in standing_tests
+	some test in unclear
 	undecided(test)
 }
 
 not_owed contains "no audiogram in the program shows a reportable hearing loss" if {
-	every test in standing_tests {
-		count(new_ears(test)) == 0
-		not undecided(test)
-	}
+	every test in showing { count(new_ears(test)) == 0 }
+	every test in unclear { not undecided(test) }
 }
 
 # Tests that are compared with the baseline; a retest in time stands in for its test, and a test that became the new
@@ -60,21 +58,28 @@ standing_tests := [test |
 
 set_anew := {revision.audiogram | some revision in input.revisions; revision.result == "new_baseline"}
 
+showing := [test | some test in standing_tests; test.schemes.reportable[_] == true]
+
+unclear := [test | some test in standing_tests; test.schemes.reportable[_] == null]
+
 shown(test) := [ear | some ear in ["left", "right"]; test.schemes.reportable[ear] == true]
 
 # Ears that no earlier test shows, unless that loss was found not to be due to noise at work.
 new_ears(test) := [ear | some ear in shown(test); not shown_before(ear, test)]
 
 shown_before(ear, test) if {
-	some earlier in standing_tests
+	some earlier in showing
 	earlier.date < test.date
 	ear in shown(earlier)
 	not_work_related(earlier) == null
 }
 
+# An ear whose loss an earlier test shows is not asked about again.
 undecided(test) if {
 	count(new_ears(test)) == 0
-	null in {test.schemes.reportable.left, test.schemes.reportable.right}
+	some ear in ["left", "right"]
+	test.schemes.reportable[ear] == null
+	not shown_before(ear, test)
 }
 
 lacking(test) := test.cannot_compare if {

@@ -110,3 +110,10 @@ test_no_loss if {
 	count(hearing_loss_reported.not_owed) == 1 with input as worker([])
 	count(hearing_loss_reported.not_owed) == 0 with input as worker([loss({})])
 }
+
+test_ear_that_was_shown_before_is_not_asked_about if {
+	again := worker([loss({}), audiogram("a3", "2025-03-05", null, false)])
+	{o.key | some o in hearing_loss_reported.obligations} == {"a2"} with input as again
+	other_ear := worker([loss({}), audiogram("a3", "2025-03-05", false, null)])
+	{o.key | some o in hearing_loss_reported.obligations} == {"a2", "a3"} with input as other_ear
+}

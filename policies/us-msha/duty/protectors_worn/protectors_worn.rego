@@ -104,7 +104,14 @@ limit_not_known := [stretch.reason |
 
 in_program if common.any_current(input.enrolled)
 
-waiting := [spell | some spell in input.enrolled; waits(spell); not declined(spell)]
+waiting := [spell | some spell in input.enrolled; waits(spell); not declined(spell); not compulsory_throughout(spell)]
+
+# Above the permissible exposure level since it began: that wear is compulsory is said already.
+compulsory_throughout(spell) if {
+	spell.current == true
+	some loud in above_limit
+	loud.from <= spell.from
+}
 
 waits(spell) if spell.baseline == null
 

@@ -115,3 +115,11 @@ test_no_longer_above if {
 	holds(past) == set()
 	count(reasons(past)) == 1
 }
+
+waiting_and_loud_from(day) := object.union(waiting, {"exposed": {"limit": [since(day)]}})
+
+test_waiting_is_not_said_beside_wear_that_is_compulsory_throughout if {
+	waits(waiting_and_loud_from("2024-01-01")) == set()
+	holds(waiting_and_loud_from("2024-01-01")) == {null}
+	waits(waiting_and_loud_from("2024-01-02")) == {"no baseline/2024-01-01"}
+}

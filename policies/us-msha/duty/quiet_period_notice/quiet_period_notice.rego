@@ -22,7 +22,12 @@ obligations contains object.union(verdict, {
 }) if {
 	input.baseline != null
 	input.baseline.in_program
+	not before_the_law
 }
+
+before_the_law if input.baseline.date < data.parameters.quiet_period.values[0].from
+
+not_owed contains "the baseline is from before the law began" if before_the_law
 
 verdict := {"holds": true, "note": "the miner was told before the test"} if {
 	input.baseline.quiet_notice != null

@@ -52,3 +52,9 @@ test_never_in_the_program if {
 	duty.obligations == set() with input as worker({"in_program": false})
 	duty.not_owed == {"the miner has never been in the program"} with input as worker({"in_program": false})
 }
+
+test_baseline_from_before_the_law_began if {
+	duty.obligations == set() with input as worker({"date": "2000-09-12"})
+	duty.not_owed == {"the baseline is from before the law began"} with input as worker({"date": "2000-09-12"})
+	obligation(worker({"date": "2000-09-13"})).holds == false
+}

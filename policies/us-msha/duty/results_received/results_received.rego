@@ -14,6 +14,19 @@ package duty.results_received
 
 import rego.v2
 
+# The interpretation is there, so that the results came in; only the day is not on record.
+obligations contains {
+	"key": test.id,
+	"holds": null,
+	"on": test.date,
+	"note": sprintf("the audiogram of %s was evaluated, and it is not known when the results were received", [test.date]),
+	"missing": ["the day on which the result was received"],
+	"because": [test.ref],
+} if {
+	some test in tests
+	day_only(test)
+}
+
 obligations contains {
 	"key": test.id,
 	"after": test.date,
@@ -23,10 +36,24 @@ obligations contains {
 	"because": [test.ref],
 } if {
 	some test in tests
+	not day_only(test)
 }
 
-# Invalid ones, too: that they are is the interpretation.
-tests := [test | some test in input.audiograms; under_program(test)]
+day_only(test) if {
+	test.received_on == null
+	evaluated(test)
+}
+
+evaluated(test) if test.reviewed_on != null
+
+evaluated(test) if test.reviewer_named == true
+
+# Invalid ones, too: that they are is the interpretation. Of tests from before the law began nothing is owed.
+tests := [test |
+	some test in input.audiograms
+	under_program(test)
+	test.date >= data.parameters.results_time.values[0].from
+]
 
 under_program(test) if test.in_program
 

@@ -12,6 +12,8 @@ worker(change) := {"audiograms": [object.union(
 		"in_program": true,
 		"invalidated": false,
 		"received_on": null,
+		"reviewed_on": null,
+		"reviewer_named": false,
 	},
 	change,
 )]}
@@ -38,4 +40,18 @@ test_no_test_under_the_program if {
 		count(results_received.not_owed) == 1 with input as worker(change)
 	}
 	count(results_received.not_owed) == 0 with input as worker({})
+}
+
+test_evaluated_and_day_of_receipt_not_recorded if {
+	every change in [{"reviewed_on": "2024-03-10"}, {"reviewer_named": true}] {
+		found := obligation(worker(change))
+		found.holds == null
+		found.missing == ["the day on which the result was received"]
+	}
+}
+
+test_test_from_before_the_law_began if {
+	count(results_received.obligations) == 0 with input as worker({"date": "2000-09-12"})
+	count(results_received.not_owed) == 1 with input as worker({"date": "2000-09-12"})
+	obligation(worker({"date": "2000-09-13"})).by == null
 }

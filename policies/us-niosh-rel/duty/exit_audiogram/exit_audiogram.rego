@@ -3,6 +3,7 @@
 # description: >-
 #   When a worker leaves the job, or work at or above the REL, an exit audiogram is made before, after at least 12 hours
 #   of quiet. A test made for another purpose is not taken for it; a test that is known by its outcome only counts.
+#   Where the exposure of the following days is not known, it is not known whether it ended.
 # custom:
 #   cite: NIOSH 98-126, 1.6.5 (from memory)
 #   subject: worker
@@ -13,6 +14,7 @@
 #     Invite the worker for the exit audiogram even now, and enter it with its purpose and the hours of quiet.
 package duty.exit_audiogram
 
+import data.common
 import rego.v2
 
 obligations contains {
@@ -22,6 +24,17 @@ obligations contains {
 	"note": sprintf("%s was the first day no longer at or above the REL", [stretch.to]),
 } if {
 	some stretch in ended
+	not left_open(stretch)
+}
+
+obligations contains {
+	"key": stretch.to,
+	"holds": null,
+	"note": sprintf("exposure is not known from %s on, so it is not known whether work at or above the REL ended", [stretch.to]),
+	"missing": ["the exposure from that day on"],
+} if {
+	some stretch in ended
+	left_open(stretch)
 }
 
 obligations contains {
@@ -39,6 +52,13 @@ obligations contains {
 }
 
 ended := [stretch | some stretch in input.enrolled; stretch.to != null]
+
+# Without an exit test nothing says that the stretch ended where the exposure of the following day is not known.
+left_open(stretch) if {
+	found(stretch) == null
+	some open in input.exposure_unknown.rel
+	common.covers(open, stretch.to)
+}
 
 # The first exit test since the stretch began and before the next one begins.
 found(stretch) := tests[0] if {

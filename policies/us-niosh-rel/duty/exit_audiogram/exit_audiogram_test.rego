@@ -9,7 +9,7 @@ now := {"from": "2025-01-01", "to": null, "current": true}
 
 test(date, change) := object.union({"date": date, "ref": concat("/", ["audiogram", date]), "purpose": "exit", "invalidated": false, "quiet_hours": 14}, change)
 
-worker(stretches, tests, examinations) := {"enrolled": stretches, "audiograms": tests, "examinations": examinations}
+worker(stretches, tests, examinations) := {"enrolled": stretches, "audiograms": tests, "examinations": examinations, "exposure_unknown": {"rel": []}}
 
 by_key(w) := found if found := {o.key: o | some o in duty.obligations} with input as w
 
@@ -53,6 +53,17 @@ test_what_does_not_count[what] if {
 
 test_after_the_last_day_is_handed_over if {
 	by_key(worker([past], [test("2024-07-01", {})], []))["2024-07-01"].by.date == "2024-07-01"
+}
+
+test_exposure_not_known_afterwards if {
+	open := {"exposure_unknown": {"rel": [{"from": "2024-07-01", "to": null}]}}
+	found := by_key(object.union(worker([past], [], []), open))
+	object.keys(found) == {"2024-07-01"}
+	found["2024-07-01"].holds == null
+	found["2024-07-01"].missing == ["the exposure from that day on"]
+	by_key(object.union(worker([past], [test("2024-06-30", {})], []), open))["2024-07-01"].by.date == "2024-06-30"
+	later := {"exposure_unknown": {"rel": [{"from": "2024-07-02", "to": null}]}}
+	by_key(object.union(worker([past], [], []), later))["2024-07-01"].by == null
 }
 
 test_not_owed if {

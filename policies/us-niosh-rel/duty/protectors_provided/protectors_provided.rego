@@ -22,7 +22,7 @@ obligations contains {
 	"by": spell.protector,
 	"during": spell,
 	"note": sprintf("exposure at or above the REL began on %s, so protectors are owed", [spell.from]),
-	"because": [exposure.ref | some exposure in input.exposures; exposure.from == spell.from],
+	"because": [exposure.ref | some exposure in input.exposures; exposure.from == spell.from; exposure.ref != null],
 } if {
 	some spell in in_program_now
 	not used_up(spell)

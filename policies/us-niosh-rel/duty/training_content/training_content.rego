@@ -31,6 +31,7 @@ verdict := {
 	"note": sprintf("the latest training, of %s, does not say what it was about", [input.training.date]),
 } if {
 	input.training.topics_unrecorded
+	count(left_out) > 0
 } else := {
 	"holds": null,
 	"missing": ["the topics that are recommended on that day"],

@@ -38,6 +38,7 @@ test_topics_not_recorded if {
 	found := obligation(worker({"training": {"topics": [], "topics_unrecorded": true}}))
 	found.holds == null
 	found.missing == ["topics of the training"]
+	obligation(worker({"training": {"topics_unrecorded": true}})).holds == true
 }
 
 test_before_the_recommendation if {
