@@ -16,6 +16,7 @@ type known struct {
 	own    bool    // whether it is the worker's own
 	note   string  // how it was taken
 	reason string  // why it is not known exactly, if more is to be said than that it lies within bounds
+	quiet  bool    // whether nothing suggests noise, by the word of the group's record, and nothing was measured or changed
 	needed bool    // whether a highest value that is not known must be known, since the noise holds impulses
 }
 
@@ -185,6 +186,9 @@ func (h *history) knownOn(channel int, day Date) known {
 			}
 		}
 		return known{bounds: d, src: src, note: "taken backwards from the first measurement, of " + r.day.String()}
+	}
+	if h.at.suspected == record.No && len(h.results)+len(h.events) == 0 {
+		return known{bounds: unknown, quiet: true, note: "never measured; the group's record says that nothing suggests noise"}
 	}
 	return known{bounds: unknown, reason: h.c.whyNone(h.results, channel, h.c.shortOf(h.results, channel, last.day, h.c.asOf))}
 }

@@ -80,13 +80,14 @@ type workplace struct {
 	days  record.Number // worked in a week
 
 	impulsive record.Answer
+	suspected record.Answer // of noise
 }
 
 func workplaceOf(id string, g *record.Group) workplace {
 	if g == nil {
 		return workplace{group: id}
 	}
-	return workplace{id, g.ShiftMinutes, g.DaysPerWeek, g.Impulsive}
+	return workplace{id, g.ShiftMinutes, g.DaysPerWeek, g.Impulsive, g.SuspectedNoisy}
 }
 
 // reading is what one result tells on one channel.

@@ -86,6 +86,10 @@ func (b *Builder) reaches(level string, on []known, day Date) standing {
 		case record.No:
 			decided++
 		case record.Unanswered:
+			if k.quiet && !b.channels.isHighest(i) { // monitoring begins where something suggests noise
+				decided++
+				continue
+			}
 			if b.channels.isHighest(i) && !k.needed && len(parts) > 1 {
 				continue
 			}

@@ -223,3 +223,28 @@ func TestLevelAsADose(t *testing.T) {
 	part.FullShift = record.No
 	assert.Len(t, open(a.judge(t, inGroup(nil, part)...).worker().ExposureUnknown["action"]), 1)
 }
+
+// A group of which its own record says that nothing suggests noise, and in which nothing was measured or changed, is at
+// no level: monitoring begins where information suggests noise (29 CFR 1910.95(d)(1)).
+func TestNothingSuggestsNoise(t *testing.T) {
+	said := func(a record.Answer) func(*record.Group) {
+		return func(g *record.Group) { g.SuspectedNoisy = a }
+	}
+	for name, c := range map[string]struct {
+		records         []record.Record
+		exposed, unsure int
+	}{
+		"said so":                    {inGroup(said(record.No)), 0, 0},
+		"not said":                   {inGroup(said(record.Unanswered)), 0, 1},
+		"the contrary said":          {inGroup(said(record.Yes)), 0, 1},
+		"said, but measured":         {inGroup(said(record.No), measured("m1", "g1", "2019-11-15", 75)), 1, 0},
+		"said, and measured in vain": {inGroup(said(record.No), but(measured("m1", "g1", "2019-11-15", 75), func(m *record.Measurement) { m.ExchangeDB = record.Num(3) })), 0, 1},
+		"said, but changed":          {inGroup(said(record.No), changed("c1", "2021-01-01", "yes")), 0, 1},
+	} {
+		w := judge(t, "2024-01-01", c.records...).worker()
+		assert.Len(t, w.Exposed["action"], c.exposed, name)
+		assert.Len(t, open(w.ExposureUnknown["action"]), c.unsure, name)
+	}
+	w := judge(t, "2024-01-01", inGroup(said(record.No))...).worker()
+	assert.Equal(t, "never measured; the group's record says that nothing suggests noise", w.Exposures[0].Note)
+}
