@@ -15,7 +15,7 @@ package duty.audiogram_evaluated
 
 import rego.v2
 
-obligations contains object.union(verdict(test), {
+obligations contains object.union(verdict(test.date, test.ref, test.reviewed_on, test.reviewer_is, test.reviewer_named), {
 	"key": test.id,
 	"health": test.hearing,
 	"because": [test.ref],
@@ -27,44 +27,46 @@ obligations contains object.union(verdict(test), {
 program_tests := [test |
 	some test in input.audiograms
 	test.in_program
-	test.date >= data.parameters.results_time.values[0].from
+	test.date >= first_day
 ]
+
+first_day := data.parameters.results_time.values[0].from
 
 evaluators := {"physician", "otolaryngologist", "audiologist", "technician"}
 
-verdict(test) := {
-	"after": test.date,
+verdict(date, ref, reviewed_on, reviewer_is, reviewer_named) := {
+	"after": date,
 	"within": "results_time",
-	"by": {"date": test.reviewed_on, "ref": test.ref},
+	"by": {"date": reviewed_on, "ref": ref},
 } if {
-	test.reviewed_on != null
-	test.reviewer_is in evaluators
+	reviewed_on != null
+	reviewer_is in evaluators
 } else := {
-	"after": test.date,
+	"after": date,
 	"within": "results_time",
 	"by": null,
-	"note": sprintf("no evaluation of the audiogram of %s is on record", [test.date]),
+	"note": sprintf("no evaluation of the audiogram of %s is on record", [date]),
 } if {
-	test.reviewed_on == null
-	test.reviewer_named == false
+	reviewed_on == null
+	reviewer_named == false
 } else := {
 	"holds": null,
-	"on": test.date,
-	"note": sprintf("an evaluator of the audiogram of %s is on record, and no day", [test.date]),
+	"on": date,
+	"note": sprintf("an evaluator of the audiogram of %s is on record, and no day", [date]),
 	"missing": ["the day of the evaluation"],
 } if {
-	test.reviewed_on == null
+	reviewed_on == null
 } else := {
 	"holds": null,
-	"on": test.date,
-	"note": sprintf("it is not known who evaluated the audiogram of %s", [test.date]),
+	"on": date,
+	"note": sprintf("it is not known who evaluated the audiogram of %s", [date]),
 	"missing": ["the profession of who evaluated it"],
 } if {
-	test.reviewer_is == null
+	reviewer_is == null
 } else := {
 	"holds": false,
-	"on": test.date,
-	"note": sprintf("who evaluated the audiogram of %s is neither physician, audiologist nor technician", [test.date]),
+	"on": date,
+	"note": sprintf("who evaluated the audiogram of %s is neither physician, audiologist nor technician", [date]),
 }
 
 not_owed contains "there is no audiogram under the program" if count(program_tests) == 0

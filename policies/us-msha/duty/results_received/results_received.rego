@@ -24,46 +24,48 @@ obligations contains {
 	"because": [test.ref],
 } if {
 	some test in tests
-	day_only(test)
+	day_only(test.received_on, test.reviewed_on, test.reviewer_named)
 }
 
 obligations contains {
 	"key": test.id,
 	"after": test.date,
 	"within": "results_time",
-	"by": received(test),
+	"by": received(test.received_on, test.ref),
 	"note": sprintf("results of the audiogram of %s", [test.date]),
 	"because": [test.ref],
 } if {
 	some test in tests
-	not day_only(test)
+	not day_only(test.received_on, test.reviewed_on, test.reviewer_named)
 }
 
-day_only(test) if {
-	test.received_on == null
-	evaluated(test)
+day_only(received_on, reviewed_on, reviewer_named) if {
+	received_on == null
+	evaluated(reviewed_on, reviewer_named)
 }
 
-evaluated(test) if test.reviewed_on != null
+evaluated(reviewed_on, _) if reviewed_on != null
 
-evaluated(test) if test.reviewer_named == true
+evaluated(_, reviewer_named) if reviewer_named == true
 
 # Invalid ones, too: that they are is the interpretation. Of tests from before the law began nothing is owed.
 tests := [test |
 	some test in input.audiograms
-	under_program(test)
-	test.date >= data.parameters.results_time.values[0].from
+	under_program(test.in_program, test.invalidated, test.enrolled)
+	test.date >= first_day
 ]
 
-under_program(test) if test.in_program
+first_day := data.parameters.results_time.values[0].from
 
-under_program(test) if {
-	test.invalidated
-	test.enrolled
+under_program(in_program, _, _) if in_program
+
+under_program(_, invalidated, enrolled) if {
+	invalidated
+	enrolled
 }
 
-received(test) := {"date": test.received_on, "ref": test.ref} if {
-	test.received_on != null
+received(day, ref) := {"date": day, "ref": ref} if {
+	day != null
 } else := null
 
 not_owed contains "there is no audiogram under the program" if count(tests) == 0
