@@ -234,12 +234,16 @@ func TestNothingSuggestsNoise(t *testing.T) {
 		records         []record.Record
 		exposed, unsure int
 	}{
-		"said so":                    {inGroup(said(record.No)), 0, 0},
-		"not said":                   {inGroup(said(record.Unanswered)), 0, 1},
-		"the contrary said":          {inGroup(said(record.Yes)), 0, 1},
-		"said, but measured":         {inGroup(said(record.No), measured("m1", "g1", "2019-11-15", 75)), 1, 0},
-		"said, and measured in vain": {inGroup(said(record.No), but(measured("m1", "g1", "2019-11-15", 75), func(m *record.Measurement) { m.ExchangeDB = record.Num(3) })), 0, 1},
-		"said, but changed":          {inGroup(said(record.No), changed("c1", "2021-01-01", "yes")), 0, 1},
+		"said so":                                   {inGroup(said(record.No)), 0, 0},
+		"not said":                                  {inGroup(said(record.Unanswered)), 0, 1},
+		"the contrary said":                         {inGroup(said(record.Yes)), 0, 1},
+		"said, but measured":                        {inGroup(said(record.No), measured("m1", "g1", "2019-11-15", 75)), 1, 0},
+		"said, and measured in vain":                {inGroup(said(record.No), but(measured("m1", "g1", "2019-11-15", 75), func(m *record.Measurement) { m.ExchangeDB = record.Num(3) })), 0, 1},
+		"said, but changed":                         {inGroup(said(record.No), changed("c1", "2021-01-01", "yes")), 0, 1},
+		"in a group not measured, too":              {inGroup(said(record.No), group("g2"), assigned("g2", "2020-01-01")), 0, 1},
+		"the other way round":                       {inGroup(nil, &record.Group{Group: "g2", Site: "s1", SuspectedNoisy: record.No}, assigned("g2", "2020-01-01")), 0, 1},
+		"and in a group that says so":               {inGroup(said(record.No), &record.Group{Group: "g2", Site: "s1", SuspectedNoisy: record.No}, assigned("g2", "2020-01-01")), 0, 0},
+		"said, but the worker was measured in vain": {inGroup(said(record.No), but(own("m1", "2021-01-01", 75), func(m *record.Measurement) { m.ExchangeDB = record.Num(3) })), 0, 1},
 	} {
 		w := judge(t, "2024-01-01", c.records...).worker()
 		assert.Len(t, w.Exposed["action"], c.exposed, name)

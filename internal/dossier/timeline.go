@@ -130,6 +130,7 @@ func (s *stretch) add(group string, on []known) {
 			k, other = other, a
 		}
 		k.bounds = higher(k.bounds, other.bounds)
+		k.quiet = k.quiet && other.quiet
 		switch {
 		case k.exact():
 			k.reason = ""
@@ -187,6 +188,7 @@ func (h *history) withOwn(channel int, k known, own []*result, day Date) known {
 		}
 	}
 	if src == nil {
+		k.quiet = k.quiet && len(own) == 0 // an own measurement suggests noise, also one that tells nothing
 		if k.src == nil && len(own) > 0 && !slices.ContainsFunc(own, func(r *result) bool { return r.usable(channel) }) {
 			k.reason = h.whyNoOwn(channel, k.reason, own, from)
 		}
